@@ -1,0 +1,87 @@
+// Starts a PostgreSQL cluster of the project's own and stops it when the last process that needed it is done.
+// Each user leaves a lease named after its process, so that two test runs side by side, or one that was killed,
+// neither stop a cluster under somebody else's feet nor leave it running for ever.
+import { execFile } from 'node:child_process';
+import { mkdirSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
+import path from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { promisify } from 'node:util';
+
+const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '..');
+const script = path.join(root, 'scripts/pg.sh');
+const run = promisify(execFile);
+
+/** @type {Record<'work' | 'test', Record<string, string>>} */
+const settings = {
+  work: {},
+  test: { PG_FAST: '1', PG_PORT: '54429', PG_DB: 'farlug_test' },
+};
+
+let taken = 0;
+
+/** @param {'work' | 'test'} kind */
+function environment(kind) {
+  const env = { ...process.env, ...settings[kind] };
+  if (kind === 'work') delete env.PG_FAST;
+  return env;
+}
+
+/**
+ * @param {'work' | 'test'} kind
+ * @param {string} command
+ */
+async function pg(kind, command) {
+  const env = environment(kind);
+  if (kind === 'test') env.PG_DIR = await testDirectory();
+  const { stdout, stderr } = await run('bash', [script, command], { env, cwd: root });
+  if (command === 'start' && stderr) process.stderr.write(stderr);
+  return stdout.trim();
+}
+
+// As root the server runs as user postgres, who cannot enter every home directory: the script knows where then.
+async function testDirectory() {
+  const { stdout } = await run('bash', [script, 'where'], { cwd: root, env: { ...process.env, PG_FAST: '' } });
+  return `${stdout.trim()}-test`;
+}
+
+/** @param {number} pid */
+function alive(pid) {
+  try {
+    process.kill(pid, 0);
+    return true;
+  } catch (error) {
+    return /** @type {NodeJS.ErrnoException} */ (error).code === 'EPERM';
+  }
+}
+
+/** @param {string} leases */
+function holders(leases) {
+  const names = readdirSync(leases);
+  const living = names.filter((name) => alive(Number.parseInt(name, 10)));
+  for (const name of names) if (!living.includes(name)) rmSync(path.join(leases, name), { force: true });
+  return { living: living.length, ever: names.length };
+}
+
+/**
+ * @param {'work' | 'test'} kind
+ * @returns {Promise<{ url: string, release: () => Promise<void> }>} the owner's URL, and how to say that it is no longer needed
+ */
+export async function useCluster(kind) {
+  const leases = path.join(root, '.data/leases', kind);
+  mkdirSync(leases, { recursive: true, mode: 0o755 });
+  const running = await pg(kind, 'status').then(
+    () => true,
+    () => false,
+  );
+  const startedByHand = running && holders(leases).ever === 0;
+  const lease = path.join(leases, `${process.pid}-${taken++}`);
+  if (!startedByHand) writeFileSync(lease, '');
+  const url = await pg(kind, 'start');
+  return {
+    url,
+    release: async () => {
+      rmSync(lease, { force: true });
+      if (!startedByHand && holders(leases).living === 0) await pg(kind, 'stop');
+    },
+  };
+}

@@ -1,0 +1,28 @@
+import { fileURLToPath } from 'node:url';
+import type { UserWorkspaceConfig } from 'vitest/config';
+
+type ProjectTest = NonNullable<UserWorkspaceConfig['test']>;
+
+const here = (file: string): string => fileURLToPath(new URL(file, import.meta.url));
+const deep = process.env.FARLUG_DEEP === '1';
+
+/** What every test project has in common; `own` says the rest and wins. */
+export function project(name: string, own: ProjectTest = {}): { test: ProjectTest } {
+  return {
+    test: {
+      name,
+      include: ['{src,test}/**/*.test.{ts,tsx}'],
+      env: { TZ: 'UTC' },
+      restoreMocks: true,
+      testTimeout: deep ? 600_000 : 30_000,
+      hookTimeout: 60_000,
+      ...own,
+      setupFiles: [here('./unexpected-console.ts'), ...[own.setupFiles ?? []].flat()],
+    },
+  };
+}
+
+/** A project whose tests use real PostgreSQL: the cluster runs before the first of them. */
+export function databaseProject(name: string, own: ProjectTest = {}): { test: ProjectTest } {
+  return project(name, { globalSetup: [here('./test-cluster.ts')], ...own });
+}
