@@ -1,0 +1,3 @@
+export * from './schema.ts';
+export * from './solution.ts';
+export * from './vocabulary.ts';

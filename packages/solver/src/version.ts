@@ -1,0 +1,1 @@
+export const SOLVER_VERSION = '0.1.0';
