@@ -40,7 +40,10 @@ async function pg(kind, command) {
 
 // As root the server runs as user postgres, who cannot enter every home directory: the script knows where then.
 async function testDirectory() {
-  const { stdout } = await run('bash', [script, 'where'], { cwd: root, env: { ...process.env, PG_FAST: '' } });
+  const { stdout } = await run('bash', [script, 'where'], {
+    cwd: root,
+    env: { ...process.env, PG_FAST: '' },
+  });
   return `${stdout.trim()}-test`;
 }
 

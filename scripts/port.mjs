@@ -1,0 +1,34 @@
+import { createServer } from 'node:net';
+
+export const defaultPort = 8440;
+
+/** @param {number} port */
+function listens(port) {
+  return new Promise((resolve) => {
+    const server = createServer();
+    server.once('error', (/** @type {NodeJS.ErrnoException} */ error) => resolve(error.code));
+    server.listen(port, '127.0.0.1', () => server.close(() => resolve(undefined)));
+  });
+}
+
+/** @param {string | undefined} text the PORT variable */
+export function portNumber(text) {
+  return text === undefined || text === '' ? defaultPort : Number(text);
+}
+
+/**
+ * @param {string | undefined} text the PORT variable
+ * @returns {Promise<string | undefined>} what is wrong with it, in words, or nothing
+ */
+export async function portProblem(text) {
+  const port = portNumber(text);
+  if (!Number.isInteger(port) || port < 1 || port > 65535) {
+    return `PORT is "${text}": it must be a whole number from 1 to 65535.`;
+  }
+  const code = await listens(port);
+  if (code === undefined) return undefined;
+  if (code === 'EADDRINUSE') {
+    return `Port ${port} is already in use. Stop the program that uses it, or choose another: PORT=${port + 1} npm start`;
+  }
+  return `Port ${port} cannot be used (${code}). Choose another: PORT=${defaultPort} npm start`;
+}
