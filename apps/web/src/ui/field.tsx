@@ -1,0 +1,111 @@
+import { createContext, type ReactNode, use, useId } from 'react';
+import { cx } from './cx.ts';
+
+interface FieldWiring {
+  id: string;
+  describedBy: string | undefined;
+  invalid: boolean;
+  required: boolean;
+}
+const Wiring = createContext<FieldWiring | null>(null);
+
+/** What a control inside a `Field` spreads: its id, its description and whether it is wrong. */
+export function useFieldWiring(own?: string): {
+  id: string | undefined;
+  'aria-describedby': string | undefined;
+  'aria-invalid': true | undefined;
+  'aria-required': true | undefined;
+} {
+  const wiring = use(Wiring);
+  return {
+    id: own ?? wiring?.id,
+    'aria-describedby': wiring?.describedBy,
+    'aria-invalid': wiring?.invalid ? true : undefined,
+    'aria-required': wiring?.required ? true : undefined,
+  };
+}
+
+interface FieldProps {
+  label: ReactNode;
+  /** Unit or what may be typed; stays while the field is filled in. */
+  hint?: ReactNode;
+  /** What is wrong and what would be right. */
+  error?: string | null | undefined;
+  required?: boolean;
+  hideLabel?: boolean;
+  className?: string;
+  children: ReactNode;
+}
+
+export function Field({
+  label,
+  hint,
+  error,
+  required = false,
+  hideLabel = false,
+  className,
+  children,
+}: FieldProps) {
+  const id = useId();
+  const hintId = hint ? `${id}-hint` : undefined;
+  const errorId = error ? `${id}-error` : undefined;
+  const describedBy = [hintId, errorId].filter(Boolean).join(' ') || undefined;
+  return (
+    <Wiring value={{ id, describedBy, invalid: Boolean(error), required }}>
+      <div className={cx('min-w-0', className)}>
+        <label htmlFor={id} className={cx('mb-0.5 block text-label text-ink-soft', hideLabel && 'sr-only')}>
+          {label}
+        </label>
+        {children}
+        {error && (
+          <p id={errorId} className="mt-1 text-grid text-over" data-error>
+            <span aria-hidden="true">▲ </span>
+            {error}
+          </p>
+        )}
+        {hint && (
+          <p id={hintId} className="mt-1 text-label text-ink-soft">
+            {hint}
+          </p>
+        )}
+      </div>
+    </Wiring>
+  );
+}
+
+/** Several controls under one legend, as the limits of a class. */
+export function FieldGroup({
+  legend,
+  hint,
+  error,
+  children,
+  className,
+}: {
+  legend: ReactNode;
+  hint?: ReactNode;
+  error?: string | null | undefined;
+  children: ReactNode;
+  className?: string;
+}) {
+  const id = useId();
+  return (
+    <fieldset
+      className={cx('min-w-0', className)}
+      aria-describedby={cx(hint && `${id}-hint`, error && `${id}-error`) || undefined}
+    >
+      <legend className="mb-1 text-label text-ink-soft">{legend}</legend>
+      {children}
+      {error && (
+        <p id={`${id}-error`} className="mt-1 text-grid text-over" data-error>
+          <span aria-hidden="true">▲ </span>
+          {error}
+        </p>
+      )}
+      {hint && (
+        <p id={`${id}-hint`} className="mt-1 text-label text-ink-soft">
+          {hint}
+        </p>
+      )}
+    </fieldset>
+  );
+}

@@ -1,0 +1,15 @@
+import { useSyncExternalStore } from 'react';
+
+export const DESK = '(min-width: 50rem)';
+export const WIDE = '(min-width: 75rem)';
+
+export function useMedia(query: string): boolean {
+  return useSyncExternalStore(
+    (changed) => {
+      const list = window.matchMedia(query);
+      list.addEventListener('change', changed);
+      return () => list.removeEventListener('change', changed);
+    },
+    () => window.matchMedia(query).matches,
+  );
+}
