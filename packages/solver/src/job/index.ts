@@ -1,3 +1,4 @@
 export * from './schema.ts';
 export * from './solution.ts';
+export * from './systems.ts';
 export * from './vocabulary.ts';
