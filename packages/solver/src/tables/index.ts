@@ -1,0 +1,7 @@
+export * from './ampacity.ts';
+export * from './breakers.ts';
+export * from './grounding.ts';
+export * from './impedance.ts';
+export * from './motors.ts';
+export * from './size.ts';
+export * from './sources.ts';
