@@ -1,0 +1,73 @@
+import { inOrder, spacesOfCircuit } from '../job/index.ts';
+import type { JobRows, Row } from '../rows/index.ts';
+
+/** A circuit with everything that is its own. Runs go from the panel outward. */
+export interface CircuitParts {
+  circuit: Row<'circuit'>;
+  panel: Row<'panel'>;
+  breakers: Row<'breaker'>[];
+  runs: Row<'run'>[];
+  loads: Row<'load'>[];
+}
+
+export function allCircuitParts(rows: JobRows): Map<string, CircuitParts> {
+  const parts = new Map<string, CircuitParts>();
+  for (const circuit of rows.circuit.values()) {
+    const panel = rows.panel.get(circuit.panelId)!;
+    parts.set(circuit.id, { circuit, panel, breakers: [], runs: [], loads: [] });
+  }
+  for (const breaker of rows.breaker.values()) parts.get(breaker.circuitId)?.breakers.push(breaker);
+  for (const run of inOrder(rows.run.values())) parts.get(run.circuitId ?? '')?.runs.push(run);
+  for (const load of inOrder(rows.load.values())) parts.get(load.circuitId ?? '')?.loads.push(load);
+  for (const one of parts.values()) {
+    one.breakers.sort((a, b) => a.space - b.space || (a.half ?? '').localeCompare(b.half ?? ''));
+    one.runs = outward(one.runs, one.panel.busId);
+  }
+  return parts;
+}
+
+export function circuitParts(rows: JobRows, circuitId: string): CircuitParts | null {
+  const circuit = rows.circuit.get(circuitId);
+  const panel = circuit && rows.panel.get(circuit.panelId);
+  if (!circuit || !panel) return null;
+  const ofCircuit = <R extends { circuitId: string | null }>(list: Iterable<R>) =>
+    [...list].filter((row) => row.circuitId === circuitId);
+  return {
+    circuit,
+    panel,
+    breakers: ofCircuit(rows.breaker.values()).sort(
+      (a, b) => a.space - b.space || (a.half ?? '').localeCompare(b.half ?? ''),
+    ),
+    runs: outward(inOrder(ofCircuit(rows.run.values())), panel.busId),
+    loads: inOrder(ofCircuit(rows.load.values())),
+  };
+}
+
+/** Runs in the order in which they are met on the way out from `busId`; what is not connected comes last. */
+function outward(runs: readonly Row<'run'>[], busId: string): Row<'run'>[] {
+  if (runs.length < 2) return [...runs];
+  const left = new Set(runs);
+  const met: Row<'run'>[] = [];
+  const queue = [busId];
+  const seen = new Set(queue);
+  for (let bus = queue.shift(); bus !== undefined; bus = queue.shift())
+    for (const run of runs) {
+      if (!left.has(run) || (run.fromBusId !== bus && run.toBusId !== bus)) continue;
+      left.delete(run);
+      met.push(run);
+      const far = run.fromBusId === bus ? run.toBusId : run.fromBusId;
+      if (!seen.has(far)) queue.push(far);
+      seen.add(far);
+    }
+  return [...met, ...left];
+}
+
+export const spacesOf = (parts: Pick<CircuitParts, 'panel' | 'breakers'>): number[] =>
+  spacesOfCircuit(parts.panel.layout, parts.breakers);
+
+/** `LP-2-27`, `LP-2-2/4`, `LP-2-7a`; a circuit without a space goes by the code of its run or load. */
+export function circuitCode(parts: CircuitParts, panelCode: string): string {
+  const spaces = spacesOf(parts);
+  if (spaces.length > 0) return `${panelCode}-${spaces.join('/')}${parts.breakers[0]?.half ?? ''}`;
+  return parts.runs[0]?.code ?? parts.loads[0]?.code ?? panelCode;
+}
