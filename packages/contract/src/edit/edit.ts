@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { JOB_TABLE_NAMES, rowId } from '../rows/index.ts';
+import { JOB_TABLE_NAMES, line, rowId } from '../rows/index.ts';
 
 /**
  * Every change of a job is one edit. An operation inserts (`was` null), deletes (`set` null) or updates the
@@ -20,7 +20,7 @@ export type EditOp = z.output<typeof editOp>;
 export const edit = z.strictObject({
   editId: rowId,
   /** What it did, in words that complete "Undo: …", as `length of LP1-7`. */
-  label: z.string().min(1).max(200),
+  label: line(200, 1),
   ops: z.array(editOp).min(1).max(OPS_MAX),
 });
 export type Edit = z.output<typeof edit>;

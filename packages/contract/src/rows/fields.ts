@@ -17,14 +17,20 @@ const quantity = (units: readonly string[]) =>
 export const LENGTH_QUANTITY = quantity(LENGTH_UNITS_TYPED);
 export const LOAD_QUANTITY = quantity(POWER_UNITS_TYPED);
 
-export const rowId = z.uuid();
-export const code = z.string().min(1).max(CODE_MAX);
-export const text = z.string().max(TEXT_MAX).nullable();
-export const note = z.string().max(NOTE_MAX).nullable();
+/** In lower case, as the database gives it back. */
+export const rowId = z.uuid().lowercase('must be in lower case');
+
+const storable = (value: string) => !value.includes('\0') && !/\p{Surrogate}/u.test(value);
+/** Text that a database can hold: no NUL, no half of a surrogate pair. */
+export const line = (max: number, min = 0) =>
+  z.string().min(min).max(max).refine(storable, 'must not contain a character that is no text');
+export const code = line(CODE_MAX, 1);
+export const text = line(TEXT_MAX).nullable();
+export const note = line(NOTE_MAX).nullable();
 export const decimal = z.string().regex(DECIMAL, 'must be a decimal number, as 0.85');
 export const lengthQuantity = z.string().regex(LENGTH_QUANTITY, 'must be a length with its unit, as 120 ft');
 export const loadQuantity = z
   .string()
   .regex(LOAD_QUANTITY, 'must be a load with its unit, as 16 A, 1.5 kW or 0.75 hp');
 /** Fractional order key: rows are shown in the order of its bytes. */
-export const orderKey = z.string().min(1).max(64);
+export const orderKey = line(64, 1);

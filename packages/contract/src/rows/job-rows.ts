@@ -20,7 +20,7 @@ import {
   TRANSFORMER_CONNECTIONS,
 } from '@farlug/solver/job';
 import { z } from 'zod';
-import { code, decimal, lengthQuantity, loadQuantity, note, orderKey, rowId, text } from './fields.ts';
+import { code, decimal, lengthQuantity, line, loadQuantity, note, orderKey, rowId, text } from './fields.ts';
 
 /**
  * The rows of a job: everything that a person enters. Every row has an `id` made by whoever creates it;
@@ -48,7 +48,7 @@ export const OHMS_PER = ['1000ft', 'km'] as const;
 
 export const jobRow = z.strictObject({
   id: rowId,
-  name: z.string().min(1).max(400),
+  name: line(400, 1),
   address: text,
   building: text,
   area: text,
@@ -157,8 +157,8 @@ export const runRow = z.strictObject({
   temperature: decimal.nullable(),
   temperatureOperating: z.boolean(),
   ambient: decimal.nullable(),
-  insulation: z.int().nullable(),
-  terminals: z.int().nullable(),
+  insulation: z.int().min(1).max(250).nullable(),
+  terminals: z.int().min(1).max(250).nullable(),
   bundled: z.int().min(1).max(200).nullable(),
   method: z.enum(INSTALLATION_METHODS).nullable(),
   groundingSize: text,
@@ -232,7 +232,7 @@ export const conductorRow = z.strictObject({
   per: z.enum(OHMS_PER),
   temperature: decimal,
   ampacity: decimal.nullable(),
-  source: z.string().min(1).max(400),
+  source: line(400, 1),
 });
 
 export const readingRow = z.strictObject({
@@ -247,10 +247,10 @@ export const readingRow = z.strictObject({
 /** Text that was typed into a field and not understood: kept as typed; its row counts as left out. */
 export const draftRow = z.strictObject({
   id: rowId,
-  table: z.string().max(40),
+  table: line(40),
   rowId,
-  field: z.string().max(40),
-  text: z.string().max(400),
+  field: line(40),
+  text: line(400),
 });
 
 /** Every table that an edit may change, in an order in which inserts satisfy every reference. */
