@@ -1,15 +1,13 @@
 // Starts a PostgreSQL cluster of the project's own and stops it when the last process that needed it is done.
 // Each user leaves a lease named after its process, so that two test runs side by side, or one that was killed,
 // neither stop a cluster under somebody else's feet nor leave it running for ever.
-import { execFile } from 'node:child_process';
+import { spawn } from 'node:child_process';
 import { mkdirSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { promisify } from 'node:util';
 
 const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '..');
 const script = path.join(root, 'scripts/pg.sh');
-const run = promisify(execFile);
 
 /** @type {Record<'work' | 'test', Record<string, string>>} */
 const settings = {
@@ -27,24 +25,46 @@ function environment(kind) {
 }
 
 /**
+ * Runs the script outside the terminal's process group: Ctrl-C must not break off a start half way.
+ * @param {string} command
+ * @param {NodeJS.ProcessEnv} env
+ * @returns {Promise<string>}
+ */
+function run(command, env) {
+  return new Promise((resolve, reject) => {
+    const child = spawn('bash', [script, command], {
+      cwd: root,
+      env,
+      stdio: ['ignore', 'pipe', command === 'start' ? 'inherit' : 'ignore'],
+      detached: true,
+    });
+    let printed = '';
+    child.stdout?.on('data', (chunk) => {
+      printed += chunk;
+    });
+    child.once('error', reject);
+    child.once('close', (code) =>
+      code === 0
+        ? resolve(printed.trim())
+        : reject(new Error(`scripts/pg.sh ${command} ended with code ${code}`)),
+    );
+  });
+}
+
+/**
  * @param {'work' | 'test'} kind
  * @param {string} command
+ * @param {Record<string, string>} more
  */
-async function pg(kind, command) {
-  const env = environment(kind);
+async function pg(kind, command, more = {}) {
+  const env = { ...environment(kind), ...more };
   if (kind === 'test') env.PG_DIR = await testDirectory();
-  const { stdout, stderr } = await run('bash', [script, command], { env, cwd: root });
-  if (command === 'start' && stderr) process.stderr.write(stderr);
-  return stdout.trim();
+  return run(command, env);
 }
 
 // As root the server runs as user postgres, who cannot enter every home directory: the script knows where then.
 async function testDirectory() {
-  const { stdout } = await run('bash', [script, 'where'], {
-    cwd: root,
-    env: { ...process.env, PG_FAST: '' },
-  });
-  return `${stdout.trim()}-test`;
+  return `${await run('where', { ...process.env, PG_FAST: '' })}-test`;
 }
 
 /** @param {number} pid */
@@ -87,4 +107,13 @@ export async function useCluster(kind) {
       if (!startedByHand && holders(leases).living === 0) await pg(kind, 'stop');
     },
   };
+}
+
+/**
+ * An empty database in the running test cluster, for the journeys.
+ * @param {string} name
+ * @returns {Promise<string>} the owner's URL
+ */
+export function emptyTestDatabase(name) {
+  return pg('test', 'renew', { PG_DB: name });
 }

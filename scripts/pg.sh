@@ -5,6 +5,7 @@
 #   pg.sh stop      stop it                 pg.sh status   exit 0 when it runs, 3 when not
 #   pg.sh url       print the owner's URL   pg.sh destroy  stop it and delete its data
 #   pg.sh where     print the directory it lives in
+#   pg.sh renew     drop the database and create it empty (only with PG_FAST=1)
 #
 # Environment:
 #   PG_DIR    where the cluster lives (default .data/pg of the project)
@@ -158,8 +159,14 @@ case "${1:-}" in
     say "running on 127.0.0.1:$(port), data in $data" ;;
   url) running || die "not running"; url ;;
   where) echo "$dir" ;;
+  renew)
+    [ "${PG_FAST:-}" = 1 ] || die "renew is for the tests: it deletes the database"
+    running || die "not running"
+    ask "drop database if exists \"$database\" with (force)"
+    ask "create database \"$database\""
+    url ;;
   destroy)
     if running; then as_server "$bin/pg_ctl" -D "$data" -m immediate -w stop >/dev/null; fi
     rm -rf "$dir"; say destroyed ;;
-  *) die "usage: $0 start|stop|status|url|where|destroy" ;;
+  *) die "usage: $0 start|stop|status|url|where|renew|destroy" ;;
 esac
