@@ -1,3 +1,5 @@
+export { parseJob } from './parse.ts';
+export * from './run-ratings.ts';
 export * from './schema.ts';
 export * from './solution.ts';
 export * from './systems.ts';
