@@ -3,7 +3,7 @@ import type { Audit } from './audit.ts';
 
 const kebab = /^\.?[a-z0-9]+(?:-[a-z0-9]+)*(?:\.[a-z0-9]+(?:-[a-z0-9]+)*)*$/;
 const byCustom = /^(?:README|DEVELOPERS|LICENSE|Dockerfile|OFL)(?:[.-].+)?$|^__root$|^_journal\.json$/;
-const vague = /^(?:utils?|helpers?|common|misc|shared|stuff)(?:\.[a-z]+)?$/;
+const vague = /^(?:utils?|helpers?|misc|stuff)(?:\.[a-z]+)?$/;
 
 function problem(part: string): string | undefined {
   if (byCustom.test(part)) return undefined;

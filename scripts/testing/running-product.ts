@@ -1,0 +1,47 @@
+// Global setup of the journeys: the whole product, as `npm start` runs it, on an empty database in the tests' cluster.
+// The journeys read FARLUG_URL and CHROMIUM_PATH.
+import { mkdtempSync, rmSync } from 'node:fs';
+import { createServer } from 'node:net';
+import { tmpdir } from 'node:os';
+import path from 'node:path';
+import { ensureChromium } from '../chromium.ts';
+import { emptyTestDatabase, useCluster } from '../cluster.mjs';
+import { root } from '../gate/stage.ts';
+import { launch } from '../product/product.ts';
+import { keptSecrets } from '../product/secrets.ts';
+import { buildWeb } from '../product/web-build.ts';
+
+export default async function setup(): Promise<(() => Promise<void>) | undefined> {
+  process.env.CHROMIUM_PATH = ensureChromium();
+  if (process.env.FARLUG_URL) return undefined;
+  await buildWeb();
+  const cluster = await useCluster('test');
+  const directory = mkdtempSync(path.join(tmpdir(), 'farlug-journeys-'));
+  const product = await launch({
+    port: await freePort(),
+    ownerUrl: await emptyTestDatabase(`farlug_journeys_${process.pid}`),
+    secrets: keptSecrets(directory),
+    mailDirectory: path.join(directory, 'mail'),
+    log: path.join(root, '.data/test-logs/product.log'),
+  });
+  process.env.FARLUG_URL = product.address;
+  return async () => {
+    delete process.env.FARLUG_URL;
+    await product.stop();
+    await cluster.release();
+    rmSync(directory, { recursive: true, force: true });
+  };
+}
+
+function freePort(): Promise<number> {
+  return new Promise((resolve, reject) => {
+    const server = createServer();
+    server.once('error', reject);
+    server.listen(0, '127.0.0.1', () => {
+      const address = server.address();
+      server.close(() =>
+        typeof address === 'object' && address ? resolve(address.port) : reject(new Error('no port')),
+      );
+    });
+  });
+}
