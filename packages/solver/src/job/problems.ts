@@ -1,6 +1,9 @@
 import type { z } from 'zod';
 import type { Problem } from './solution.ts';
 
+/** What stands for the file as a whole. */
+const ROOT_PATH = 'job';
+
 /** `['runs', 3, 'length']` as `runs[3].length`. */
 export const pathOf = (keys: readonly PropertyKey[]): string =>
   keys.reduce<string>(
@@ -81,6 +84,6 @@ export function schemaProblems(
         path: pathOf([...keys, key]),
         message: 'is not a key of this format',
       }));
-    return [{ path: pathOf(keys), message: messageOf(issue, at(input, issue.path)) }];
+    return [{ path: pathOf(keys) || ROOT_PATH, message: messageOf(issue, at(input, issue.path)) }];
   });
 }
