@@ -8,7 +8,7 @@ type IsEmpty<T> = [T] extends [undefined]
   ? true
   : keyof T extends never
     ? true
-    : string extends keyof T
+    : T extends Record<string, never>
       ? true
       : false;
 type Part<Name extends string, S extends z.ZodType> =

@@ -1,0 +1,1 @@
+export { AccountPage as Component } from '../features/accounts/components/account-page.tsx';

@@ -1,0 +1,1 @@
+export { ForgottenPage as Component } from '../features/accounts/components/forgotten-page.tsx';

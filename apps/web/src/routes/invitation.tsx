@@ -1,0 +1,1 @@
+export { InvitationPage as Component } from '../features/accounts/components/invitation-page.tsx';

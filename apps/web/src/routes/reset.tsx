@@ -1,0 +1,1 @@
+export { ResetPage as Component } from '../features/accounts/components/reset-page.tsx';

@@ -1,0 +1,1 @@
+export { SignInPage as Component } from '../features/accounts/components/sign-in-page.tsx';

@@ -1,0 +1,1 @@
+export { SignUpPage as Component } from '../features/accounts/components/sign-up-page.tsx';
