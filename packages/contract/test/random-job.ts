@@ -47,9 +47,12 @@ const randomCircuit = fc.record({
     },
     { requiredKeys: ['size'] },
   ),
-  load: fc
-    .record({ key: fc.constantFrom('amps', 'va', 'watts', 'kw', 'hp'), value: tenths(1, 90) })
-    .map(({ key, value }) => ({ [key]: value })),
+  load: fc.oneof(
+    fc
+      .tuple(fc.constantFrom('amps', 'va', 'watts', 'kw'), tenths(1, 90))
+      .map(([key, value]) => ({ [key]: value })),
+    fc.constantFrom(0.5, 0.75, 1, 2).map((hp) => ({ hp })),
+  ),
   more: fc.record(
     {
       powerFactor: fc.constantFrom(0.85, 0.95, 1, null),

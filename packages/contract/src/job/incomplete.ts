@@ -6,6 +6,8 @@ export interface Missing {
   row: string;
   field: string | null;
   reason: string;
+  /** True of text that was not understood: in a circuit or its breaker it takes the whole circuit out. */
+  draft?: boolean;
 }
 
 /** Rows that cannot be in the job file yet, by what they say themselves. */
@@ -19,8 +21,14 @@ export function incompleteRows(rows: JobRows): Missing[] {
   for (const row of rows.transformer.values()) add('transformer', row.id, transformerGap(row));
   for (const row of rows.load.values()) add('load', row.id, loadGap(row));
   for (const [id, reason] of circuitGaps(rows)) add('circuit', id, ['load', reason]);
-  for (const draft of rows.draft.values())
-    add(draft.table as JobTable, draft.rowId, [draft.field, `“${draft.text}” is not understood.`]);
+  for (const { table, rowId, field, text } of rows.draft.values())
+    missing.push({
+      table: table as JobTable,
+      row: rowId,
+      field,
+      reason: `“${text}” is not understood.`,
+      draft: true,
+    });
   return missing.filter(({ table, row }) =>
     (rows[table] as ReadonlyMap<string, unknown> | undefined)?.has(row),
   );

@@ -1,8 +1,7 @@
-import type { Job, Problem } from '@farlug/solver/job';
+import { type Job, type Problem, parseJob, type Warning } from '@farlug/solver/job';
 import type { JobRows } from '../rows/index.ts';
 import { type Assembled, assembleJob } from './assemble-job.ts';
 import { assumedValues } from './assumed.ts';
-import { fileProblems } from './file-problems.ts';
 import { incompleteRows } from './incomplete.ts';
 import { type JobIndex, rowAtPath } from './job-index.ts';
 import { type Assumed, countLeftOut, type LeftOut } from './left-out.ts';
@@ -18,6 +17,8 @@ export interface JobFromRows {
   index: JobIndex;
   /** What is wrong with the job as a whole, and no row can be left out for; the job cannot be solved then. */
   problems: Problem[];
+  /** Remarks of the job file's checks; `rowAtPath(index, warning.at)` says which row each is about. */
+  warnings: Warning[];
 }
 
 /** Rows that the checks of a job file refuse are left out one round after the other; more rounds than this do not happen. */
@@ -32,13 +33,15 @@ export function jobFromRows(rows: JobRows): JobFromRows {
   for (const missing of incompleteRows(rows)) selection.leaveOut(missing);
   for (let round = 0; ; round++) {
     selection.leaveOutUnfed();
-    const assembled = assembleJob(rows, selection);
-    const problems = fileProblems(assembled.job);
-    const fresh = problems.filter(({ path, message }) => {
-      const at = rowAtPath(assembled.index, path);
+    const { job, index } = assembleJob(rows, selection);
+    const parsed = parseJob(job);
+    if (parsed.ok) return outcome(rows, selection, { job: parsed.job, index }, [], parsed.warnings);
+    const fresh = parsed.problems.filter(({ path, message }) => {
+      const at = rowAtPath(index, path);
       return at !== null && selection.leaveOut({ ...at, reason: sentence(message) });
     });
-    if (fresh.length === 0 || round === ROUNDS_MAX) return outcome(rows, selection, assembled, problems);
+    if (fresh.length === 0 || round === ROUNDS_MAX)
+      return outcome(rows, selection, { job, index }, parsed.problems, []);
   }
 }
 
@@ -47,6 +50,7 @@ function outcome(
   selection: Selection,
   { job, index }: Assembled,
   problems: Problem[],
+  warnings: Warning[],
 ): JobFromRows {
   const leftOut = selection.leftOut();
   return {
@@ -56,6 +60,7 @@ function outcome(
     assumed: assumedValues(rows, index, job),
     index,
     problems,
+    warnings,
   };
 }
 

@@ -20,8 +20,9 @@ export class Selection {
   leaveOut(missing: Missing, follows = false): boolean {
     const key = keyOf(missing.table, missing.row);
     if (this.out.has(key)) return false;
-    this.out.set(key, { ...missing, ...this.placeOf(missing.table, missing.row), follows });
-    const circuit = this.circuitDrafted(missing);
+    const { table, row, field, reason } = missing;
+    this.out.set(key, { table, row, field, reason, ...this.placeOf(table, row), follows });
+    const circuit = this.draftedCircuit(missing);
     if (circuit !== null) this.leaveOutCircuit(circuit, missing.reason);
     return true;
   }
@@ -69,10 +70,13 @@ export class Selection {
     this.leaveOut({ table, row, field: null, reason }, true);
   }
 
-  /** A draft of a circuit or of its breaker takes the whole circuit along. */
-  private circuitDrafted({ table, row, field }: Missing): string | null {
-    if (table === 'breaker') return this.rows.breaker.get(row)?.circuitId ?? null;
-    return table === 'circuit' && field !== 'load' ? row : null;
+  private draftedCircuit({ table, row, draft }: Missing): string | null {
+    if (!draft) return null;
+    return table === 'breaker'
+      ? (this.rows.breaker.get(row)?.circuitId ?? null)
+      : table === 'circuit'
+        ? row
+        : null;
   }
 
   private leaveOutCircuit(circuitId: string, reason: string): void {

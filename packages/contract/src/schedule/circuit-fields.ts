@@ -1,6 +1,7 @@
 import type { Row } from '../rows/index.ts';
 import { type CircuitParts, spacesOf } from './circuit-parts.ts';
 import { cumulativeLength } from './distances.ts';
+import { racewayFromText } from './words.ts';
 
 /** The fields of a row of the schedule grid; each is text that a person can type back. */
 export const CIRCUIT_FIELDS = [
@@ -66,7 +67,7 @@ export function fieldText(parts: CircuitParts, field: CircuitField): string {
     case 'sets':
       return run ? String(run.sets) : '';
     case 'raceway':
-      return run ? [run.racewaySize, run.raceway].filter((part) => part !== null).join(' ') : '';
+      return run ? racewayText(run) : '';
     case 'length':
       return cumulativeLength(parts);
   }
@@ -101,6 +102,13 @@ export function sizeText({ size, ohmsR, ohmsX, ohmsPer }: Row<'run'>): string {
 /** `none`, `same`, or the size of a neutral that differs. */
 export function neutralText({ conductors, neutralSize }: Row<'run'>): string {
   return conductors.includes('N') ? (neutralSize ?? 'same') : 'none';
+}
+
+/** The raceway as it was typed, where that says what it is made of. */
+export function racewayText({ raceway, racewaySize }: Pick<Row<'run'>, 'raceway' | 'racewaySize'>): string {
+  if (racewaySize === null) return raceway ?? '';
+  if (raceway === null || racewayFromText(racewaySize)?.raceway === raceway) return racewaySize;
+  return `${racewaySize} ${raceway}`;
 }
 
 /** What all loads of a row have in common; each in turn where they differ. */

@@ -1,8 +1,15 @@
+export * from './circuit-edits.ts';
 export * from './circuit-fields.ts';
 export * from './circuit-form.ts';
 export * from './circuit-parts.ts';
+export type { Feed } from './feed.ts';
 export * from './load-va.ts';
 export * from './nominal.ts';
+export * from './panel-edits.ts';
 export type { PanelFoot } from './panel-foot.ts';
 export * from './panel-tree.ts';
+export * from './run-edits.ts';
 export * from './schedule-view.ts';
+export * from './transformer-edits.ts';
+export * from './wiring-edits.ts';
+export * from './words.ts';
