@@ -32,3 +32,17 @@ export async function portProblem(text) {
   }
   return `Port ${port} cannot be used (${code}). Choose another: PORT=${defaultPort} npm start`;
 }
+
+/** @returns {Promise<number>} a port of loopback that nothing listens on now */
+export function freePort() {
+  return new Promise((resolve, reject) => {
+    const server = createServer();
+    server.once('error', reject);
+    server.listen(0, '127.0.0.1', () => {
+      const address = server.address();
+      server.close(() =>
+        typeof address === 'object' && address ? resolve(address.port) : reject(new Error('no port')),
+      );
+    });
+  });
+}

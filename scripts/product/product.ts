@@ -1,7 +1,9 @@
+import { createHash } from 'node:crypto';
 import { mkdirSync } from 'node:fs';
 import path from 'node:path';
 import { migrate } from '../../packages/db/src/migrate.ts';
 import { root } from '../gate/stage.ts';
+import { freePort } from '../port.mjs';
 import type { Secrets } from './secrets.ts';
 import { type ServiceProcess, startService } from './service-process.ts';
 import { webRoot } from './web-build.ts';
@@ -27,24 +29,29 @@ export interface Product {
 
 /** Brings the database up to date and starts api, worker and mail sink; resolves once the product can serve. */
 export async function launch(options: LaunchOptions): Promise<Product> {
-  const { apiUrl, workerUrl } = await migrate({ ownerUrl: options.ownerUrl });
+  const urls = await migrate({
+    ownerUrl: options.ownerUrl,
+    apiPassword: rolePassword(options.ownerUrl, 'api'),
+    workerPassword: rolePassword(options.ownerUrl, 'worker'),
+  });
   mkdirSync(options.mailDirectory, { recursive: true });
-  const address = `http://localhost:${options.port}`;
+  const address = `http://127.0.0.1:${options.port}`;
   const shared = {
     NODE_ENV: 'production',
     TZ: 'UTC',
     FARLUG_LOCAL: '1',
     PORT: String(options.port),
     PUBLIC_URL: address,
-    WEB_ROOT: webRoot,
+    WEB_DIR: webRoot,
+    MAILBOX_PORT: String(await freePort()),
     MAILBOX_DIR: options.mailDirectory,
     ...options.secrets,
   };
   const start = (name: string, file: string, env: NodeJS.ProcessEnv): ServiceProcess =>
     startService(name, path.join(root, 'apps/api/src', file), { ...shared, ...env }, options.log);
   const services = [
-    start('api', 'main.ts', { DATABASE_URL: apiUrl }),
-    start('worker', 'worker-main.ts', { DATABASE_URL: workerUrl }),
+    start('api', 'main.ts', { DATABASE_URL: urls.apiUrl }),
+    start('worker', 'worker-main.ts', { DATABASE_URL: urls.workerUrl, WORKER_DATABASE_URL: urls.workerUrl }),
   ];
   const broken = Promise.race(services.map(async ({ name, ended }) => `${name} ${await ended}`));
   const stop = async (): Promise<void> => {
@@ -55,6 +62,13 @@ export async function launch(options: LaunchOptions): Promise<Product> {
   if (refusal === undefined) return { address, broken, stop };
   await stop();
   throw new Error(refusal);
+}
+
+/** Roles belong to the cluster, not to one database: whoever knows its owner must always give them the same password. */
+function rolePassword(ownerUrl: string, role: 'api' | 'worker'): string {
+  return createHash('sha256')
+    .update(`${role}:${new URL(ownerUrl).password}`)
+    .digest('hex');
 }
 
 async function answers(port: number): Promise<string | undefined> {

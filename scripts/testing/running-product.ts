@@ -1,12 +1,12 @@
 // Global setup of the journeys: the whole product, as `npm start` runs it, on an empty database in the tests' cluster.
 // The journeys read FARLUG_URL and CHROMIUM_PATH.
 import { mkdtempSync, rmSync } from 'node:fs';
-import { createServer } from 'node:net';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { ensureChromium } from '../chromium.ts';
 import { emptyTestDatabase, useCluster } from '../cluster.mjs';
 import { root } from '../gate/stage.ts';
+import { freePort } from '../port.mjs';
 import { launch } from '../product/product.ts';
 import { keptSecrets } from '../product/secrets.ts';
 import { buildWeb } from '../product/web-build.ts';
@@ -31,17 +31,4 @@ export default async function setup(): Promise<(() => Promise<void>) | undefined
     await cluster.release();
     rmSync(directory, { recursive: true, force: true });
   };
-}
-
-function freePort(): Promise<number> {
-  return new Promise((resolve, reject) => {
-    const server = createServer();
-    server.once('error', reject);
-    server.listen(0, '127.0.0.1', () => {
-      const address = server.address();
-      server.close(() =>
-        typeof address === 'object' && address ? resolve(address.port) : reject(new Error('no port')),
-      );
-    });
-  });
 }
