@@ -7,7 +7,7 @@ import type { Conductor, System, TransformerConnection } from './vocabulary.ts';
 import { SYSTEM_CONDUCTORS } from './vocabulary.ts';
 
 const SECONDARIES: Record<TransformerConnection, readonly System[]> = {
-  'delta-wye': ['3ph-4w', '3ph-3w'],
+  'delta-wye': ['3ph-4w'],
   'wye-wye': ['3ph-4w'],
   'delta-delta': ['3ph-3w', '3ph-4w-delta'],
   'wye-delta': ['3ph-3w', '3ph-4w-delta'],

@@ -1,3 +1,5 @@
+export { type Beyond, beyondRun } from './beyond.ts';
+export { radialRuns } from './bridges.ts';
 export { parseJob } from './parse.ts';
 export * from './run-ratings.ts';
 export * from './schema.ts';
