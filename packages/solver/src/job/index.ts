@@ -1,5 +1,6 @@
 export { type Beyond, beyondRun } from './beyond.ts';
 export { radialRuns } from './bridges.ts';
+export { type LoadRating, loadRating } from './load-rating.ts';
 export { parseJob } from './parse.ts';
 export * from './run-ratings.ts';
 export * from './schema.ts';
