@@ -41,11 +41,15 @@ export function useForm<V extends object>({ initial, schema, check, submit }: Fo
   const errors: FieldErrors = { ...refused, ...own };
 
   const focusFirstError = () =>
-    requestAnimationFrame(() =>
-      element.current
-        ?.querySelector<HTMLElement>('[aria-invalid="true"], fieldset:has([data-error]) input')
-        ?.focus(),
-    );
+    requestAnimationFrame(() => {
+      const first = element.current?.querySelector<HTMLElement>(
+        '[aria-invalid="true"], fieldset:has([data-error]) input',
+      );
+      const inside = first?.matches('[role="radiogroup"]')
+        ? first.querySelector<HTMLElement>('[role="radio"]')
+        : null;
+      (inside ?? first)?.focus();
+    });
 
   async function send(): Promise<void> {
     setTried(true);

@@ -3,6 +3,7 @@ import { cx } from './cx.ts';
 
 interface FieldWiring {
   id: string;
+  labelId: string;
   describedBy: string | undefined;
   invalid: boolean;
   required: boolean;
@@ -23,6 +24,11 @@ export function useFieldWiring(own?: string): {
     'aria-invalid': wiring?.invalid ? true : undefined,
     'aria-required': wiring?.required ? true : undefined,
   };
+}
+
+/** For a control that a label cannot point at, as a group of radios. */
+export function useFieldLabelId(): string | undefined {
+  return use(Wiring)?.labelId;
 }
 
 interface FieldProps {
@@ -51,9 +57,13 @@ export function Field({
   const errorId = error ? `${id}-error` : undefined;
   const describedBy = [hintId, errorId].filter(Boolean).join(' ') || undefined;
   return (
-    <Wiring value={{ id, describedBy, invalid: Boolean(error), required }}>
+    <Wiring value={{ id, labelId: `${id}-label`, describedBy, invalid: Boolean(error), required }}>
       <div className={cx('min-w-0', className)}>
-        <label htmlFor={id} className={cx('mb-0.5 block text-label text-ink-soft', hideLabel && 'sr-only')}>
+        <label
+          id={`${id}-label`}
+          htmlFor={id}
+          className={cx('mb-0.5 block text-label text-ink-soft', hideLabel && 'sr-only')}
+        >
           {label}
         </label>
         {children}

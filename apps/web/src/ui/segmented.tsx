@@ -1,6 +1,6 @@
 import { RadioGroup } from 'radix-ui';
 import { cx } from './cx.ts';
-import { useFieldWiring } from './field.tsx';
+import { useFieldLabelId, useFieldWiring } from './field.tsx';
 import type { Choice } from './select.tsx';
 
 interface SegmentedProps<T extends string> {
@@ -24,11 +24,14 @@ export function Segmented<T extends string>({
   disabled,
 }: SegmentedProps<T>) {
   const wiring = useFieldWiring();
+  const labelId = useFieldLabelId();
   return (
     <RadioGroup.Root
       id={wiring.id}
       aria-describedby={wiring['aria-describedby']}
+      aria-invalid={wiring['aria-invalid']}
       aria-label={label}
+      aria-labelledby={label ? undefined : labelId}
       value={value ?? ''}
       disabled={disabled}
       onValueChange={(next) => onValue(next as T)}

@@ -1,4 +1,5 @@
 import type { FieldErrors } from '../../lib/form-errors.ts';
+import { LIMIT_WORDS } from '../../lib/job-words.ts';
 import {
   CLASS_LIMITS,
   type JobDraft,
@@ -7,7 +8,6 @@ import {
   type PresetDraft,
   type SourceDraft,
 } from './job-draft.ts';
-import { LIMIT_WORDS } from './job-words.ts';
 import { AMPS, HERTZ, OHMS, PERCENT, PLAIN, typedDecimal, type Units, VOLTS } from './typed-decimal.ts';
 
 interface NumberRule {

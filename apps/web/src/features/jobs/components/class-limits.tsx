@@ -1,10 +1,10 @@
 import { LOAD_CLASSES, type LoadClass } from '@farlug/solver/job';
+import { CLASS_WORDS } from '../../../lib/job-words.ts';
 import { Button } from '../../../ui/button.tsx';
 import { Field } from '../../../ui/field.tsx';
 import { FormSection } from '../../../ui/form-section.tsx';
 import { Select } from '../../../ui/select.tsx';
 import { CLASS_LIMITS, type ClassLimit } from '../job-draft.ts';
-import { CLASS_WORDS } from '../job-words.ts';
 import { type LimitsForm, NumberField } from './draft-fields.tsx';
 
 const SHORT = { feeder: 'Feeder, %', branch: 'Branch, %', total: 'Together, %' } as const;

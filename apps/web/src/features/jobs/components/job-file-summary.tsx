@@ -1,7 +1,7 @@
 import type { Job, Warning } from '@farlug/solver/job';
 import { formatCount } from '../../../lib/format.ts';
+import { SYSTEM_WORDS } from '../../../lib/job-words.ts';
 import { Particulars } from '../../../ui/key-values.tsx';
-import { SYSTEM_WORDS } from '../job-words.ts';
 
 const WARNINGS_MAX = 12;
 

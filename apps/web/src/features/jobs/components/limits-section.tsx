@@ -1,12 +1,12 @@
 import type { presetView } from '@farlug/contract/routes';
 import { FORCES, type Force } from '@farlug/solver/job';
 import type { z } from 'zod';
+import { FORCE_WORDS, LIMIT_WORDS } from '../../../lib/job-words.ts';
 import { Checkbox } from '../../../ui/checkbox.tsx';
 import { Field } from '../../../ui/field.tsx';
 import { FormSection } from '../../../ui/form-section.tsx';
 import { Select } from '../../../ui/select.tsx';
 import { limitDrafts, PLAIN_LIMITS } from '../job-draft.ts';
-import { FORCE_WORDS, LIMIT_WORDS } from '../job-words.ts';
 import { ClassLimits } from './class-limits.tsx';
 import { type DraftForm, DraftText, type LimitsForm, NumberField } from './draft-fields.tsx';
 import { VoltsLimits } from './volts-limits.tsx';

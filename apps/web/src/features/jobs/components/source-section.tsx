@@ -1,11 +1,11 @@
 import type { System } from '@farlug/solver/job';
+import { SYSTEM_FAULT, SYSTEM_ORDER, SYSTEM_VOLTS, SYSTEM_WORDS } from '../../../lib/job-words.ts';
 import { Checkbox } from '../../../ui/checkbox.tsx';
 import { Field } from '../../../ui/field.tsx';
 import { FormSection } from '../../../ui/form-section.tsx';
 import { Segmented } from '../../../ui/segmented.tsx';
 import { Select } from '../../../ui/select.tsx';
 import type { SourceDraft, Strength } from '../job-draft.ts';
-import { SYSTEM_FAULT, SYSTEM_ORDER, SYSTEM_VOLTS, SYSTEM_WORDS } from '../job-words.ts';
 import { type DraftForm, NumberField } from './draft-fields.tsx';
 
 const STRENGTH_WORDS: Record<Strength, string> = {

@@ -1,5 +1,5 @@
 import type { LimitKind } from '@farlug/contract/rows';
-import type { Basis, Force, LoadClass, System } from '@farlug/solver/job';
+import type { Basis, Force, LoadClass, Scenario, System } from '@farlug/solver/job';
 
 /** Supply systems in the words of the trade; volts are between lines unless said. */
 export const SYSTEM_WORDS: Record<System, string> = {
@@ -75,3 +75,20 @@ export const LIMIT_WORDS: Record<LimitKind, { label: string; unit: '%' | 'V'; hi
   },
   'rating-high': { label: 'Highest share of the rating', unit: '%' },
 };
+
+/** Scenarios as they are chosen, and what stands under the choice. */
+export const SCENARIO_WORDS: Record<Scenario, { label: string; others: string }> = {
+  'each-circuit': { label: 'Each circuit full', others: 'others at design demand' },
+  design: { label: 'Design demand', others: 'every load at its demand' },
+  'everything-on': { label: 'Everything on', others: 'no diversity' },
+  light: { label: 'Light load', others: 'generation full, loads at their least' },
+  starting: { label: 'Starting', others: 'each motor in turn, others at demand' },
+};
+/** In the order in which they are offered. */
+export const SCENARIO_ORDER: readonly Scenario[] = [
+  'each-circuit',
+  'design',
+  'everything-on',
+  'light',
+  'starting',
+];

@@ -1,0 +1,1 @@
+export { OpenLinkPage as Component } from '../features/inspection/components/open-link-page.tsx';

@@ -1,0 +1,1 @@
+export { InspectionPage as Component } from '../features/inspection/components/inspection-page.tsx';

@@ -1,0 +1,1 @@
+export { MailboxPage as Component } from '../features/mailbox/components/mailbox-page.tsx';
