@@ -26,3 +26,14 @@ export function project(name: string, own: ProjectTest = {}): { test: ProjectTes
 export function databaseProject(name: string, own: ProjectTest = {}): { test: ProjectTest } {
   return project(name, { globalSetup: [here('./test-cluster.ts')], ...own });
 }
+
+/** Whole journeys in a real browser, one after the other, against the running product. */
+export function journeyProject(name: string): { test: ProjectTest } {
+  return project(name, {
+    include: ['**/*.test.ts'],
+    globalSetup: [here('./running-product.ts')],
+    fileParallelism: false,
+    testTimeout: deep ? 600_000 : 240_000,
+    hookTimeout: 120_000,
+  });
+}
