@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
-import type { Row } from '@farlug/contract/rows';
-import { emptyLists } from './lists.ts';
+import { listsFromRows } from '@farlug/contract/rows';
+import { emptyRows } from '@farlug/contract/testing';
 import type { Database } from '../src/database.ts';
 import { addMember, createFirm } from '../src/queries/firms.ts';
 import { createJob } from '../src/queries/jobs.ts';
@@ -30,36 +30,9 @@ export async function makePerson(db: Database, name = 'Ida Marlow'): Promise<str
   return id;
 }
 
-export function jobRowOf(id: string, name = 'Cooper Lane annex'): Row<'job'> {
-  return {
-    id,
-    name,
-    address: '4 Cooper Lane',
-    building: null,
-    area: null,
-    codeEdition: null,
-    authority: null,
-    permitNumber: null,
-    frequency: '60',
-    basis: 'impedance',
-    angle: 'nominal',
-    lengthUnit: 'ft',
-    wireUnit: 'awg',
-    limitPreset: null,
-    limitBasis: null,
-    limitForce: 'recommendation',
-    includeService: false,
-    includeTransformer: false,
-    includeSource: false,
-    longRun: false,
-  };
-}
-
 /** An empty job of the firm. */
-export async function makeJob(db: Database, { firmId, personId }: TestFirm, name?: string): Promise<string> {
+export async function makeJob(db: Database, { firmId, personId }: TestFirm): Promise<string> {
   const id = randomUUID();
-  await db.withFirm(firmId, personId, (tx) =>
-    createJob(tx, { ...emptyLists(), job: [jobRowOf(id, name)] }),
-  );
+  await db.withFirm(firmId, personId, (tx) => createJob(tx, listsFromRows(emptyRows(id))));
   return id;
 }
