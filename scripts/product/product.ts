@@ -1,4 +1,3 @@
-import { createHash } from 'node:crypto';
 import { mkdirSync } from 'node:fs';
 import path from 'node:path';
 import { migrate } from '../../packages/db/src/migrate.ts';
@@ -31,8 +30,8 @@ export interface Product {
 export async function launch(options: LaunchOptions): Promise<Product> {
   const urls = await migrate({
     ownerUrl: options.ownerUrl,
-    apiPassword: rolePassword(options.ownerUrl, 'api'),
-    workerPassword: rolePassword(options.ownerUrl, 'worker'),
+    apiPassword: options.secrets.API_PASSWORD,
+    workerPassword: options.secrets.WORKER_PASSWORD,
   });
   mkdirSync(options.mailDirectory, { recursive: true });
   const address = `http://127.0.0.1:${options.port}`;
@@ -45,7 +44,8 @@ export async function launch(options: LaunchOptions): Promise<Product> {
     WEB_DIR: webRoot,
     MAILBOX_PORT: String(await freePort()),
     MAILBOX_DIR: options.mailDirectory,
-    ...options.secrets,
+    SESSION_SECRET: options.secrets.SESSION_SECRET,
+    LINK_SECRET: options.secrets.LINK_SECRET,
   };
   const start = (name: string, file: string, env: NodeJS.ProcessEnv): ServiceProcess =>
     startService(name, path.join(root, 'apps/api/src', file), { ...shared, ...env }, options.log);
@@ -62,13 +62,6 @@ export async function launch(options: LaunchOptions): Promise<Product> {
   if (refusal === undefined) return { address, broken, stop };
   await stop();
   throw new Error(refusal);
-}
-
-/** Roles belong to the cluster, not to one database: whoever knows its owner must always give them the same password. */
-function rolePassword(ownerUrl: string, role: 'api' | 'worker'): string {
-  return createHash('sha256')
-    .update(`${role}:${new URL(ownerUrl).password}`)
-    .digest('hex');
 }
 
 async function answers(port: number): Promise<string | undefined> {

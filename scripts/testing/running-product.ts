@@ -3,6 +3,7 @@
 import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
+import { TEST_API_PASSWORD, TEST_WORKER_PASSWORD } from '../../packages/db/src/testing/index.ts';
 import { ensureChromium } from '../chromium.ts';
 import { emptyTestDatabase, useCluster } from '../cluster.mjs';
 import { root } from '../gate/stage.ts';
@@ -20,7 +21,11 @@ export default async function setup(): Promise<(() => Promise<void>) | undefined
   const product = await launch({
     port: await freePort(),
     ownerUrl: await emptyTestDatabase(`farlug_journeys_${process.pid}`),
-    secrets: keptSecrets(directory),
+    secrets: {
+      ...keptSecrets(directory),
+      API_PASSWORD: TEST_API_PASSWORD,
+      WORKER_PASSWORD: TEST_WORKER_PASSWORD,
+    },
     mailDirectory: path.join(directory, 'mail'),
     log: path.join(root, '.data/test-logs/product.log'),
   });
