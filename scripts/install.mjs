@@ -8,9 +8,11 @@ import { fileURLToPath } from 'node:url';
 export const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '..');
 const stamp = path.join(root, 'node_modules/.installed-from');
 
-/** npm's own settings must not reach pnpm, nor anything else that is started from here. */
+/** npm's own settings must not reach pnpm, nor anything else that is started from here; only where packages come from. */
 export function forgetNpmSettings() {
-  for (const name of Object.keys(process.env)) if (/^npm_/i.test(name)) delete process.env[name];
+  for (const name of Object.keys(process.env)) {
+    if (/^npm_(?!config_registry$)/i.test(name)) delete process.env[name];
+  }
 }
 
 function manifests() {
