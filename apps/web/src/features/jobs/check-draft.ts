@@ -8,47 +8,33 @@ import {
   type PresetDraft,
   type SourceDraft,
 } from './job-draft.ts';
-import { AMPS, HERTZ, OHMS, PERCENT, PLAIN, typedDecimal, type Units, VOLTS } from './typed-decimal.ts';
+import {
+  type Reader,
+  readAmps,
+  readHertz,
+  readOhms,
+  readPercent,
+  readRatio,
+  readShare,
+  readVolts,
+} from './typed-number.ts';
 
 interface NumberRule {
-  units: Units;
-  min: number;
-  max: number;
-  /** Zero itself is refused. */
-  above?: boolean;
+  read: Reader;
+  /** Said where the field may not stay empty. */
   required?: string;
   right: string;
 }
 
 /** What is wrong with a typed number and what would be right; `null` is nothing. */
-export function numberError(text: string, rule: NumberRule): string | null {
-  const typed = typedDecimal(text, rule.units);
-  if (!typed.ok) return `“${text.trim()}” is not understood. ${rule.right}`;
-  if (typed.value === null) return rule.required ?? null;
-  const value = Number(typed.value);
-  if (value < rule.min || value > rule.max || (rule.above && value === rule.min)) return rule.right;
-  return null;
+function numberError(text: string, rule: NumberRule): string | null {
+  if (text.trim() === '') return rule.required ?? null;
+  return rule.read(text).ok ? null : `“${text.trim()}” does not do. ${rule.right}`;
 }
 
-const percent: NumberRule = {
-  units: PERCENT,
-  min: 0,
-  max: 100,
-  right: 'Enter a percent from 0 to 100, as 3.',
-};
-const share: NumberRule = {
-  units: PERCENT,
-  min: 0,
-  max: 200,
-  right: 'Enter a percent from 0 to 200, as 90.',
-};
-const volts: NumberRule = {
-  units: VOLTS,
-  min: 0,
-  max: 1e6,
-  above: true,
-  right: 'Enter volts above 0, as 480.',
-};
+const percent: NumberRule = { read: readPercent, right: 'Enter a percent from 0 to 100, as 3.' };
+const share: NumberRule = { read: readShare, right: 'Enter a percent from 0 to 200, as 90.' };
+const volts: NumberRule = { read: readVolts, right: 'Enter volts above 0, as 480.' };
 
 const TEXT_FIELDS = [
   'name',
@@ -121,10 +107,7 @@ function frequencyError(draft: JobDraft): string | null {
     return 'Direct and alternating current cannot be mixed in one job.';
   if (direct > 0) return null;
   return numberError(draft.frequency, {
-    units: HERTZ,
-    min: 0,
-    max: 1000,
-    above: true,
+    read: readHertz,
     required: 'Enter the frequency, as 60 or 50.',
     right: 'Enter hertz above 0 and at most 1000, as 60 or 50.',
   });
@@ -143,10 +126,7 @@ function sourceErrors(source: SourceDraft, path: string, note: Note): void {
     note(
       `${path}.faultAmps`,
       numberError(source.faultAmps, {
-        units: AMPS,
-        min: 0,
-        max: 1e9,
-        above: true,
+        read: readAmps,
         required: 'Enter the fault current as the utility states it, as 22 kA; or choose another way above.',
         right: 'Enter amps above 0, as 22000 or 22 kA.',
       }),
@@ -154,15 +134,13 @@ function sourceErrors(source: SourceDraft, path: string, note: Note): void {
     note(
       `${path}.faultXOverR`,
       numberError(source.faultXOverR, {
-        units: PLAIN,
-        min: 0,
-        max: 1e9,
+        read: readRatio,
         right: 'Enter a ratio of 0 or more, as 4.',
       }),
     );
   }
   if (source.strength === 'impedance') {
-    const ohms: NumberRule = { units: OHMS, min: 0, max: 1e9, right: 'Enter ohms of 0 or more, as 0.004.' };
+    const ohms: NumberRule = { read: readOhms, right: 'Enter ohms of 0 or more, as 0.004.' };
     note(
       `${path}.impedanceR`,
       numberError(source.impedanceR, { ...ohms, required: 'Enter the resistance of each line, as 0.004.' }),

@@ -1,14 +1,25 @@
 import { deleteOp, type Edit, type EditOp, editOf, insertOp, newId, updateOp } from '@farlug/contract/edit';
 import { blankBus, blankJob, blankSource, orderKeys } from '@farlug/contract/job';
-import { JOB_TABLE_NAMES, type JobRowLists, type JobRows, type Row } from '@farlug/contract/rows';
+import {
+  JOB_TABLE_NAMES,
+  type JobRowLists,
+  type JobRows,
+  type LimitKind,
+  type Row,
+} from '@farlug/contract/rows';
 import { CLASS_LIMITS, type JobDraft, PLAIN_LIMITS, type SourceDraft } from './job-draft.ts';
-import { AMPS, HERTZ, OHMS, PERCENT, PLAIN, typedDecimal, type Units, VOLTS } from './typed-decimal.ts';
+import {
+  decimalOrNull,
+  type Reader,
+  readAmps,
+  readHertz,
+  readOhms,
+  readPercent,
+  readRatio,
+  readShare,
+  readVolts,
+} from './typed-number.ts';
 
-/** Only for drafts that `draftErrors` finds nothing in. */
-function decimalOfText(text: string, units: Units): string | null {
-  const typed = typedDecimal(text, units);
-  return typed.ok ? typed.value : null;
-}
 const textOrNull = (text: string): string | null => text.trim() || null;
 
 type JobFields = Omit<Row<'job'>, 'id' | 'angle'>;
@@ -23,7 +34,7 @@ function jobFields(draft: JobDraft): JobFields {
     codeEdition: textOrNull(draft.codeEdition),
     authority: textOrNull(draft.authority),
     permitNumber: textOrNull(draft.permitNumber),
-    frequency: direct ? '0' : (decimalOfText(draft.frequency, HERTZ) ?? '60'),
+    frequency: direct ? '0' : (decimalOrNull(draft.frequency, readHertz) ?? '60'),
     basis: draft.basis,
     lengthUnit: draft.lengthUnit,
     wireUnit: draft.wireUnit,
@@ -47,30 +58,39 @@ function sourceFields(source: SourceDraft): SourceFields {
   const impedance = source.strength === 'impedance';
   return {
     system: source.system,
-    volts: decimalOfText(source.volts, VOLTS),
-    openVolts: decimalOfText(source.openVolts, VOLTS),
+    volts: decimalOrNull(source.volts, readVolts),
+    openVolts: decimalOrNull(source.openVolts, readVolts),
     off: source.off,
-    impedanceR: impedance ? decimalOfText(source.impedanceR, OHMS) : null,
-    impedanceX: impedance ? (decimalOfText(source.impedanceX, OHMS) ?? '0') : null,
-    faultAmps: fault ? decimalOfText(source.faultAmps, AMPS) : null,
-    faultXOverR: fault ? (decimalOfText(source.faultXOverR, PLAIN) ?? '0') : null,
+    impedanceR: impedance ? decimalOrNull(source.impedanceR, readOhms) : null,
+    impedanceX: impedance ? (decimalOrNull(source.impedanceX, readOhms) ?? '0') : null,
+    faultAmps: fault ? decimalOrNull(source.faultAmps, readAmps) : null,
+    faultXOverR: fault ? (decimalOrNull(source.faultXOverR, readRatio) ?? '0') : null,
   };
 }
 
 type LimitFields = Omit<Row<'limit'>, 'id'>;
 
+const readerOf = (kind: LimitKind): Reader =>
+  kind.endsWith('volts') ? readVolts : kind.startsWith('rating') ? readShare : readPercent;
+
+/** Only for drafts that nothing is wrong with. */
 export function limitFields(draft: Pick<JobDraft, 'limits' | 'byClass' | 'atVolts'>): LimitFields[] {
   const found: LimitFields[] = [];
-  const add = (text: string, units: Units, fields: Omit<LimitFields, 'value'>) => {
-    const value = decimalOfText(text, units);
+  const add = (text: string, read: Reader, fields: Omit<LimitFields, 'value'>) => {
+    const value = decimalOrNull(text, read);
     if (value !== null) found.push({ ...fields, value });
   };
   for (const kind of PLAIN_LIMITS)
-    add(draft.limits[kind], kind.endsWith('volts') ? VOLTS : PERCENT, { class: null, kind, atVolts: null });
+    add(draft.limits[kind], readerOf(kind), { class: null, kind, atVolts: null });
   for (const entry of draft.byClass)
-    for (const kind of CLASS_LIMITS) add(entry[kind], PERCENT, { class: entry.class, kind, atVolts: null });
+    for (const kind of CLASS_LIMITS)
+      add(entry[kind], readPercent, { class: entry.class, kind, atVolts: null });
   for (const entry of draft.atVolts)
-    add(entry.value, VOLTS, { class: null, kind: entry.kind, atVolts: decimalOfText(entry.atVolts, VOLTS) });
+    add(entry.value, readVolts, {
+      class: null,
+      kind: entry.kind,
+      atVolts: decimalOrNull(entry.atVolts, readVolts),
+    });
   return found;
 }
 
