@@ -13,41 +13,64 @@ export interface Beyond {
   along: readonly number[];
 }
 
-/** The far side of a run; `null` where the run is open, part of a loop or fed from both ends. */
-export function beyondRun(job: Job, index: number, radial = radialRuns(job)): Beyond | null {
-  const farBus = radial.get(index);
-  if (farBus === undefined) return null;
-  const run = job.runs[index]!;
-  const links = new Map<string, string[]>();
-  const link = (from: string, to: string) => {
-    const list = links.get(from);
-    if (list) list.push(to);
-    else links.set(from, [to]);
-  };
-  job.runs.forEach((other, i) => {
-    if (i === index || other.open) return;
-    link(other.from, other.to);
-    link(other.to, other.from);
+const listed = (map: Map<string, number[]>, key: string, value: number): void => {
+  const list = map.get(key);
+  if (list) list.push(value);
+  else map.set(key, [value]);
+};
+
+/**
+ * Prepares a job once and answers for any run, by index: its far side, or `null` where the run is open, part of a loop
+ * or fed from both ends. An answer costs no more than what lies beyond.
+ */
+export function beyondFinder(job: Job): (run: number) => Beyond | null {
+  const radial = radialRuns(job);
+  const runsAt = new Map<string, number[]>();
+  const transformersAt = new Map<string, number[]>();
+  const loadsAt = new Map<string, number[]>();
+  const loadsAlong = new Map<string, number[]>();
+  job.runs.forEach((run, i) => {
+    if (run.open) return;
+    listed(runsAt, run.from, i);
+    listed(runsAt, run.to, i);
   });
-  for (const t of job.transformers) {
-    link(t.from, t.to);
-    link(t.to, t.from);
-  }
-  const buses = new Set([farBus]);
-  for (const bus of buses) for (const next of links.get(bus) ?? []) buses.add(next);
-  const runs = job.runs.flatMap((r, i) =>
-    i !== index && !r.open && buses.has(r.from) && buses.has(r.to) ? [i] : [],
-  );
-  const within = new Set(runs.map((i) => job.runs[i]!.id)).add(run.id);
-  const loads = job.loads.flatMap((load, i) =>
-    (load.bus !== null && buses.has(load.bus)) || (load.along !== null && within.has(load.along)) ? [i] : [],
-  );
-  return {
-    nearBus: farBus === run.to ? run.from : run.to,
-    farBus,
-    buses,
-    runs,
-    loads,
-    along: loads.filter((i) => job.loads[i]!.along === run.id),
+  job.transformers.forEach((t, i) => {
+    listed(transformersAt, t.from, i);
+    listed(transformersAt, t.to, i);
+  });
+  job.loads.forEach((load, i) => {
+    if (load.bus !== null) listed(loadsAt, load.bus, i);
+    else listed(loadsAlong, load.along!, i);
+  });
+
+  return (index) => {
+    const farBus = radial.get(index);
+    if (farBus === undefined) return null;
+    const run = job.runs[index]!;
+    const buses = new Set([farBus]);
+    const runs = new Set<number>();
+    const along = loadsAlong.get(run.id) ?? [];
+    const loads = [...along];
+    for (const bus of buses) {
+      loads.push(...(loadsAt.get(bus) ?? []));
+      for (const i of runsAt.get(bus) ?? []) {
+        if (i === index || runs.has(i)) continue;
+        const { id, from, to } = job.runs[i]!;
+        runs.add(i);
+        loads.push(...(loadsAlong.get(id) ?? []));
+        buses.add(from).add(to);
+      }
+      for (const i of transformersAt.get(bus) ?? [])
+        buses.add(job.transformers[i]!.from).add(job.transformers[i]!.to);
+    }
+    const inOrder = (a: number, b: number) => a - b;
+    return {
+      nearBus: farBus === run.to ? run.from : run.to,
+      farBus,
+      buses,
+      runs: [...runs].sort(inOrder),
+      loads: loads.sort(inOrder),
+      along,
+    };
   };
 }

@@ -1,4 +1,4 @@
-export { type Beyond, beyondRun } from './beyond.ts';
+export { type Beyond, beyondFinder } from './beyond.ts';
 export { radialRuns } from './bridges.ts';
 export { type LoadRating, loadRating } from './load-rating.ts';
 export { parseJob } from './parse.ts';

@@ -110,9 +110,7 @@ const plainFloor = (run: Run, size: RunSize, load: FloorLoad): Floor => {
   if (carries * SLACK < load.amps)
     reasons.push(`${amps(carries)} after factors < ${amps(load.amps)} of load`);
   if (run.breaker && carries * SLACK < run.breaker.amps)
-    reasons.push(
-      `${amps(carries)} after factors < the ${amps(run.breaker.amps)} breaker, IEC 60364-4-43 433.1`,
-    );
+    reasons.push(`${amps(carries)} after factors < the ${amps(run.breaker.amps)} breaker${rule}`);
   return {
     status: reasons.length > 0 ? 'below' : 'meets',
     ampacityAmps: carries,
