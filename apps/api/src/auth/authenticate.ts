@@ -2,7 +2,7 @@ import type { Request, RequestHandler } from 'express';
 import passport from 'passport';
 import { Strategy as LocalStrategy } from 'passport-local';
 import type { Deps } from '../deps.ts';
-import type { Person } from '../http/call.ts';
+import type { Person } from '../platform/caller.ts';
 import { personById, personByPassword } from './people.ts';
 
 /** The one place that knows passport: who is behind a session, and whether a password is right. */

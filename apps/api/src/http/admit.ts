@@ -2,8 +2,8 @@ import type { Access, FirmRole, Route } from '@farlug/contract/route';
 import type { Request } from 'express';
 import { memberRole } from '../auth/member-role.ts';
 import type { Deps } from '../deps.ts';
+import type { InspectionGrant, Member, Person } from '../platform/caller.ts';
 import { type Refusal, refuse } from '../platform/refusal.ts';
-import type { InspectionGrant, Member, Person } from './call.ts';
 import { parse } from './validation.ts';
 
 export interface Admission {

@@ -1,28 +1,9 @@
-import type { FirmRole, Route } from '@farlug/contract/route';
+import type { Route } from '@farlug/contract/route';
 import type { Request, Response } from 'express';
 import type { z } from 'zod';
+import type { InspectionGrant, Member, Person } from '../platform/caller.ts';
 import type { Logger } from '../platform/logger.ts';
 import type { Refusal } from '../platform/refusal.ts';
-
-export interface Person {
-  id: string;
-  name: string;
-  email: string;
-}
-
-/** A signed-in person as one firm knows them. */
-export interface Member {
-  firmId: string;
-  role: FirmRole;
-  person: Person;
-}
-
-/** What an opened inspection link left in the browser's session. */
-export interface InspectionGrant {
-  firmId: string;
-  deliveryId: string;
-  epoch: number;
-}
 
 /** A checked request: parsed by its route, its caller allowed. */
 export interface Call<R extends Route = Route> {

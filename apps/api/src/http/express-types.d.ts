@@ -1,4 +1,4 @@
-import type { InspectionGrant, Person } from './call.ts';
+import type { InspectionGrant, Person } from '../platform/caller.ts';
 
 declare global {
   namespace Express {

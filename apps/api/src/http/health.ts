@@ -3,15 +3,9 @@ import type { Deps } from '../deps.ts';
 import { webIsBuilt } from './web-pages.ts';
 
 /** 200 once a person could use the product: the database answers and the page is there. */
-export function health({ config, db, log }: Deps): RequestHandler {
+export function health({ config, db }: Deps): RequestHandler {
   return async (_request, response) => {
-    const database = await db.ready()
-      () => true,
-      (error: unknown) => {
-        log.warn({ err: error }, 'the database does not answer');
-        return false;
-      },
-    );
+    const database = await db.ready();
     const web = webIsBuilt(config.webDir);
     response
       .status(database && web ? 200 : 503)

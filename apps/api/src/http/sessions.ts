@@ -13,7 +13,7 @@ export function sessions({ config, db, log }: Deps): RequestHandler {
     name: cookieNames(config).session,
     secret: config.sessionSecret,
     store: new Store({
-      pool: db.pool,
+      pool: db.sessionPool,
       tableName: 'session',
       createTableIfMissing: false,
       pruneSessionInterval: 3600,

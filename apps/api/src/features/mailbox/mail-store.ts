@@ -31,7 +31,10 @@ export class MailStore {
   /** Newest first, at most `count`. */
   async newest(count: number): Promise<StoredMail[]> {
     const names = await readdir(this.directory).catch(() => []);
-    const ids = names.flatMap((name) => FILE.exec(name)?.[1] ?? []).sort().reverse();
+    const ids = names
+      .flatMap((name) => FILE.exec(name)?.[1] ?? [])
+      .sort()
+      .reverse();
     return Promise.all(ids.slice(0, count).map(async (id) => ({ id, mail: await this.parse(id) })));
   }
 

@@ -36,7 +36,11 @@ export async function readMessage(store: MailStore, id: string): Promise<MailVie
   };
 }
 
-export async function attachmentOf(store: MailStore, id: string, index: number): Promise<Attachment | Refusal> {
+export async function attachmentOf(
+  store: MailStore,
+  id: string,
+  index: number,
+): Promise<Attachment | Refusal> {
   const attachment = (await store.read(id))?.mail.attachments[index];
   if (attachment === undefined) return noMessage();
   const isPdf = attachment.contentType === 'application/pdf';
