@@ -11,5 +11,6 @@ export * from './panel-tree.ts';
 export * from './run-edits.ts';
 export * from './schedule-view.ts';
 export * from './transformer-edits.ts';
+export * from './unfinished.ts';
 export * from './wiring-edits.ts';
 export * from './words.ts';
