@@ -6,7 +6,7 @@ export function TitleBlock({ children, action }: { children: ReactNode; action?:
   return (
     <section
       aria-label="Title block"
-      className="flex min-w-0 overflow-x-auto border-t-2 border-b border-ink bg-sheet desk:h-19"
+      className="flex min-w-0 flex-none flex-wrap border-t-2 border-b border-ink bg-sheet desk:h-19 desk:flex-nowrap desk:overflow-hidden"
     >
       {children}
       {action && (
@@ -28,6 +28,8 @@ interface TitleCellProps {
   strong?: boolean;
   /** Shown on a phone too, where only what matters most has room. */
   phone?: boolean;
+  /** From which width on; the cells that matter less come last. */
+  from?: 'desk' | 'wide';
   /** May give way where the line is short. */
   shrink?: boolean;
 }
@@ -38,17 +40,23 @@ export function TitleCell({
   sub,
   strong = false,
   phone = false,
+  from = 'desk',
   shrink = false,
 }: TitleCellProps) {
+  const shown = phone
+    ? 'flex border-b border-b-hair py-1.5 desk:border-b-0 desk:py-0'
+    : from === 'wide'
+      ? 'hidden wide:flex'
+      : 'hidden desk:flex';
   return (
     <div
       className={cx(
-        'min-w-0 flex-col justify-center border-l border-rule px-3 whitespace-nowrap first:border-l-0 first:pl-4',
-        phone ? 'flex py-1.5 desk:py-0' : 'hidden desk:flex',
+        'min-w-0 flex-col justify-center border-l border-l-rule px-3 whitespace-nowrap first:w-full first:border-l-0 first:pl-4 desk:first:w-auto',
+        shown,
         shrink ? 'shrink' : 'flex-none',
       )}
     >
-      <span className="text-label text-ink-soft">{label}</span>
+      <span className="truncate text-label text-ink-soft">{label}</span>
       <div className={cx('truncate text-body', strong && 'font-bold')}>{children}</div>
       {sub && <div className="truncate text-label text-ink-soft">{sub}</div>}
     </div>
