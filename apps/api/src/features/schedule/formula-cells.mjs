@@ -23,7 +23,7 @@ export function overlayFormulas(sheets, parts) {
       while (sheet.cells.length <= place.row) sheet.cells.push([]);
       const row = /** @type {string[]} */ (sheet.cells[place.row]);
       while (row.length <= place.column) row.push('');
-      row[place.column] = `=${unescapeXml(formula) || '…'}`;
+      row[place.column] = `=${unescapeXml(formula).replace(/^=/, '') || '…'}`;
     }
   }
 }

@@ -9,12 +9,11 @@ const DELIMITERS = [',', ';', '\t', '|'];
  */
 export function readCsv(bytes) {
   const name = 'the file';
-  const text = decode(bytes);
+  const { delimiter, text } = separate(decode(bytes));
   /** @type {string[][]} */
   const cells = [];
   /** @type {unknown} */
   let problem;
-  const delimiter = delimiterOf(text);
   papaparse.parse(text, {
     delimiter,
     skipEmptyLines: false,
@@ -53,12 +52,21 @@ function decode(bytes) {
 }
 
 /**
+ * Some programs write the separator into a first line of its own.
+ * @param {string} whole
+ */
+function separate(whole) {
+  const declared = /^\uFEFF?sep=(.)(?:\r\n|\r|\n)/i.exec(whole);
+  return declared
+    ? { delimiter: /** @type {string} */ (declared[1]), text: whole.slice(declared[0].length) }
+    : { delimiter: delimiterOf(whole), text: whole };
+}
+
+/**
  * The one of the usual separators that most of the first lines agree upon, outside quotes.
  * @param {string} text
  */
 function delimiterOf(text) {
-  const declared = /^\uFEFF?sep=(.)\r?\n/i.exec(text)?.[1];
-  if (declared) return declared;
   const lines = text
     .slice(0, 64 * 1024)
     .split(/\r\n|\r|\n/)

@@ -1,0 +1,52 @@
+import { once } from 'node:events';
+import { createServer } from 'node:http';
+import { createDatabase } from '@farlug/db';
+import { createApp } from './app.ts';
+import { readConfig } from './config.ts';
+import type { Deps } from './deps.ts';
+import { MailStore } from './features/mailbox/mail-store.ts';
+import { startSmtpSink } from './features/mailbox/smtp-sink.ts';
+import { createLogger } from './platform/logger.ts';
+import { RATE_LIMITS } from './platform/rate-limits.ts';
+
+const SECONDS_TO_FINISH = 8;
+
+const outcome = readConfig(process.env);
+if (!outcome.ok) {
+  process.stderr.write(
+    `The api cannot start:\n${outcome.problems.map((problem) => `  ${problem}\n`).join('')}`,
+  );
+  process.exit(78);
+}
+const { config } = outcome;
+const log = createLogger(config.logLevel);
+const db = createDatabase(config.databaseUrl);
+const deps: Deps = { config, db, log, now: () => new Date(), rateLimits: RATE_LIMITS };
+
+const sink = config.local
+  ? await startSmtpSink(config.mailboxPort, new MailStore(config.mailboxDir), log)
+  : null;
+if (config.local) await (await import('./demo/seed-demo.ts')).seedDemo(deps);
+
+const server = createServer(createApp(deps));
+server.headersTimeout = 20_000;
+server.requestTimeout = 120_000;
+server.listen(config.port, config.host);
+await once(server, 'listening');
+log.info({ address: config.publicUrl, host: config.host, port: config.port }, 'the api listens');
+
+let stopping = false;
+async function stop(signal: string): Promise<void> {
+  if (stopping) return;
+  stopping = true;
+  log.info({ signal }, 'the api stops');
+  setTimeout(() => process.exit(1), SECONDS_TO_FINISH * 1000).unref();
+  const closed = once(server, 'close');
+  server.close();
+  server.closeIdleConnections();
+  await closed;
+  await sink?.close();
+  await db.close();
+  process.exit(0);
+}
+for (const signal of ['SIGTERM', 'SIGINT'] as const) process.on(signal, () => void stop(signal));
