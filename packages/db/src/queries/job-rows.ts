@@ -26,10 +26,10 @@ export function ownedBy(stored: StoredTable, tx: FirmTransaction, jobId: string)
 function rowsOf(stored: StoredTable, tx: FirmTransaction, jobId: string, where: SQL): SQL {
   const fields = stored.fields.map(({ field, column }) => sql`t.${name(column)} as ${name(field)}`);
   const order = stored.ordered ? sql`t.order_key, t.id` : sql`t.id`;
-  return sql`select ${stored.table}::text as "table", coalesce((select json_agg(r) from (
+  return sql`select ${stored.table}::text as "table", coalesce((select json_agg(whole_row) from (
     select ${separated(fields)} from ${name(stored.name)} t
     where ${ownedBy(stored, tx, jobId)} and ${where} order by ${order}
-  ) r), '[]') as rows`;
+  ) whole_row), '[]') as rows`;
 }
 
 async function readRows(
