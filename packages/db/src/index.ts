@@ -1,9 +1,18 @@
 export { createDatabase, type Database, type FirmTransaction, type Transaction } from './database.ts';
+export * from './queries/audit.ts';
+export * from './queries/decisions.ts';
+export * from './queries/deliveries.ts';
 export * from './queries/edits.ts';
+export * from './queries/firm-settings.ts';
 export * from './queries/firms.ts';
 export * from './queries/invitations.ts';
 export * from './queries/job-list.ts';
+export { loadRowLists } from './queries/job-rows.ts';
 export * from './queries/jobs.ts';
+export * from './queries/links.ts';
 export * from './queries/people.ts';
+export * from './queries/rate-counters.ts';
+export * from './queries/revisions.ts';
 export * from './queries/tokens.ts';
+export * from './queue.ts';
 export * from './queues.ts';
