@@ -11,10 +11,10 @@ import {
 import { revisionLetter } from './revision-letter.ts';
 
 test('percents have a space before the sign and keep their digits', () => {
-  expect(formatPercent(6.708)).toBe('6.71\u202f%');
+  expect(formatPercent(6.708)).toBe('6.71\u00a0%');
   expect(formatPercent(null)).toBe('');
-  expect(formatLimit('3.0')).toBe('3\u202f%');
-  expect(formatLimit(1.5)).toBe('1.5\u202f%');
+  expect(formatLimit('3.0')).toBe('3\u00a0%');
+  expect(formatLimit(1.5)).toBe('1.5\u00a0%');
 });
 
 test('moments are short, and today is said as today', () => {

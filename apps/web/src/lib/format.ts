@@ -1,14 +1,14 @@
 /** Figures, dates and sizes as they are shown: a space before %, times in the person’s zone. */
 
-const NARROW = '\u202f';
+const SPACE = '\u00a0';
 
 export function formatPercent(value: number | null | undefined, digits = 2): string {
-  return value === null || value === undefined ? '' : `${value.toFixed(digits)}${NARROW}%`;
+  return value === null || value === undefined ? '' : `${value.toFixed(digits)}${SPACE}%`;
 }
 
 /** A percent without trailing zeros, as a limit is written: `3 %`, `1.5 %`. */
 export function formatLimit(value: number | string): string {
-  return `${Number(value)}${NARROW}%`;
+  return `${Number(value)}${SPACE}%`;
 }
 
 export function formatNumber(value: number, digits = 0): string {

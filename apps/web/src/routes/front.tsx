@@ -1,4 +1,3 @@
-import { LocalNote } from '../features/accounts/components/local-note.tsx';
 import { SignInForm } from '../features/accounts/components/sign-in-form.tsx';
 import { homeOf } from '../features/accounts/hooks/use-after-sign-in.ts';
 import { useSession } from '../features/accounts/hooks/use-session.ts';
@@ -11,7 +10,7 @@ export function Component() {
     <FrontPage
       home={session?.person ? homeOf(session) : null}
       signIn={<SignInForm inline />}
-      localNote={session?.local && !session.person ? <LocalNote /> : null}
+      local={session?.local ?? false}
       cautions={<BriefCautions />}
     />
   );

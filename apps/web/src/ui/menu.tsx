@@ -30,7 +30,7 @@ export function Menu({ label, name, look = 'plain', items }: MenuProps) {
           <button
             type="button"
             aria-label={name}
-            className="min-h-11 text-copper underline decoration-1 underline-offset-2 desk:min-h-0"
+            className="min-h-11 text-copper underline decoration-1 underline-offset-2 desk:min-h-6"
           >
             {label}
           </button>

@@ -28,7 +28,7 @@ export function Rail({
   children?: ReactNode;
 }) {
   return (
-    <div data-print="never" className="hidden min-h-0 flex-col border-r border-rule desk:flex">
+    <header data-print="never" className="hidden min-h-0 flex-col border-r border-rule desk:flex">
       <Link
         to={home}
         className="flex h-19 flex-none items-center gap-2.5 border-t-2 border-b border-t-ink border-b-rule px-4 text-title font-bold text-ink no-underline"
@@ -51,7 +51,7 @@ export function Rail({
       </nav>
       <div className="min-h-0 flex-1 overflow-auto">{children}</div>
       <div className="flex-none border-t border-rule px-4 pt-2 pb-3 text-label text-ink-soft">{foot}</div>
-    </div>
+    </header>
   );
 }
 

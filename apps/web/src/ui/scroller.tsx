@@ -17,7 +17,7 @@ export function Scroller({
       // biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls has to be reachable by keyboard
       tabIndex={0}
       data-print="flow"
-      className={cx('-outline-offset-2', className)}
+      className={cx('relative -outline-offset-2', className)}
     >
       {children}
     </section>

@@ -15,7 +15,7 @@ export function Table({
   children: ReactNode;
 }) {
   return (
-    <Scroller label={textOf(caption)} className="max-w-full overflow-x-auto">
+    <Scroller label={`Table: ${textOf(caption)}`} className="max-w-full overflow-x-auto">
       <table className={cx('w-full border-collapse text-grid', className)}>
         <caption className={cx(showCaption ? 'pb-1 text-left text-label text-ink-soft' : 'sr-only')}>
           {caption}
@@ -26,7 +26,7 @@ export function Table({
   );
 }
 
-const textOf = (node: ReactNode): string => (typeof node === 'string' ? node : 'Table');
+const textOf = (node: ReactNode): string => (typeof node === 'string' ? node : 'rows');
 
 export function Th({
   numeric = false,

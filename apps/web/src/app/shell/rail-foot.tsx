@@ -16,7 +16,7 @@ interface RailFootProps {
 }
 
 const THEME_WORDS = { system: 'As the system', light: 'Light', dark: 'Dark' } as const;
-const LINK = 'min-h-11 text-copper underline decoration-1 underline-offset-2 desk:min-h-0';
+const LINK = 'min-h-11 text-copper underline decoration-1 underline-offset-2 desk:min-h-6';
 
 /** Who is here, for which firm, and what is the same on every page. */
 export function RailFoot({ person, membership, memberships }: RailFootProps) {

@@ -18,12 +18,12 @@ interface FrontPageProps {
   home: string | null;
   /** The fields to sign in with, for a visitor. */
   signIn: ReactNode;
-  /** Only on a copy that runs on its own machine. */
-  localNote: ReactNode;
+  /** A copy that runs on its own machine, with demo accounts and a mailbox. */
+  local: boolean;
   cautions: ReactNode;
 }
 
-export function FrontPage({ home, signIn, localNote, cautions }: FrontPageProps) {
+export function FrontPage({ home, signIn, local, cautions }: FrontPageProps) {
   usePageTitle('Voltage drop through a whole building');
   return (
     <div className="mx-auto flex min-h-dvh max-w-360 flex-col">
@@ -54,7 +54,9 @@ export function FrontPage({ home, signIn, localNote, cautions }: FrontPageProps)
                 <LinkButton to={paths.signUp()} look="go" big>
                   Set up your firm
                 </LinkButton>
-                <span className="text-ink-soft">the demo job of nine panels comes along</span>
+                <span className="text-ink-soft">
+                  {local ? 'or take a demo account, printed at the start' : 'with the demo job to try'}
+                </span>
               </>
             )}
           </div>
@@ -66,7 +68,6 @@ export function FrontPage({ home, signIn, localNote, cautions }: FrontPageProps)
               </div>
             ))}
           </dl>
-          {localNote}
         </div>
         <figure className="border border-rule bg-sheet p-1 desk:p-2">
           <PathFigure />
@@ -80,9 +81,10 @@ export function FrontPage({ home, signIn, localNote, cautions }: FrontPageProps)
         {!home && (
           <>
             {signIn}
-            <p className="flex flex-wrap gap-x-6 text-grid wide:flex-col">
+            <p className="flex flex-wrap gap-x-6 text-grid wide:flex-col [&>a]:min-h-6">
               <Link to={paths.signUp()}>Set up a new firm</Link>
               <Link to={paths.forgot()}>Forgot the password</Link>
+              {local && <Link to={paths.mailbox()}>Local mailbox</Link>}
             </p>
           </>
         )}

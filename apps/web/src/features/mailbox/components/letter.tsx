@@ -23,7 +23,7 @@ export function Letter({ id }: { id: string }) {
     return <ErrorState title="The message cannot be opened">{letter.error.message}</ErrorState>;
   const { subject, from, to, at, text, attachments } = letter.data;
   return (
-    <Scroller label="Message" className="h-full overflow-auto">
+    <Scroller label="Text of the message" className="h-full overflow-auto">
       <article className="max-w-200 px-4 py-3 desk:px-6">
         <Link to={paths.mailbox()} className="inline-flex min-h-11 items-center desk:hidden">
           All messages

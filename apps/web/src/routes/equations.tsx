@@ -1,0 +1,1 @@
+export { EquationsPlace as Component } from '../features/equations/components/equations-place.tsx';

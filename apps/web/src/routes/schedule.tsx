@@ -1,0 +1,1 @@
+export { SchedulePlace as Component } from '../features/schedule/components/schedule-place.tsx';

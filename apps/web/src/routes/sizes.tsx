@@ -1,0 +1,1 @@
+export { SizesPlace as Component } from '../features/sizing/components/sizes-place.tsx';
