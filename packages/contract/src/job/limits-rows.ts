@@ -5,22 +5,28 @@ import { decimalOf } from './quantity.ts';
 type LimitRow = Row<'limit'>;
 const PER_CLASS = ['feeder', 'branch', 'total'] as const;
 
+type Header = Pick<
+  Row<'job'>,
+  'limitBasis' | 'limitForce' | 'includeService' | 'includeTransformer' | 'includeSource' | 'longRun'
+>;
+
 /** The limits of a job as the job file has them. A limit at one voltage wins over one at every voltage. */
-export function limitsFromRows(rows: JobRows): Limits {
-  const job = [...rows.job.values()][0];
+export const limitsFromRows = (rows: JobRows): Limits =>
+  limitsOf([...rows.limit.values()], [...rows.job.values()][0]!);
+
+export function limitsOf(limits: readonly Omit<LimitRow, 'id'>[], header: Header): Limits {
   const value = (kind: LimitKind, ofClass: LimitRow['class'] = null): number | null => {
-    for (const row of rows.limit.values())
-      if (row.kind === kind && row.class === ofClass && row.atVolts === null) return Number(row.value);
-    return null;
+    const row = limits.find((one) => one.kind === kind && one.class === ofClass && one.atVolts === null);
+    return row ? Number(row.value) : null;
   };
   const volts = (kind: 'lowest-volts' | 'highest-volts'): Limits['lowestVolts'] => {
-    const at = [...rows.limit.values()].filter((row) => row.kind === kind && row.atVolts !== null);
+    const at = limits.filter((row) => row.kind === kind && row.atVolts !== null);
     if (at.length === 0) return value(kind);
     const entries = at.map((row): [string, number] => [decimalOf(Number(row.atVolts)), Number(row.value)]);
     return Object.fromEntries(entries.sort(([a], [b]) => Number(a) - Number(b)));
   };
   const byClass: Limits['byClass'] = {};
-  for (const row of rows.limit.values()) {
+  for (const row of limits) {
     if (row.class === null || byClass[row.class]) continue;
     const [feeder, branch, total] = PER_CLASS.map((kind) => value(kind, row.class));
     byClass[row.class] = { feeder: feeder!, branch: branch!, total: total! };
@@ -31,18 +37,18 @@ export function limitsFromRows(rows: JobRows): Limits {
     feeder: value('feeder'),
     branch: value('branch'),
     total: value('total'),
-    includeService: job?.includeService,
-    includeTransformer: job?.includeTransformer,
-    includeSource: job?.includeSource,
-    longRun: job?.longRun,
+    includeService: header.includeService,
+    includeTransformer: header.includeTransformer,
+    includeSource: header.includeSource,
+    longRun: header.longRun,
     byClass,
     starting: value('starting'),
     rise: value('rise'),
     lowestVolts: volts('lowest-volts'),
     highestVolts: volts('highest-volts'),
     rating: low === null && high === null ? null : { low, high },
-    basis: job?.limitBasis,
-    force: job?.limitForce,
+    basis: header.limitBasis,
+    force: header.limitForce,
   });
 }
 

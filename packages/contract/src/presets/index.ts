@@ -1,1 +1,2 @@
 export * from './defaults.ts';
+export * from './limit-presets.ts';
