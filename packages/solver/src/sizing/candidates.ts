@@ -35,6 +35,8 @@ export interface Candidate {
   worst: WorstLoad | null;
   /** Feeder part at every panel beyond, with its verdict. */
   panels: { id: string; feederPercent: number; verdict: Verdict }[];
+  /** The worst of the panels beyond: what a feeder is judged by; `unjudged` where there are none. */
+  feederVerdict: Verdict;
   /** The worst of the loads and panels beyond. */
   verdict: Verdict;
   /** Loads and panels beyond that are over. */
@@ -123,7 +125,7 @@ const worse = (a: Verdict, b: Verdict): Verdict => (GRAVITY.indexOf(b) > GRAVITY
 
 type Figures = Pick<
   Candidate,
-  'dropVolts' | 'dropPercent' | 'lossWatts' | 'worst' | 'panels' | 'verdict' | 'overBeyond'
+  'dropVolts' | 'dropPercent' | 'lossWatts' | 'worst' | 'panels' | 'feederVerdict' | 'verdict' | 'overBeyond'
 >;
 
 const figuresOf = (job: Job, index: number, beyond: Beyond | null, solution: Solution): Figures => {
@@ -150,13 +152,16 @@ const figuresOf = (job: Job, index: number, beyond: Beyond | null, solution: Sol
     };
   }
   const judged = [...loads, ...panels];
+  const worstOf = (list: readonly { verdict: Verdict }[]) =>
+    list.reduce<Verdict>((all, { verdict }) => worse(all, verdict), 'unjudged');
   return {
     dropVolts: own.dropVolts,
     dropPercent: own.dropPercent,
     lossWatts: own.lossWatts,
     worst,
     panels,
-    verdict: judged.reduce<Verdict>((all, { verdict }) => worse(all, verdict), 'unjudged'),
+    feederVerdict: worstOf(panels),
+    verdict: worstOf(judged),
     overBeyond: judged.filter(({ verdict }) => verdict === 'over').length,
   };
 };

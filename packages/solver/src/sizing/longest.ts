@@ -5,42 +5,57 @@ import type { Solve } from './candidates.ts';
 /** The longest run that still passes, in the job's unit of length, to the whole unit below. */
 export type Longest =
   | { kind: 'up-to'; length: number }
-  /** No length passes: what lies before it is too much already, or another limit fails. */
+  /** No length passes: what lies before the run is too much already, or another limit fails. */
   | { kind: 'none' }
   /** No limit depends on the length. */
   | { kind: 'any' };
 
 const FARTHEST = 1e6;
 
-/** Every percentage beyond a run that a limit holds: its value in one solution, in a fixed order. */
-const measures = (
-  job: Job,
-  beyond: Beyond | null,
-  solution: Solution,
-): { value: number; limit: number }[] => {
-  const { limits } = job;
-  const list: { value: number; limit: number }[] = [];
-  const add = (value: number | null | undefined, limit: number | null | undefined) =>
-    list.push({ value: value ?? 0, limit: limit ?? Number.POSITIVE_INFINITY });
-  solution.loads.forEach((load, i) => {
-    if (beyond && !beyond.loads.includes(i)) return;
-    const own = limits.byClass[job.loads[i]!.class];
-    add(load.totalPercent, load.limitPercent);
-    add(load.branchPercent, own?.branch ?? limits.branch);
-    add(load.feederPercent, own?.feeder ?? limits.feeder);
-  });
-  for (const bus of solution.buses)
-    if (!beyond || beyond.buses.has(bus.id)) add(bus.feederPercent, limits.feeder);
-  return list;
+/** Whose limits bound the length of a run, as indices in the solution. */
+interface Bound {
+  loads: readonly number[];
+  buses: readonly number[];
+}
+
+/**
+ * A branch run is bounded by every limit of the loads beyond. Any other run by the feeder part at the panels beyond,
+ * since a branch that is too long by itself says nothing about its feeder; by the loads where no panel lies beyond.
+ */
+const boundOf = (job: Job, index: number, beyond: Beyond | null, solution: Solution): Bound => {
+  const buses = solution.buses.flatMap((bus, i) =>
+    bus.verdict !== undefined && (!beyond || beyond.buses.has(bus.id)) ? [i] : [],
+  );
+  const loads = beyond ? beyond.loads : job.loads.map((_, i) => i);
+  return job.runs[index]!.kind !== 'branch' && buses.length > 0 ? { loads: [], buses } : { loads, buses };
 };
 
-const passes = (beyond: Beyond | null, solution: Solution): boolean =>
-  solution.loads.every((load, i) => (beyond && !beyond.loads.includes(i)) || load.verdict !== 'over') &&
-  solution.buses.every((bus) => (beyond && !beyond.buses.has(bus.id)) || bus.verdict !== 'over');
+/** Every percentage that bounds the length, with its limit, in a fixed order. */
+const measures = (job: Job, bound: Bound, solution: Solution): { value: number; limit: number }[] => {
+  const { limits } = job;
+  const measure = (value: number | null | undefined, limit: number | null | undefined) => ({
+    value: value ?? 0,
+    limit: limit ?? Number.POSITIVE_INFINITY,
+  });
+  const ofLoads = bound.loads.flatMap((i) => {
+    const load = solution.loads[i]!;
+    const own = limits.byClass[job.loads[i]!.class];
+    return [
+      measure(load.totalPercent, load.limitPercent),
+      measure(load.branchPercent, own?.branch ?? limits.branch),
+      measure(load.feederPercent, own?.feeder ?? limits.feeder),
+    ];
+  });
+  return [...ofLoads, ...bound.buses.map((i) => measure(solution.buses[i]!.feederPercent, limits.feeder))];
+};
+
+const passes = (bound: Bound, solution: Solution): boolean =>
+  bound.loads.every((i) => solution.loads[i]!.verdict !== 'over') &&
+  bound.buses.every((i) => solution.buses[i]!.verdict !== 'over');
 
 /**
  * Longest length by the straight line of every measure between length 0 (one solve, shared by all sizes, since no
- * size counts there) and the length as drawn, then held against the verdict itself and bisected where they part.
+ * size counts there) and the length as drawn, then held against the verdict itself.
  */
 export function longestFinder(
   job: Job,
@@ -49,27 +64,28 @@ export function longestFinder(
   scenario: Scenario,
   solve: Solve,
 ): (laid: Job, asDrawn: Solution) => Longest {
-  const length = job.runs[index]!.length;
+  const { length } = job.runs[index]!;
   const at = (laid: Job, newLength: number): Solution | null => {
     const outcome = solve(withRun(laid, index, { ...laid.runs[index]!, length: newLength }), scenario);
     return outcome.kind === 'solved' ? outcome.solution : null;
   };
   const zero = at(job, 0);
-  const atZero = zero && passes(beyond, zero) ? measures(job, beyond, zero) : null;
+  const bound = zero && boundOf(job, index, beyond, zero);
+  if (!zero || !bound || !passes(bound, zero)) return () => ({ kind: 'none' });
+  const atZero = measures(job, bound, zero);
 
   return (laid, asDrawn) => {
-    if (!atZero) return { kind: 'none' };
     const passesAt = (newLength: number): boolean => {
       const solution = newLength === length ? asDrawn : at(laid, newLength);
-      return solution !== null && passes(beyond, solution);
+      return solution !== null && passes(bound, solution);
     };
-    let guess = Number.POSITIVE_INFINITY;
+    let guess = FARTHEST;
     if (length > 0)
-      measures(job, beyond, asDrawn).forEach(({ value, limit }, i) => {
+      measures(job, bound, asDrawn).forEach(({ value, limit }, i) => {
         const slope = (value - atZero[i]!.value) / length;
-        if (slope > 0 && Number.isFinite(limit)) guess = Math.min(guess, (limit - atZero[i]!.value) / slope);
+        if (slope > 0) guess = Math.min(guess, Math.floor((limit - atZero[i]!.value) / slope));
       });
-    return searchFrom(Number.isFinite(guess) ? Math.floor(guess) : FARTHEST, passesAt);
+    return searchFrom(guess, passesAt);
   };
 }
 

@@ -17,6 +17,9 @@ export type GroundingOutcome =
   | { ok: true; size: string; tableSize: string; ratio: number; upsized: boolean }
   | { ok: false; message: string };
 
+/** Table 8 prints areas to four digits: a ratio of two of them is no better than this. */
+const AREA_ROUNDING = 5e-4;
+
 /**
  * Equipment grounding conductor of a run, one in each raceway: NEC Table 250.122 by the breaker, increased in the
  * ratio of circular mils by which the line conductors exceed the floor (250.122(B)), next size up, and never above
@@ -30,6 +33,6 @@ export function groundingConductor(q: GroundingQuery): GroundingOutcome {
   const ratio = Math.max(1, q.installedCmil / q.floorCmil);
   const wanted = Math.min(tableCmil * ratio, Math.max(q.lineCmil, 0));
   const all = sizesOf(q.material, 'awg');
-  const size = all.find((s) => s.cmil >= wanted * (1 - 1e-9)) ?? all[all.length - 1]!;
+  const size = all.find((s) => s.cmil >= wanted * (1 - AREA_ROUNDING)) ?? all[all.length - 1]!;
   return { ok: true, size: size.size, tableSize, ratio, upsized: size.cmil > tableCmil };
 }
