@@ -15,6 +15,7 @@ import type { Call } from '../../http/call.ts';
 import { issueCsrfToken } from '../../http/csrf.ts';
 import type { Frame } from '../../http/frame.ts';
 import type { Person } from '../../platform/caller.ts';
+import { DONE } from '../../platform/done.ts';
 import { Refusal, refuse } from '../../platform/refusal.ts';
 import * as accounts from './accounts-service.ts';
 import { accept, readInvitation as openedInvitation } from './invitations-service.ts';
@@ -43,11 +44,11 @@ export function registerAccounts({ deps, mount }: Frame): void {
   });
   mount(signOut, async ({ request }) => {
     await endSession(request);
-    return { ok: true };
+    return DONE;
   });
   mount(requestPasswordReset, async ({ body }) => {
     await accounts.requestReset(deps, body.email);
-    return { ok: true };
+    return DONE;
   });
   mount(resetPassword, ({ body }) => accounts.resetPassword(deps, body.token, body.password));
   mount(readInvitation, ({ body }) => openedInvitation(deps, body.token));

@@ -1,6 +1,5 @@
 import { randomUUID } from 'node:crypto';
 import {
-  addAudit,
   addMember,
   createFirm,
   createPerson,
@@ -10,6 +9,7 @@ import {
   membershipsOf,
   personByEmail,
   personById,
+  recordAudit,
   setPassword,
   useToken,
 } from '@farlug/db';
@@ -17,6 +17,7 @@ import { hashPassword, passwordHolds } from '../../auth/passwords.ts';
 import type { Deps } from '../../deps.ts';
 import { accountToken, tokenHash } from '../../platform/account-token.ts';
 import type { Person } from '../../platform/caller.ts';
+import { DONE, type Done } from '../../platform/done.ts';
 import { type Refusal, refusalAsValue, refuse, refuseField } from '../../platform/refusal.ts';
 
 const RESET_LINK_MS = 3600_000;
@@ -49,7 +50,7 @@ export async function signUp(
         );
       await createFirm(tx, { name: firmName });
       await addMember(tx, person.id, 'admin');
-      await addAudit(tx, { what: 'signed the firm up', subject: firmName });
+      await recordAudit(tx, 'signed the firm up', firmName);
       return person;
     }),
   );
@@ -74,18 +75,14 @@ export async function requestReset(deps: Deps, email: string): Promise<void> {
 }
 
 /** Works once; ends every session of the person. */
-export async function resetPassword(
-  deps: Deps,
-  token: string,
-  password: string,
-): Promise<{ ok: true } | Refusal> {
+export async function resetPassword(deps: Deps, token: string, password: string): Promise<Done | Refusal> {
   const passwordHash = await hashPassword(password);
   return deps.db.global(async (tx) => {
     const used = await useToken(tx, tokenHash(token), 'reset');
     if (used?.personId == null)
       return refuse('link_gone', 'This link was used already or is too old. Ask for a new one.');
     await setPassword(tx, used.personId, passwordHash);
-    return { ok: true } as const;
+    return DONE;
   });
 }
 
@@ -98,7 +95,7 @@ export async function changePassword(
     current,
     password,
   }: { person: Person; sessionId: string; current: string; password: string },
-): Promise<{ ok: true } | Refusal> {
+): Promise<Done | Refusal> {
   const stored = await deps.db.global((tx) => personById(tx, person.id));
   if (!(await passwordHolds(stored?.passwordHash ?? null, current)))
     return refuseField('wrong_credentials', 'current', 'This is not your present password.');
@@ -107,5 +104,5 @@ export async function changePassword(
     await setPassword(tx, person.id, passwordHash, sessionId);
     await endTokensOf(tx, person.id, 'reset');
   });
-  return { ok: true };
+  return DONE;
 }

@@ -3,11 +3,11 @@ import type { FirmRole } from '@farlug/contract/route';
 import { freshPassword } from '@farlug/contract/routes';
 import {
   acceptInvitation,
-  addAudit,
   addMember,
   createPerson,
   invitationOfToken,
   personByEmail,
+  recordAudit,
   type TokenInvitation,
   useToken,
 } from '@farlug/db';
@@ -76,7 +76,7 @@ function join(
           'This address has got an account: use its password.',
         );
       await addMember(tx, person.id, role);
-      await addAudit(tx, { what: `joined as ${role}`, subject: email });
+      await recordAudit(tx, `joined as ${role}`, email);
       return person;
     }),
   );

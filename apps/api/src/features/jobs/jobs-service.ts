@@ -15,12 +15,12 @@ import {
 } from '@farlug/db';
 import type { Deps } from '../../deps.ts';
 import type { Member } from '../../platform/caller.ts';
+import { DONE, type Done } from '../../platform/done.ts';
 import { type Refusal, refuse } from '../../platform/refusal.ts';
 import { wrongRows } from './job-rows-check.ts';
 import { jobFileName, jobSummaryOf, openJobOf } from './jobs-presenter.ts';
 
 type Created = { id: string; headSeq: number };
-type Done = { ok: true };
 
 const noJob = () => refuse('not_found', 'There is no such job in this firm.');
 const asMember = <T>(deps: Deps, { firmId, person }: Member, run: (tx: FirmTransaction) => Promise<T>) =>
@@ -88,7 +88,7 @@ export async function archiveJob(
   jobId: string,
   archived: boolean,
 ): Promise<Done | Refusal> {
-  return (await asMember(deps, member, (tx) => setArchived(tx, jobId, archived))) ? { ok: true } : noJob();
+  return (await asMember(deps, member, (tx) => setArchived(tx, jobId, archived))) ? DONE : noJob();
 }
 
 export async function deleteJob(deps: Deps, member: Member, jobId: string): Promise<Done | Refusal> {
@@ -99,7 +99,7 @@ export async function deleteJob(deps: Deps, member: Member, jobId: string): Prom
       'conflict',
       'Reports were issued for this job, so it cannot be deleted. Archive it instead.',
     );
-  return { ok: true };
+  return DONE;
 }
 
 export async function saveVerdict(
@@ -108,7 +108,7 @@ export async function saveVerdict(
   jobId: string,
   verdict: Verdict,
 ): Promise<Done | Refusal> {
-  return (await asMember(deps, member, (tx) => saveJobVerdict(tx, jobId, verdict))) ? { ok: true } : noJob();
+  return (await asMember(deps, member, (tx) => saveJobVerdict(tx, jobId, verdict))) ? DONE : noJob();
 }
 
 export interface JobFile {
