@@ -1,3 +1,4 @@
+import { LIMIT_PRESETS } from '@farlug/contract/presets';
 import { useMembership } from '../features/accounts/hooks/use-membership.ts';
 import { useFirm } from '../features/firm/hooks/use-firm.ts';
 import { JobSettingsPage } from '../features/jobs/components/job-settings-page.tsx';
@@ -11,7 +12,7 @@ export function Component() {
   return (
     <JobSettingsPage
       rows={rows}
-      presets={firm.data?.presets ?? []}
+      presets={[...(firm.data?.presets ?? []), ...LIMIT_PRESETS]}
       archived={archived}
       apply={(edit) => replica.apply(edit)}
     />

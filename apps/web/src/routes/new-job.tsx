@@ -1,3 +1,4 @@
+import { LIMIT_PRESETS } from '@farlug/contract/presets';
 import { useMembership } from '../features/accounts/hooks/use-membership.ts';
 import { useFirm } from '../features/firm/hooks/use-firm.ts';
 import { NewJobPage } from '../features/jobs/components/new-job-page.tsx';
@@ -14,5 +15,7 @@ export function Component() {
         {firm.error.message}
       </ErrorState>
     );
-  return <NewJobPage firm={firmId} units={firm.data.settings} presets={firm.data.presets} />;
+  return (
+    <NewJobPage firm={firmId} units={firm.data.settings} presets={[...firm.data.presets, ...LIMIT_PRESETS]} />
+  );
 }

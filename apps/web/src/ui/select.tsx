@@ -6,6 +6,8 @@ export interface Choice<T extends string = string> {
   value: T;
   label: string;
   disabled?: boolean;
+  /** Under which heading of the list it stands. */
+  group?: string;
 }
 
 interface SelectProps<T extends string> extends Omit<ComponentProps<'select'>, 'value' | 'onChange'> {
@@ -41,16 +43,15 @@ export function Select<T extends string>({
         )}
         {...rest}
       >
-        {choices.map((choice) => (
-          <option
-            key={choice.value}
-            value={choice.value}
-            disabled={choice.disabled}
-            className="bg-sheet font-normal text-ink"
-          >
-            {choice.label}
-          </option>
-        ))}
+        {choices.filter((choice) => !choice.group).map(optionOf)}
+        {[...new Set(choices.map((choice) => choice.group))].map(
+          (group) =>
+            group && (
+              <optgroup key={group} label={group} className="bg-sheet font-normal text-ink">
+                {choices.filter((choice) => choice.group === group).map(optionOf)}
+              </optgroup>
+            ),
+        )}
       </select>
       <svg
         viewBox="0 0 10 6"
@@ -65,3 +66,14 @@ export function Select<T extends string>({
     </span>
   );
 }
+
+const optionOf = (choice: Choice) => (
+  <option
+    key={choice.value}
+    value={choice.value}
+    disabled={choice.disabled}
+    className="bg-sheet font-normal text-ink"
+  >
+    {choice.label}
+  </option>
+);

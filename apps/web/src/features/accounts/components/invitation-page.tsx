@@ -22,7 +22,8 @@ export function InvitationPage() {
     staleTime: Number.POSITIVE_INFINITY,
   });
   const refused = invitation.error instanceof ApiError ? invitation.error.code : null;
-  if (token === null || refused === 'link_gone' || refused === 'invalid') return <LinkGone />;
+  if (token === null || refused === 'link_gone' || refused === 'invalid')
+    return <LinkGone message={refused === 'link_gone' ? invitation.error?.message : undefined} />;
   if (invitation.isError)
     return (
       <main id="main">

@@ -1,4 +1,5 @@
 import { newId } from '@farlug/contract/edit';
+import { LIMIT_PRESETS } from '@farlug/contract/presets';
 import { useState } from 'react';
 import { formatLimit } from '../../../lib/format.ts';
 import { Button } from '../../../ui/button.tsx';
@@ -98,6 +99,29 @@ export function PresetsPart({
           </tbody>
         </Table>
       )}
+      <PartHeading title="Codes and standards" note="Offered beside your own on every job." />
+      <Table caption="Limits of codes and standards">
+        <thead>
+          <tr>
+            <Th>Name</Th>
+            <Th>Clause</Th>
+            <Th>Edition</Th>
+            <Th>Standing</Th>
+            <Th>How it was seen</Th>
+          </tr>
+        </thead>
+        <tbody>
+          {LIMIT_PRESETS.map((preset) => (
+            <tr key={preset.id}>
+              <RowHead className="min-w-48">{preset.name}</RowHead>
+              <Td className="min-w-48">{preset.clause}</Td>
+              <Td>{preset.edition}</Td>
+              <Td>{preset.standing}</Td>
+              <Td className="text-ink-soft">{preset.verified}</Td>
+            </tr>
+          ))}
+        </tbody>
+      </Table>
       {open && (
         <EditPreset
           preset={open.preset}

@@ -55,7 +55,7 @@ export function FrontPage({ home, signIn, local, cautions }: FrontPageProps) {
                   Set up your firm
                 </LinkButton>
                 <span className="text-ink-soft">
-                  {local ? 'or take a demo account, printed at the start' : 'with the demo job to try'}
+                  {local ? 'or use a demo account' : 'with the demo job to try'}
                 </span>
               </>
             )}

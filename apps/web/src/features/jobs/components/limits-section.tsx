@@ -1,4 +1,5 @@
-import type { presetView } from '@farlug/contract/routes';
+import type { LimitPreset } from '@farlug/contract/presets';
+import type { presetBody } from '@farlug/contract/routes';
 import { FORCES, type Force } from '@farlug/solver/job';
 import type { z } from 'zod';
 import { FORCE_WORDS, LIMIT_WORDS } from '../../../lib/job-words.ts';
@@ -11,7 +12,16 @@ import { ClassLimits } from './class-limits.tsx';
 import { type DraftForm, DraftText, type LimitsForm, NumberField } from './draft-fields.tsx';
 import { VoltsLimits } from './volts-limits.tsx';
 
-export type Preset = z.output<typeof presetView>;
+/** A firm’s own, or one of a code or standard that says how far it was seen. */
+export type Preset = z.output<typeof presetBody> &
+  Partial<Pick<LimitPreset, 'edition' | 'standing' | 'verified'>>;
+
+const OWN = 'Your firm';
+const CODES = 'Codes and standards';
+const groundOf = ({ clause, edition, standing, verified }: Preset) =>
+  [clause, edition, standing, verified && `figures ${verified}; confirm them against the adopted edition`]
+    .filter(Boolean)
+    .join('. ');
 
 const INCLUDES = [
   ['includeService', 'Service conductors'],
@@ -45,13 +55,17 @@ export function LimitsSection({ form, presets }: { form: DraftForm; presets: rea
         title="Limits"
         note="How far the volts may fall. Ask which electrical and which energy code is adopted, in which edition."
       >
-        <Field label="Preset" className="desk:col-span-2" hint={chosen?.clause}>
+        <Field label="Preset" className="desk:col-span-2" hint={chosen && groundOf(chosen)}>
           <Select
             value={chosen ? chosen.name : ''}
             onValue={take}
             choices={[
               { value: '', label: 'Typed here' },
-              ...presets.map((preset) => ({ value: preset.name, label: preset.name })),
+              ...presets.map((preset) => ({
+                value: preset.name,
+                label: preset.name,
+                group: preset.edition === undefined ? OWN : CODES,
+              })),
             ]}
           />
         </Field>

@@ -8,7 +8,7 @@ import { presetErrors } from '../check-draft.ts';
 import { limitDrafts, noLimits, type PresetDraft } from '../job-draft.ts';
 import { limitFields } from '../rows-of-draft.ts';
 import { DraftText } from './draft-fields.tsx';
-import { LimitFigures, type Preset } from './limits-section.tsx';
+import { LimitFigures } from './limits-section.tsx';
 
 type PresetBody = z.output<typeof presetBody>;
 
@@ -25,7 +25,7 @@ const BLANK: PresetDraft = {
   atVolts: [],
 };
 
-const draftOf = ({ clause, force, limits, name, ...rest }: Preset): PresetDraft => ({
+const draftOf = ({ clause, force, limits, name, ...rest }: PresetBody): PresetDraft => ({
   name,
   limitBasis: clause,
   limitForce: force,
@@ -48,7 +48,7 @@ const bodyOf = (draft: PresetDraft): PresetBody => ({
 });
 
 interface PresetEditorProps {
-  preset: Preset | null;
+  preset: PresetBody | null;
   onClose: () => void;
   save: (body: PresetBody) => Promise<ApiError | null>;
 }
