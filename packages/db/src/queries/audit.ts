@@ -1,13 +1,16 @@
 import { randomUUID } from 'node:crypto';
-import { and, desc, eq, lt } from 'drizzle-orm';
+import { and, desc, eq, lt, sql } from 'drizzle-orm';
 import type { FirmTransaction } from '../database.ts';
 import { auditEvent, person } from '../schema/index.ts';
+
+/** In milliseconds, as a page's last time comes back from a browser. */
+const NOW = sql`date_trunc('milliseconds', clock_timestamp())`;
 
 /** Records who did what to whom, in the transaction that does it. */
 export async function recordAudit(tx: FirmTransaction, what: string, subject: string): Promise<void> {
   await tx.sql
     .insert(auditEvent)
-    .values({ firmId: tx.firmId, id: randomUUID(), personId: tx.personId, what, subject });
+    .values({ firmId: tx.firmId, id: randomUUID(), at: NOW, personId: tx.personId, what, subject });
 }
 
 export interface AuditEvent {
