@@ -49,12 +49,15 @@ function runGap(row: Row<'run'>): [string, string] | null {
   if (row.fromBusId === row.toBusId) return ['toBusId', 'The run ends at the point where it starts.'];
   if (row.ohmsR !== null && row.size !== null)
     return ['size', 'Both a size and ohms of its own are given: keep one.'];
-  if (row.ohmsR === null && row.size === null) return ['size', 'The size of the conductors is missing.'];
+  if (row.ohmsR === null && row.size === null && !isZero(row.length))
+    return ['size', 'The size of the conductors is missing.'];
   if (row.ohmsR !== null && row.ohmsPer === null)
     return ['ohmsPer', 'Ohms are given without the length that they are for.'];
   if (row.length === null) return ['length', 'The length is missing.'];
   return null;
 }
+
+const isZero = (length: string | null): boolean => length !== null && Number.parseFloat(length) === 0;
 
 function transformerGap(row: Row<'transformer'>): [string, string] | null {
   const needed = [

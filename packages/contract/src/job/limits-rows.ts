@@ -1,4 +1,4 @@
-import { type Limits, limitsSchema } from '@farlug/solver/job';
+import type { Limits } from '@farlug/solver/job';
 import type { JobRows, LimitKind, Row } from '../rows/index.ts';
 import { decimalOf } from './quantity.ts';
 
@@ -33,7 +33,7 @@ export function limitsOf(limits: readonly Omit<LimitRow, 'id'>[], header: Header
   }
   const low = value('rating-low');
   const high = value('rating-high');
-  return limitsSchema.parse({
+  return {
     feeder: value('feeder'),
     branch: value('branch'),
     total: value('total'),
@@ -49,7 +49,7 @@ export function limitsOf(limits: readonly Omit<LimitRow, 'id'>[], header: Header
     rating: low === null && high === null ? null : { low, high },
     basis: header.limitBasis,
     force: header.limitForce,
-  });
+  };
 }
 
 export function limitRowsOf(limits: Limits, makeId: () => string): LimitRow[] {

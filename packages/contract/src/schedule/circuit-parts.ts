@@ -43,23 +43,21 @@ export function circuitParts(rows: JobRows, circuitId: string): CircuitParts | n
   };
 }
 
-/** Runs in the order in which they are met on the way out from `busId`; what is not connected comes last. */
+/** Runs in the order in which a walk outward from `busId` meets them, each leg to its end; what is apart comes last. */
 function outward(runs: readonly Row<'run'>[], busId: string): Row<'run'>[] {
   if (runs.length < 2) return [...runs];
-  const left = new Set(runs);
-  const met: Row<'run'>[] = [];
-  const queue = [busId];
-  const seen = new Set(queue);
-  for (let bus = queue.shift(); bus !== undefined; bus = queue.shift())
+  const met = new Set<Row<'run'>>();
+  const walk = (bus: string) => {
     for (const run of runs) {
-      if (!left.has(run) || (run.fromBusId !== bus && run.toBusId !== bus)) continue;
-      left.delete(run);
-      met.push(run);
+      if (met.has(run) || (run.fromBusId !== bus && run.toBusId !== bus)) continue;
+      met.add(run);
       const far = run.fromBusId === bus ? run.toBusId : run.fromBusId;
-      if (!seen.has(far)) queue.push(far);
-      seen.add(far);
+      if (far !== busId) walk(far);
     }
-  return [...met, ...left];
+  };
+  walk(busId);
+  for (const run of runs) met.add(run);
+  return [...met];
 }
 
 export const spacesOf = (parts: Pick<CircuitParts, 'panel' | 'breakers'>): number[] =>
