@@ -37,6 +37,11 @@ export function createDatabase(url: string, { connections = 10 }: { connections?
   async function transaction<T>(run: (tx: Transaction) => Promise<T>): Promise<T> {
     const client = await pool.connect();
     let broken: Error | undefined;
+    const onBreak = (error: Error) => {
+      broken = error;
+    };
+    // The query that was under way fails by itself; without a listener the whole process would end.
+    client.on('error', onBreak);
     try {
       await client.query('begin');
       const executeSql: SqlExecutor['executeSql'] = (text, values) => client.query(text, values);
@@ -44,11 +49,10 @@ export function createDatabase(url: string, { connections = 10 }: { connections?
       await client.query('commit');
       return result;
     } catch (error) {
-      await client.query('rollback').catch((failure: Error) => {
-        broken = failure;
-      });
+      await client.query('rollback').catch(onBreak);
       throw error;
     } finally {
+      client.off('error', onBreak);
       client.release(broken);
     }
   }

@@ -23,7 +23,7 @@ export async function ensureRoles(
     );
 }
 
-async function ensureRole(client: pg.Client, role: string, password: string): Promise<void> {
+export async function ensureRole(client: pg.Client, role: string, password: string): Promise<void> {
   const { rowCount } = await client.query('select 1 from pg_roles where rolname = $1', [role]);
   const secret = client.escapeLiteral(password);
   if (rowCount) await client.query(`alter role ${role} login password ${secret}`);
