@@ -1,12 +1,14 @@
 // `npm start`: PostgreSQL, migrations, the built pages, api, worker and a local mail sink, behind one port.
+import path from 'node:path';
 import { useCluster } from './cluster.mjs';
 import { root } from './gate/stage.ts';
 import { portNumber } from './port.mjs';
-import { launch } from './product/product.ts';
+import { lastLines, launch } from './product/product.ts';
 import { keptSecrets } from './product/secrets.ts';
 import { buildWeb } from './product/web-build.ts';
 import { printWelcome } from './product/welcome.ts';
 
+const log = path.join(root, '.data/product.log');
 const closers: (() => Promise<void>)[] = [];
 let closing = false;
 
@@ -50,13 +52,14 @@ async function start(): Promise<void> {
     ownerUrl: cluster.url,
     secrets: keptSecrets(`${root}/.data`),
     mailDirectory: `${root}/.data/mail`,
+    log,
     onStarted: (stop) => closers.push(stop),
   });
   const product = await timed('database, api and worker', launching);
-  printWelcome(product.address);
+  printWelcome(product.address, path.relative(process.cwd(), log));
   const broken = await product.broken;
   if (closing) return;
-  process.stderr.write(`\n${broken}: stopping the rest\n`);
+  process.stderr.write(`\n${lastLines(log)}\n\n${broken}: stopping the rest\n`);
   await close(1);
 }
 

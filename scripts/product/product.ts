@@ -1,4 +1,4 @@
-import { mkdirSync } from 'node:fs';
+import { mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { migrate } from '../../packages/db/src/migrate.ts';
 import { root } from '../gate/stage.ts';
@@ -13,8 +13,8 @@ export interface LaunchOptions {
   secrets: Secrets;
   /** Where the local mail sink keeps its messages. */
   mailDirectory: string;
-  /** File for what the processes say; without it they speak to the terminal. */
-  log?: string;
+  /** File for what the processes say. */
+  log: string;
   /** Called as soon as there is something to stop, before the product can serve. */
   onStarted?: (stop: () => Promise<void>) => void;
 }
@@ -34,6 +34,8 @@ export async function launch(options: LaunchOptions): Promise<Product> {
     workerPassword: options.secrets.WORKER_PASSWORD,
   });
   mkdirSync(options.mailDirectory, { recursive: true });
+  mkdirSync(path.dirname(options.log), { recursive: true });
+  writeFileSync(options.log, '');
   const address = `http://127.0.0.1:${options.port}`;
   const shared = {
     NODE_ENV: 'production',
@@ -61,7 +63,12 @@ export async function launch(options: LaunchOptions): Promise<Product> {
   const refusal = await Promise.race([broken, answers(options.port)]);
   if (refusal === undefined) return { address, broken, stop };
   await stop();
-  throw new Error(refusal);
+  throw new Error(`${refusal}\n${lastLines(options.log)}`);
+}
+
+/** The end of what the processes said, for whoever has to find out why one of them ended. */
+export function lastLines(log: string): string {
+  return readFileSync(log, 'utf8').trimEnd().split('\n').slice(-20).join('\n');
 }
 
 async function answers(port: number): Promise<string | undefined> {

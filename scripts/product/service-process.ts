@@ -1,5 +1,5 @@
 import { type ChildProcess, spawn } from 'node:child_process';
-import { openSync } from 'node:fs';
+import { closeSync, openSync } from 'node:fs';
 import path from 'node:path';
 import { root } from '../gate/stage.ts';
 
@@ -20,9 +20,9 @@ export function startService(
   name: string,
   file: string,
   env: NodeJS.ProcessEnv,
-  log?: string,
+  log: string,
 ): ServiceProcess {
-  const output = log === undefined ? 'inherit' : openSync(log, 'a');
+  const output = openSync(log, 'a');
   const child = spawn(
     process.execPath,
     ['--import', 'tsx', '--import', path.join(root, 'scripts/product/follow-parent.mjs'), file],
@@ -33,6 +33,7 @@ export function startService(
       detached: true,
     },
   );
+  closeSync(output);
   child.channel?.unref();
   const ended = new Promise<string>((resolve) => {
     child.once('error', (error) => resolve(error.message));
