@@ -50,7 +50,11 @@ export function createFrame(deps: Deps): Frame {
     };
     const run: RequestHandler = async (request, response) => {
       const call = callOf(route, admissions.get(request)!, request, response);
-      const answer = call instanceof Refusal ? call : await handler(call);
+      if (call instanceof Refusal) {
+        sendRefusal(call, request, response);
+        return;
+      }
+      const answer = await handler(call);
       if (answer instanceof Refusal) answerRefusal(deps, route, answer, request, response);
       else if (route.kind === 'file') sendFile(answer as FileAnswer, response);
       else sendJson(route, answer, response, deps.config.checkResponses);
