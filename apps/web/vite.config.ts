@@ -2,7 +2,7 @@ import tailwindcss from '@tailwindcss/vite';
 import react from '@vitejs/plugin-react';
 import { defineConfig } from 'vite';
 
-const api = process.env.API_URL ?? 'http://127.0.0.1:3000';
+const api = process.env.API_URL ?? 'http://127.0.0.1:8440';
 
 export default defineConfig({
   plugins: [react(), tailwindcss()],

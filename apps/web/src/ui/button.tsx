@@ -10,7 +10,7 @@ export type ButtonLook = 'plain' | 'go' | 'line' | 'bare' | 'danger';
 
 const LOOKS: Record<ButtonLook, string> = {
   plain: 'border-rule bg-sheet text-ink hover:border-line',
-  go: 'border-copper bg-copper font-bold text-on-copper hover:opacity-90',
+  go: 'border-copper bg-copper font-bold text-on-copper hover:bg-[color-mix(in_srgb,var(--copper)_86%,var(--ink))]',
   line: 'border-copper bg-transparent font-bold text-copper hover:bg-wash',
   bare: 'border-transparent bg-transparent px-0! text-copper underline decoration-1 underline-offset-3 hover:decoration-2',
   danger: 'border-over bg-sheet font-bold text-over hover:bg-faint',

@@ -1,13 +1,11 @@
-import { rowsFromJob } from '@farlug/contract/job';
 import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { paths } from '../../../app/paths.ts';
 import { Button, LinkButton } from '../../../ui/button.tsx';
 import { EmptyState } from '../../../ui/empty-state.tsx';
 import { Message } from '../../../ui/message.tsx';
-import { fetchDemoJob } from '../demo-jobs.ts';
+import { demoJobRows } from '../demo-jobs.ts';
 import { useJobActions } from '../hooks/use-job-actions.ts';
-import { readJobFile } from '../read-job-file.ts';
 
 /** What to do first, with the demo job as a copy to try everything on. */
 export function NoJobs({ firm }: { firm: string }) {
@@ -23,11 +21,9 @@ export function NoJobs({ firm }: { firm: string }) {
     setRefused(refusal);
   };
   const copyDemo = async (): Promise<string | null> => {
-    const text = await fetchDemoJob();
-    if (text === null) return 'The demo job cannot be fetched now. Try again in a moment.';
-    const read = readJobFile(text, text.length);
-    if (!read.ok) return read.reason;
-    const outcome = await create(rowsFromJob(read.job));
+    const rows = await demoJobRows();
+    if (rows === null) return 'The demo job cannot be fetched now. Try again in a moment.';
+    const outcome = await create(rows);
     if (!outcome.ok) return outcome.error.message;
     navigate(paths.schedule(firm, outcome.data.id));
     return null;
