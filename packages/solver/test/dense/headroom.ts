@@ -1,4 +1,3 @@
-import type { Job } from '@farlug/solver/job';
 import { mul, polar, scale, unit } from './complex.ts';
 import type { ServedLoad } from './sinks.ts';
 import { type FixedSink, NotServed } from './solve.ts';
@@ -16,36 +15,47 @@ export const extraSinks = (item: ServedLoad, place: string, amps: number): Fixed
       ),
     }));
 
-const NEVER = 1e9;
+const NEVER = 1e7;
 
-/** The largest amps for which `trips` is false, by doubling and bisection; `null` where it never trips. */
-export const largestBefore = (trips: (amps: number) => boolean): number | null => {
-  const over = (amps: number): boolean => {
+/**
+ * The amps at which `excess` first reaches zero, by doubling and false position (Illinois); 0 where it is above
+ * already, `null` where it never gets there. A network that cannot be solved counts as over.
+ */
+export const largestBefore = (excess: (amps: number) => number): number | null => {
+  const measure = (amps: number): number => {
     try {
-      return trips(amps);
+      return excess(amps);
     } catch (error) {
-      if (error instanceof NotServed) return true;
+      if (error instanceof NotServed) return Number.POSITIVE_INFINITY;
       throw error;
     }
   };
-  if (over(0)) return 0;
-  let high = 1e-3;
   let low = 0;
-  while (!over(high)) {
-    low = high;
+  let atLow = measure(0);
+  if (atLow >= 0) return 0;
+  let high = 1;
+  let atHigh = measure(high);
+  while (atHigh < 0) {
+    [low, atLow] = [high, atHigh];
     high *= 2;
     if (high > NEVER) return null;
+    atHigh = measure(high);
   }
-  while (high - low > 1e-12 * high) {
-    const middle = (low + high) / 2;
-    if (middle === low || middle === high) break;
-    if (over(middle)) high = middle;
-    else low = middle;
+  let side = 0;
+  for (let round = 0; round < 200 && high - low > 1e-11 * high; round++) {
+    const slope = Number.isFinite(atHigh) && round % 20 !== 19;
+    const middle = slope ? low + ((high - low) * -atLow) / (atHigh - atLow) : (low + high) / 2;
+    const value = measure(middle);
+    if (Math.abs(value) < 1e-13) return middle;
+    if (value >= 0) {
+      [high, atHigh] = [middle, value];
+      if (side === 1) atLow /= 2;
+      side = 1;
+    } else {
+      [low, atLow] = [middle, value];
+      if (side === -1 && Number.isFinite(atHigh)) atHigh /= 2;
+      side = -1;
+    }
   }
   return low;
 };
-
-export const isLinear = (job: Job): boolean =>
-  job.angle === 'nominal' &&
-  job.loads.every((load) => load.behaviour !== 'power') &&
-  job.runs.every((run) => run.temperature !== 'operating');

@@ -9,6 +9,8 @@ export interface Judgement {
   applied: string[];
   total: number;
   totalLimit: number | null;
+  /** How far the worst limit that more current can break is overstepped, in its own unit; null without one. */
+  excess: number | null;
 }
 
 /** More than 1e-9 relative above. */
@@ -75,5 +77,8 @@ export const judge = (
         : broken.length > 0
           ? 'rise'
           : 'within';
-  return { verdict, broken, applied: applied.map(([name]) => name), total, totalLimit };
+  const breakable = applied.filter(([name]) => name !== 'starting' && name !== 'rise');
+  const excess =
+    breakable.length === 0 ? null : Math.max(...breakable.map(([, value, limit]) => value! - limit!));
+  return { verdict, broken, applied: applied.map(([name]) => name), total, totalLimit, excess };
 };

@@ -94,15 +94,17 @@ const loadResults = (
     const full = worstTurn(() => []);
     const own =
       scenario === 'each-circuit' ? full : figures(scenario === 'starting' && start ? start : shown);
-    const applies = full.judgement.applied.filter((name) => name !== 'starting' && name !== 'rise');
+    const over = full.judgement.verdict === 'over';
     const headroomAmps =
-      applies.length === 0
+      full.judgement.excess === null
         ? null
-        : largestBefore((amps) =>
-            worstTurn((at) =>
-              amps === 0 ? [] : extraSinks(item, at.reading.bus, amps),
-            ).judgement.broken.some((name) => applies.includes(name)),
-          );
+        : over
+          ? 0
+          : largestBefore(
+              (amps) =>
+                worstTurn((at) => (amps === 0 ? [] : extraSinks(item, at.reading.bus, amps))).judgement
+                  .excess!,
+            );
     const { reading, split, judgement } = own;
     return {
       id: load.id,

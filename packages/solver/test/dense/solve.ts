@@ -37,7 +37,7 @@ export interface Solved {
 }
 
 type Celsius = Map<string, number>;
-const MOST_ROUNDS = 5000;
+const MOST_ROUNDS = 600;
 
 /** One network, one state, solved anew from nothing: dense, no superposition, iterated until nothing moves. */
 export const solveState = (
@@ -64,8 +64,8 @@ export const solveState = (
     const next = temperatures(job, solved, hot);
     const moved = Math.max(...[...next].map(([key, t]) => Math.abs(t - celsius.get(key)!)));
     celsius = next;
-    if (moved < 1e-11) return warm(celsius);
-    if (!Number.isFinite(moved) || moved > 1e6) break;
+    if (moved < 2e-8) return warm(celsius);
+    if (!Number.isFinite(moved) || moved > 2000 || round > 120) break;
   }
   throw new NotServed('conductor temperatures do not settle');
 };
@@ -107,9 +107,8 @@ const settle = (network: Network, system: System, loads: ServedLoad[], state: St
     const moved = Math.max(...next.map((v, k) => abs(sub(v, voltages[k]!))));
     const top = Math.max(...next.map(abs));
     voltages = next;
-    if (moved <= 1e-14 * top) break;
+    if (moved <= 1e-13 * top) break;
     if (round > MOST_ROUNDS || !Number.isFinite(moved)) {
-      if (moved <= 1e-12 * top) break;
       throw new NotServed('no solution');
     }
   }

@@ -72,6 +72,15 @@ interface Step {
 
 /** Fewest steps from one bus to another over closed runs and transformers, ties in file order. */
 export const pathBetween = (job: Job, from: string, to: string): Step[] => {
+  const known = paths.get(job) ?? new Map<string, Map<string, Step[]>>();
+  paths.set(job, known);
+  if (!known.has(from)) known.set(from, pathsFrom(job, from));
+  return known.get(from)!.get(to)!;
+};
+
+const paths = new WeakMap<Job, Map<string, Map<string, Step[]>>>();
+
+const pathsFrom = (job: Job, from: string): Map<string, Step[]> => {
   const perUnit = job.lengthUnit === 'ft' ? 0.3048 : 1;
   const edges = [
     ...job.runs
@@ -87,7 +96,7 @@ export const pathBetween = (job: Job, from: string, to: string): Step[] => {
       arrived.set(far, [...steps, { kind: edge.kind, near, far, metres: edge.metres }]);
     }
   }
-  return arrived.get(to)!;
+  return arrived;
 };
 
 /** The five parts of the percent at a reading; `begins` are the buses where its circuit begins. */
