@@ -43,6 +43,7 @@ export function DefaultsPart({ firm, actions, mayManage }: FirmPartProps) {
               <Td className="min-w-56">
                 {mayManage ? (
                   <TextInput
+                    compact
                     aria-label={`House rule: ${text}`}
                     maxLength={80}
                     value={form.values[id] ?? ''}

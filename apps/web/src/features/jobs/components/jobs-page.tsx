@@ -92,7 +92,7 @@ export function JobsPage({ firm, firmName, cautions }: JobsPageProps) {
         <Field label="Search name, address, permit" className="w-full desk:w-72">
           <TextInput
             type="search"
-            className="desk:h-8"
+            compact
             maxLength={200}
             value={search}
             onChange={(event) => change('q', event.target.value)}

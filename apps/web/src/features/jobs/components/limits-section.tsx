@@ -19,9 +19,7 @@ export type Preset = z.output<typeof presetBody> &
 const OWN = 'Your firm';
 const CODES = 'Codes and standards';
 const groundOf = ({ clause, edition, standing, verified }: Preset) =>
-  [clause, edition, standing, verified && `figures ${verified}; confirm them against the adopted edition`]
-    .filter(Boolean)
-    .join('. ');
+  [clause, edition, standing, verified && `figures ${verified}`].filter(Boolean).join('; ');
 
 const INCLUDES = [
   ['includeService', 'Service conductors'],

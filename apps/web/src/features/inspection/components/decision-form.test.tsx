@@ -1,0 +1,54 @@
+import { cleanup, screen } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { afterEach, expect, test, vi } from 'vitest';
+import { fakeServer, refusal, VISITOR } from '../../../testing/fake-server.ts';
+import { renderPage } from '../../../testing/render-page.tsx';
+import { DecisionForm } from './decision-form.tsx';
+import { OpenLinkPage } from './open-link-page.tsx';
+
+afterEach(() => {
+  cleanup();
+  vi.unstubAllGlobals();
+  window.history.replaceState(null, '', '/');
+});
+
+test('corrections need words and a name; then the decision is recorded as typed', async () => {
+  const user = userEvent.setup();
+  const sent = fakeServer({ 'GET /api/session': VISITOR, 'POST /api/inspection/decisions': { ok: true } });
+  renderPage(<DecisionForm letter="B" recipient="" />);
+  await user.click(screen.getByRole('button', { name: 'Record' }));
+  expect(screen.getByText(/Choose one/)).toBeTruthy();
+  expect(screen.getByText(/Enter a name/)).toBeTruthy();
+  await user.click(screen.getByRole('radio', { name: 'Corrections needed' }));
+  expect(screen.getByText(/Say what needs correction/)).toBeTruthy();
+  await user.type(screen.getByLabelText('Comments'), 'Measure LP-2-20.');
+  await user.type(screen.getByLabelText('Name, as typed and unverified'), 'Dele Moss');
+  await user.click(screen.getByRole('button', { name: 'Record' }));
+  expect(await screen.findByText(/on record against revision B/)).toBeTruthy();
+  expect(sent.at(-1)?.body).toMatchObject({
+    decision: 'corrections-needed',
+    comments: 'Measure LP-2-20.',
+    name: 'Dele Moss',
+  });
+});
+
+test('the token of the link is sent once, leaves the address, and the page goes on at a clean one', async () => {
+  window.history.replaceState(null, '', '/i#abcdefghijklmnopqrstuvwxyz');
+  const sent = fakeServer({ 'GET /api/session': VISITOR, 'POST /api/inspection/open': { ok: true } });
+  renderPage(<OpenLinkPage />, '/i', '/i');
+  expect(await screen.findByText('came elsewhere')).toBeTruthy();
+  expect(window.location.hash).toBe('');
+  expect(sent.filter(({ method }) => method === 'POST')).toEqual([
+    { method: 'POST', path: '/api/inspection/open', body: { token: 'abcdefghijklmnopqrstuvwxyz' } },
+  ]);
+});
+
+test('a link that has ended says what can be done', async () => {
+  window.history.replaceState(null, '', '/i#abcdefghijklmnopqrstuvwxyz');
+  fakeServer({
+    'GET /api/session': VISITOR,
+    'POST /api/inspection/open': () => refusal('link_gone', 410, 'Gone.'),
+  });
+  renderPage(<OpenLinkPage />, '/i', '/i');
+  expect(await screen.findByRole('heading', { name: /no longer opens the report/ })).toBeTruthy();
+});
