@@ -46,16 +46,20 @@ export function circuitParts(rows: JobRows, circuitId: string): CircuitParts | n
 /** Runs in the order in which a walk outward from `busId` meets them, each leg to its end; what is apart comes last. */
 function outward(runs: readonly Row<'run'>[], busId: string): Row<'run'>[] {
   if (runs.length < 2) return [...runs];
+  const at = new Map<string, Row<'run'>[]>();
+  for (const run of runs)
+    for (const bus of [run.fromBusId, run.toBusId]) at.set(bus, [...(at.get(bus) ?? []), run]);
   const met = new Set<Row<'run'>>();
-  const walk = (bus: string) => {
-    for (const run of runs) {
-      if (met.has(run) || (run.fromBusId !== bus && run.toBusId !== bus)) continue;
+  const legs: { bus: string; next: number }[] = [{ bus: busId, next: 0 }];
+  for (let leg = legs.at(-1); leg; leg = legs.at(-1)) {
+    const run = at.get(leg.bus)?.[leg.next++];
+    if (!run) legs.pop();
+    else if (!met.has(run)) {
       met.add(run);
-      const far = run.fromBusId === bus ? run.toBusId : run.fromBusId;
-      if (far !== busId) walk(far);
+      const far = run.fromBusId === leg.bus ? run.toBusId : run.fromBusId;
+      if (far !== busId) legs.push({ bus: far, next: 0 });
     }
-  };
-  walk(busId);
+  }
   for (const run of runs) met.add(run);
   return [...met];
 }

@@ -8,6 +8,8 @@ export * from './nominal.ts';
 export * from './panel-edits.ts';
 export type { PanelFoot } from './panel-foot.ts';
 export * from './panel-tree.ts';
+export * from './row-edits.ts';
+export { ROW_FIELDS, type RowField, type TypedTable } from './row-fields.ts';
 export * from './run-edits.ts';
 export * from './schedule-view.ts';
 export * from './transformer-edits.ts';
