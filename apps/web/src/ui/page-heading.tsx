@@ -10,7 +10,7 @@ interface PageHeadingProps {
 /** Opens a work area: what it is, what it stands on, what can be done. Takes the focus after a navigation. */
 export function PageHeading({ title, aside, detail, actions }: PageHeadingProps) {
   return (
-    <header className="flex min-h-15 flex-wrap items-center gap-x-3 gap-y-2 px-4 py-3">
+    <header className="flex min-h-15 first:border-t-2 first:border-ink flex-wrap items-center gap-x-3 gap-y-2 px-4 py-3">
       <div className="min-w-0">
         <h1 tabIndex={-1} data-page-heading className="text-title outline-none">
           {title}

@@ -9,7 +9,7 @@ import { Field } from '../../../ui/field.tsx';
 import { Form } from '../../../ui/form.tsx';
 import { Segmented } from '../../../ui/segmented.tsx';
 import { TextInput } from '../../../ui/text-input.tsx';
-import { PER_WORDS } from './conductors-part.tsx';
+import { PER_WORDS } from '../per-words.ts';
 
 type ConductorBody = z.input<typeof saveFirmConductor.body>;
 type OhmsPer = (typeof OHMS_PER)[number];

@@ -4,12 +4,12 @@ import { Button } from '../../../ui/button.tsx';
 import { EmptyState } from '../../../ui/empty-state.tsx';
 import { Message } from '../../../ui/message.tsx';
 import { RowHead, Table, Td, Th } from '../../../ui/table.tsx';
+import type { FirmPartProps } from '../firm-part.ts';
+import { PER_WORDS } from '../per-words.ts';
 import { ConductorDialog } from './conductor-dialog.tsx';
-import type { FirmPartProps } from './firm-page.tsx';
 import { PartHeading } from './part-heading.tsx';
 
 type ConductorRow = FirmPartProps['firm']['conductors'][number];
-export const PER_WORDS = { '1000ft': 'Ω per 1000 ft', km: 'Ω per km' } as const;
 
 export function ConductorsPart({ firm, actions, mayManage }: FirmPartProps) {
   const [open, setOpen] = useState<{ id: string; row: ConductorRow | null } | null>(null);

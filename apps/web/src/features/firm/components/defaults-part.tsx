@@ -5,7 +5,7 @@ import { Button } from '../../../ui/button.tsx';
 import { Message } from '../../../ui/message.tsx';
 import { RowHead, Table, Td, Th } from '../../../ui/table.tsx';
 import { TextInput } from '../../../ui/text-input.tsx';
-import type { FirmPartProps } from './firm-page.tsx';
+import type { FirmPartProps } from '../firm-part.ts';
 import { PartHeading } from './part-heading.tsx';
 
 /** Each starting value with its ground, and the firm’s house rule beside it. */

@@ -1,16 +1,15 @@
-import type { FirmView, presetView } from '@farlug/contract/routes';
+import type { FirmView } from '@farlug/contract/routes';
 import type { ReactNode } from 'react';
-import type { z } from 'zod';
 import { FIRM_PARTS, type FirmPart, paths } from '../../../app/paths.ts';
-import type { ApiError } from '../../../lib/api-error.ts';
 import { usePageTitle } from '../../../lib/use-page-title.ts';
 import { ErrorState } from '../../../ui/error-state.tsx';
 import { PageHeading } from '../../../ui/page-heading.tsx';
 import { Scroller } from '../../../ui/scroller.tsx';
 import { Skeleton } from '../../../ui/skeleton.tsx';
 import { TabLinks } from '../../../ui/tabs.tsx';
+import type { EditPreset } from '../firm-part.ts';
 import { useFirm } from '../hooks/use-firm.ts';
-import { type FirmActions, useFirmActions } from '../hooks/use-firm-actions.ts';
+import { useFirmActions } from '../hooks/use-firm-actions.ts';
 import { AuditPart } from './audit-part.tsx';
 import { ConductorsPart } from './conductors-part.tsx';
 import { DefaultsPart } from './defaults-part.tsx';
@@ -18,20 +17,6 @@ import { PeoplePart } from './people-part.tsx';
 import { PresetsPart } from './presets-part.tsx';
 import { TablesPart } from './tables-part.tsx';
 import { WordingPart } from './wording-part.tsx';
-
-export type Preset = z.output<typeof presetView>;
-export type EditPreset = (props: {
-  preset: Preset | null;
-  onClose: () => void;
-  save: (body: Omit<Preset, 'id'>) => Promise<ApiError | null>;
-}) => ReactNode;
-
-export interface FirmPartProps {
-  firm: FirmView;
-  actions: FirmActions;
-  /** Everyone sees how the firm is set; an administrator changes it. */
-  mayManage: boolean;
-}
 
 const PART_WORDS: Record<FirmPart, string> = {
   people: 'People',

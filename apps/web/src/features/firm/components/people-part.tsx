@@ -7,8 +7,8 @@ import { Dialog } from '../../../ui/dialog.tsx';
 import { Message } from '../../../ui/message.tsx';
 import { Select } from '../../../ui/select.tsx';
 import { RowHead, Table, Td, Th } from '../../../ui/table.tsx';
+import type { FirmPartProps } from '../firm-part.ts';
 import { ROLE_NAMES } from '../role-words.ts';
-import type { FirmPartProps } from './firm-page.tsx';
 import { InviteForm } from './invite-form.tsx';
 import { PartHeading } from './part-heading.tsx';
 

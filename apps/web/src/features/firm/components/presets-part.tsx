@@ -6,7 +6,7 @@ import { Button } from '../../../ui/button.tsx';
 import { EmptyState } from '../../../ui/empty-state.tsx';
 import { Message } from '../../../ui/message.tsx';
 import { RowHead, Table, Td, Th } from '../../../ui/table.tsx';
-import type { EditPreset, FirmPartProps, Preset } from './firm-page.tsx';
+import type { EditPreset, FirmPartProps, Preset } from '../firm-part.ts';
 import { PartHeading } from './part-heading.tsx';
 
 const figureOf = (preset: Preset, kind: 'feeder' | 'branch' | 'total') => {

@@ -6,7 +6,7 @@ import { Form } from '../../../ui/form.tsx';
 import { Message } from '../../../ui/message.tsx';
 import { Segmented } from '../../../ui/segmented.tsx';
 import { TextArea, TextInput } from '../../../ui/text-input.tsx';
-import type { FirmPartProps } from './firm-page.tsx';
+import type { FirmPartProps } from '../firm-part.ts';
 import { PartHeading } from './part-heading.tsx';
 
 export function WordingPart({ firm, actions, mayManage }: FirmPartProps) {

@@ -113,7 +113,10 @@ export function JobsPage({ firm, firmName, cautions }: JobsPageProps) {
           {refused}
         </Message>
       )}
-      <Scroller label="List of jobs" className="min-h-0 flex-1 overflow-auto border-t border-ink bg-sheet">
+      <Scroller
+        label="List of jobs"
+        className="flex min-h-0 flex-1 flex-col overflow-auto border-t border-ink bg-sheet"
+      >
         {jobs.isPending ? (
           <Skeleton label="Fetching the jobs" />
         ) : jobs.isError ? (
@@ -134,8 +137,8 @@ export function JobsPage({ firm, firmName, cautions }: JobsPageProps) {
             actions={<Button onClick={() => setQuery({}, { replace: true })}>Show all open jobs</Button>}
           />
         )}
+        <footer className="mt-auto border-t border-rule bg-paper px-4 py-2">{cautions}</footer>
       </Scroller>
-      <footer className="border-t border-rule px-4 py-2">{cautions}</footer>
       {asked?.what === 'duplicate' && (
         <DuplicateDialog
           job={asked.job}

@@ -1,7 +1,7 @@
 import { Link } from 'react-router-dom';
 import { formatCount } from '../../../lib/format.ts';
 import { MissingBox } from '../../../ui/missing-box.tsx';
-import type { JobStanding } from './reports-page.tsx';
+import type { JobStanding } from '../job-standing.ts';
 
 const SHOWN_MAX = 12;
 

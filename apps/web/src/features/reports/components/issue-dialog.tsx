@@ -13,7 +13,7 @@ import { Message } from '../../../ui/message.tsx';
 import { Segmented } from '../../../ui/segmented.tsx';
 import { Select } from '../../../ui/select.tsx';
 import { TextArea } from '../../../ui/text-input.tsx';
-import type { JobStanding } from './reports-page.tsx';
+import type { JobStanding } from '../job-standing.ts';
 
 type Paper = (typeof PAPER_SIZES)[number];
 const PAPER_WORDS: Record<Paper, string> = { letter: 'US Letter', a4: 'A4' };

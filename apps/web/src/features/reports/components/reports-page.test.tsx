@@ -3,7 +3,8 @@ import userEvent from '@testing-library/user-event';
 import { afterEach, expect, test, vi } from 'vitest';
 import { FIRM, fakeServer, JOB, PERSON, refusal, SIGNED_IN } from '../../../testing/fake-server.ts';
 import { renderPage } from '../../../testing/render-page.tsx';
-import { type JobStanding, ReportsPage } from './reports-page.tsx';
+import type { JobStanding } from '../job-standing.ts';
+import { ReportsPage } from './reports-page.tsx';
 
 afterEach(() => {
   cleanup();

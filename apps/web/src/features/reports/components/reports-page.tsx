@@ -1,4 +1,3 @@
-import type { Scenario } from '@farlug/solver/job';
 import { type ReactNode, useState } from 'react';
 import { formatCount } from '../../../lib/format.ts';
 import { revisionLetter } from '../../../lib/revision-letter.ts';
@@ -11,30 +10,10 @@ import { Scroller } from '../../../ui/scroller.tsx';
 import { Skeleton } from '../../../ui/skeleton.tsx';
 import { useReportActions } from '../hooks/use-report-actions.ts';
 import { useRevisions } from '../hooks/use-revisions.ts';
+import type { JobStanding } from '../job-standing.ts';
 import { Blockers } from './blockers.tsx';
 import { IssueDialog } from './issue-dialog.tsx';
 import { RevisionPlate } from './revision-plate.tsx';
-
-/** A row that the job leaves out, and the way to it. */
-export interface BlockingRow {
-  key: string;
-  label: string;
-  reason: string;
-  to: string;
-}
-
-/** The job as it stands before the person, from its one replica. */
-export interface JobStanding {
-  seq: number;
-  /** Everything typed has reached the server. */
-  saved: boolean;
-  archived: boolean;
-  scenario: Scenario;
-  panels: readonly { id: string; label: string }[];
-  leftOut: readonly BlockingRow[];
-  /** Why the network cannot be solved, in words; `null` where it can. */
-  unsolvable: string | null;
-}
 
 interface ReportsPageProps {
   firm: string;
