@@ -1,6 +1,6 @@
 import { once } from 'node:events';
 import { createServer } from 'node:http';
-import { createDatabase } from '@farlug/db';
+import { createDatabase, removeOldCounters } from '@farlug/db';
 import { createApp } from './app.ts';
 import { readConfig } from './config.ts';
 import type { Deps } from './deps.ts';
@@ -10,6 +10,7 @@ import { createLogger } from './platform/logger.ts';
 import { RATE_LIMITS } from './platform/rate-limits.ts';
 
 const SECONDS_TO_FINISH = 8;
+const HOUR_MS = 3600_000;
 
 const outcome = readConfig(process.env);
 if (!outcome.ok) {
@@ -35,12 +36,17 @@ server.listen(config.port, config.host);
 await once(server, 'listening');
 log.info({ address: config.publicUrl, host: config.host, port: config.port }, 'the api listens');
 
+const tidying = setInterval(() => {
+  db.global(removeOldCounters).catch((error: unknown) => log.warn({ err: error }, 'old counters stay'));
+}, HOUR_MS);
+
 let stopping = false;
 async function stop(signal: string): Promise<void> {
   if (stopping) return;
   stopping = true;
   log.info({ signal }, 'the api stops');
   setTimeout(() => process.exit(1), SECONDS_TO_FINISH * 1000).unref();
+  clearInterval(tidying);
   const closed = once(server, 'close');
   server.close();
   server.closeIdleConnections();

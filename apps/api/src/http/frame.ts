@@ -60,7 +60,8 @@ export function createFrame(deps: Deps): Frame {
       else sendJson(route, answer, response, deps.config.checkResponses);
     };
     const method = route.method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete';
-    router[method](route.path, gate, ...bodyReaders(route), ...limitersOf(deps, route), run);
+    const { byCaller, byEmail } = limitersOf(deps, route);
+    router[method](route.path, gate, ...byCaller, ...bodyReaders(route), ...byEmail, run);
   };
   return { deps, router, mounted, mount };
 }

@@ -6,9 +6,16 @@ import type { Deps } from '../deps.ts';
 import { Refusal } from '../platform/refusal.ts';
 import { RateCounterStore } from './rate-counter-store.ts';
 
+interface Limiters {
+  /** Before the body is read. */
+  byCaller: RequestHandler[];
+  /** After it. */
+  byEmail: RequestHandler[];
+}
+
 /** The limiters of a route that may answer `too_many`; none for any other. */
-export function limitersOf(deps: Deps, route: Route): RequestHandler[] {
-  if (!route.errors.includes('too_many')) return [];
+export function limitersOf(deps: Deps, route: Route): Limiters {
+  if (!route.errors.includes('too_many')) return { byCaller: [], byEmail: [] };
   const limit = deps.rateLimits[route.name];
   if (limit === undefined) throw new Error(`${route.name} may answer too_many but has no rate limit`);
   const limiter = (kind: string, hits: number, key: (request: Request) => string) =>
@@ -30,9 +37,11 @@ export function limitersOf(deps: Deps, route: Route): RequestHandler[] {
           ),
         ),
     });
-  const limiters = [limiter('caller', limit.hits, callerKey)];
-  if (limit.hitsPerEmail !== undefined) limiters.push(limiter('email', limit.hitsPerEmail, emailKey));
-  return limiters;
+  const { hits, hitsPerEmail } = limit;
+  return {
+    byCaller: [limiter('caller', hits, callerKey)],
+    byEmail: hitsPerEmail === undefined ? [] : [limiter('email', hitsPerEmail, emailKey)],
+  };
 }
 
 const minutes = (seconds: number) => {
