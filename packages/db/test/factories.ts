@@ -46,6 +46,7 @@ export async function makeRevision(
   db: Database,
   { firmId, personId }: TestFirm,
   jobId: string,
+  input: unknown = { format: 'farlug-revision/1' },
 ): Promise<string> {
   const id = randomUUID();
   await db.withFirm(firmId, personId, async (tx) => {
@@ -56,7 +57,7 @@ export async function makeRevision(
       seq: 0,
       scenario: 'each-circuit',
       paper: 'letter',
-      input: { format: 'farlug-revision/1' },
+      input,
       result: { format: 'farlug-solution/1' },
       solverVersion: '0.1.0',
       sha256: 'a'.repeat(64),

@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import fc from 'fast-check';
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import { makeDelivery, makeFirm, makeJob, makeRevision, type TestFirm } from '../../test/factories.ts';
 import type { FirmTransaction } from '../database.ts';
@@ -69,6 +70,17 @@ test('revisions are numbered, listed newest first and keep what was pinned', asy
   expect(await inFirm((tx) => revisionById(tx, jobId, randomUUID()))).toBeNull();
   expect(await inFirm((tx) => isSuperseded(tx, jobId, 1))).toBe(true);
   expect(await inFirm((tx) => isSuperseded(tx, jobId, 2))).toBe(false);
+});
+
+test('what was pinned comes back value by value, so that its hash can be made again', async () => {
+  await fc.assert(
+    fc.asyncProperty(fc.jsonValue({ stringUnit: 'grapheme' }), fc.double(), async (value, number) => {
+      const input = JSON.parse(JSON.stringify({ value, number }).replaceAll('\\u0000', ''));
+      const id = await makeRevision(database.db, firm, jobId, input);
+      expect(await inFirm((tx) => revisionContent(tx, jobId, id))).toMatchObject({ input });
+    }),
+    { numRuns: 40 },
+  );
 });
 
 test('the worker stores the printed form once', async () => {

@@ -18,6 +18,7 @@ export async function ensureTemplate(adminUrl: string): Promise<string> {
     await admin.query(`select pg_advisory_lock(hashtext('farlug test template'))`);
     const { rowCount } = await admin.query('select 1 from pg_database where datname = $1', [template]);
     if (rowCount) return template;
+    await removeLeftovers(admin);
     const unfinished = `${template}_unfinished`;
     await admin.query(`drop database if exists ${unfinished} with (force)`);
     await admin.query(`create database ${unfinished}`);
@@ -30,6 +31,33 @@ export async function ensureTemplate(adminUrl: string): Promise<string> {
     return template;
   } finally {
     await admin.end();
+  }
+}
+
+/** Databases of test runs that were killed, and templates of schemas long past. */
+async function removeLeftovers(admin: pg.Client): Promise<void> {
+  const { rows } = await admin.query<{ name: string }>(
+    `select datname as name from pg_database where datname ~ '^farlug_(test_|template_)' order by oid desc`,
+  );
+  const names = rows.map((row) => row.name);
+  const templates = names.filter((name) => name.startsWith('farlug_template_'));
+  const ofDeadRuns = names.filter((name) => {
+    const pid = /^farlug_test_(\d+)_/.exec(name)?.[1];
+    return pid !== undefined && !isAlive(Number(pid));
+  });
+  for (const name of [...ofDeadRuns, ...templates.slice(TEMPLATES_KEPT)])
+    await admin.query(`drop database if exists ${name} with (force)`);
+}
+
+/** More than one, for working trees of different age that share the cluster. */
+const TEMPLATES_KEPT = 3;
+
+function isAlive(pid: number): boolean {
+  try {
+    process.kill(pid, 0);
+    return true;
+  } catch (error) {
+    return (error as NodeJS.ErrnoException).code === 'EPERM';
   }
 }
 
