@@ -1,5 +1,6 @@
 import type { SessionView } from '@farlug/contract/routes';
 import { Link } from 'react-router-dom';
+import { useSignOut } from '../../features/accounts/hooks/use-sign-out.ts';
 import { ROLE_WORDS } from '../../features/accounts/role-words.ts';
 import { Menu } from '../../ui/menu.tsx';
 import { useShortcutSheet } from '../../ui/shortcuts.tsx';
@@ -21,6 +22,7 @@ const LINK = 'min-h-11 text-copper underline decoration-1 underline-offset-2 des
 /** Who is here, for which firm, and what is the same on every page. */
 export function RailFoot({ person, membership, memberships }: RailFootProps) {
   const showKeys = useShortcutSheet();
+  const leave = useSignOut();
   const [theme, setTheme] = useTheme();
   const others = memberships.filter((entry) => entry.firmId !== membership.firmId);
   return (
@@ -51,6 +53,9 @@ export function RailFoot({ person, membership, memberships }: RailFootProps) {
         <Link to={paths.account()} className={`${LINK} inline-flex items-center`}>
           Account
         </Link>
+        <button type="button" className={LINK} onClick={() => void leave()}>
+          Sign out
+        </button>
       </div>
     </div>
   );
