@@ -28,6 +28,8 @@ export interface TestApiOptions {
   config?: Partial<Config>;
   rateLimits?: RateLimits;
   now?: () => Date;
+  /** Another api's database, to be shared; it stays open when this one closes. */
+  database?: TestDatabase;
 }
 
 /** Limits that no test meets by accident. */
@@ -37,7 +39,7 @@ const GENEROUS = Object.fromEntries(
 
 /** The whole api on a port of its own, over a real database of its own. */
 export async function startTestApi(options: TestApiOptions = {}): Promise<TestApi> {
-  const database = await withTestDatabase();
+  const database = options.database ?? (await withTestDatabase());
   const directory = mkdtempSync(path.join(tmpdir(), 'farlug-api-'));
   const logged: string[] = [];
   const deps: Deps = {
@@ -71,7 +73,7 @@ export async function startTestApi(options: TestApiOptions = {}): Promise<TestAp
       server.close();
       server.closeAllConnections();
       await closed;
-      await database.close();
+      if (!options.database) await database.close();
       rmSync(directory, { recursive: true, force: true });
     },
   };

@@ -167,7 +167,7 @@ export const archiveJob = route({
   query: none,
   body: z.strictObject({ archived: z.boolean() }),
   response: ok,
-  errors: ['not_found'],
+  errors: ['invalid', 'not_found'],
 });
 
 /** Only a job without revisions; one with revisions is archived (`conflict`). */
