@@ -1,10 +1,17 @@
 import { z } from 'zod';
+import { isStorable } from '../rows/fields.ts';
 
 export const none = z.strictObject({});
 export const empty = z.strictObject({}).optional();
 export const ok = z.strictObject({ ok: z.literal(true) });
 export const instant = z.iso.datetime();
-export const name = z.string().trim().min(1, 'Enter a name.').max(200, 'Use at most 200 characters.');
+const NO_TEXT = 'Leave out the characters that are no text.';
+export const name = z
+  .string()
+  .trim()
+  .min(1, 'Enter a name.')
+  .max(200, 'Use at most 200 characters.')
+  .refine(isStorable, NO_TEXT);
 export const email = z
   .email('Enter an e-mail address, as name@firm.example.')
   .max(254, 'Use at most 254 characters.')
@@ -16,4 +23,5 @@ export const freshPassword = z
 export const token = z.string().min(20).max(200);
 export const firmParams = z.strictObject({ firm: z.uuid() });
 export const jobParams = z.strictObject({ firm: z.uuid(), job: z.uuid() });
-export const freeText = (max: number) => z.string().trim().max(max, `Use at most ${max} characters.`);
+export const freeText = (max: number) =>
+  z.string().trim().max(max, `Use at most ${max} characters.`).refine(isStorable, NO_TEXT);

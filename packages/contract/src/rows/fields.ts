@@ -20,10 +20,10 @@ export const LOAD_QUANTITY = quantity(POWER_UNITS_TYPED);
 /** In lower case, as the database gives it back. */
 export const rowId = z.uuid().lowercase('must be in lower case');
 
-const storable = (value: string) => !value.includes('\0') && !/\p{Surrogate}/u.test(value);
-/** Text that a database can hold: no NUL, no half of a surrogate pair. */
+/** Whether a database can hold it: no NUL, no half of a surrogate pair. */
+export const isStorable = (value: string) => !value.includes('\0') && !/\p{Surrogate}/u.test(value);
 export const line = (max: number, min = 0) =>
-  z.string().min(min).max(max).refine(storable, 'must not contain a character that is no text');
+  z.string().min(min).max(max).refine(isStorable, 'must not contain a character that is no text');
 export const code = line(CODE_MAX, 1);
 export const text = line(TEXT_MAX).nullable();
 export const note = line(NOTE_MAX).nullable();

@@ -22,7 +22,7 @@ export async function listJobs(
   tx: FirmTransaction,
   { search = '', archived = false }: { search?: string; archived?: boolean } = {},
 ): Promise<ListedJob[]> {
-  const pattern = `%${search.replace(/[\\%_]/g, '\\$&')}%`;
+  const pattern = `%${search.replaceAll('\0', '').replace(/[\\%_]/g, '\\$&')}%`;
   const newest = tx.sql
     .selectDistinctOn([revision.jobId], {
       jobId: revision.jobId,

@@ -129,6 +129,7 @@ describe('the list', () => {
     expect(await names({ search: 'weir' })).toEqual(['Mill']);
     expect(await names({ search: '0%' })).toEqual(['Barn 100% oak']);
     expect(await names({ search: '_' })).toEqual([]);
+    expect(await names({ search: 'we\0ir' })).toEqual(['Mill']);
     expect(await names({ archived: true })).toEqual(['Old forge']);
     await inFirm((tx) => setArchived(tx, ids.old, false), own);
     expect(await names({ archived: true })).toEqual([]);
