@@ -1,4 +1,4 @@
-import type { Job, Panel } from '@farlug/solver/job';
+import type { Job } from '@farlug/solver/job';
 import type { JobRows, Row } from '../rows/index.ts';
 import {
   busEntry,
@@ -13,8 +13,8 @@ import {
 import type { JobIndex, Placed } from './job-index.ts';
 import { limitsFromRows } from './limits-rows.ts';
 import { inOrder } from './order-keys.ts';
+import { circuitPlaces, panelSheets } from './overlay-entries.ts';
 import type { Selection } from './selection.ts';
-import { spacesOfCircuit } from './spaces.ts';
 
 export interface Assembled {
   job: Job;
@@ -27,7 +27,7 @@ export function assembleJob(rows: JobRows, selection: Selection): Assembled {
   if (!header) throw new Error('rows without a job');
   const codeOf = (busId: string) => rows.bus.get(busId)!.code;
   const runCode = (runId: string) => rows.run.get(runId)!.code;
-  const circuits = circuitsWithBreakers(rows);
+  const places = circuitPlaces(rows);
   const kept = <T extends 'source' | 'run' | 'transformer' | 'load'>(table: T): Row<T>[] =>
     inOrder(rows[table].values() as Iterable<Row<T>>).filter((row) => selection.has(table, row.id));
 
@@ -42,7 +42,8 @@ export function assembleJob(rows: JobRows, selection: Selection): Assembled {
   const panels = [...rows.panel.values()]
     .filter((panel) => place.has(panel.busId) && selection.has('panel', panel.id))
     .sort((a, b) => place.get(a.busId)! - place.get(b.busId)! || (a.id < b.id ? -1 : 1));
-  const sheets = panels.map((panel) => panelCircuits(panel, rows, circuits, runs, selection));
+  const ofPanel = panelSheets(places, runs, selection);
+  const sheets = panels.map((panel) => ofPanel.get(panel.id) ?? { entries: [], rows: [] });
   const conductors = [...rows.conductor.values()]
     .filter((row) => selection.has('conductor', row.id))
     .sort((a, b) => (a.name < b.name ? -1 : 1));
@@ -62,7 +63,7 @@ export function assembleJob(rows: JobRows, selection: Selection): Assembled {
     sources: sources.map((row) => sourceEntry(row, codeOf)),
     buses: buses.map(busEntry),
     runs: runs.map((row) =>
-      runEntry(row, codeOf, header.lengthUnit, circuits.get(row.circuitId ?? '') ?? null),
+      runEntry(row, codeOf, header.lengthUnit, places.get(row.circuitId ?? '') ?? null),
     ),
     transformers: transformers.map((row) => transformerEntry(row, codeOf)),
     loads: loads.map((row) => loadEntry(row, codeOf, runCode)),
@@ -99,51 +100,3 @@ export function assembleJob(rows: JobRows, selection: Selection): Assembled {
   };
   return { job, index };
 }
-
-interface CircuitParts {
-  circuit: Row<'circuit'>;
-  layout: Row<'panel'>['layout'];
-  breakers: Row<'breaker'>[];
-}
-
-function circuitsWithBreakers(rows: JobRows): Map<string, CircuitParts> {
-  const parts = new Map<string, CircuitParts>();
-  for (const circuit of rows.circuit.values())
-    parts.set(circuit.id, { circuit, layout: rows.panel.get(circuit.panelId)!.layout, breakers: [] });
-  for (const breaker of rows.breaker.values()) parts.get(breaker.circuitId)!.breakers.push(breaker);
-  return parts;
-}
-
-function panelCircuits(
-  panel: Row<'panel'>,
-  rows: JobRows,
-  parts: ReadonlyMap<string, CircuitParts>,
-  runs: readonly Row<'run'>[],
-  selection: Selection,
-): { entries: Panel['circuits']; rows: string[] } {
-  const firstRun = new Map<string, Row<'run'>>();
-  for (const run of runs)
-    if (run.circuitId !== null && !firstRun.has(run.circuitId)) firstRun.set(run.circuitId, run);
-  const spacesOf = (circuit: Row<'circuit'>) =>
-    spacesOfCircuit(panel.layout, parts.get(circuit.id)!.breakers);
-  const own = inOrder([...rows.circuit.values()].filter((circuit) => circuit.panelId === panel.id)).filter(
-    (circuit) =>
-      (circuit.kind !== 'branch' || firstRun.has(circuit.id) || spacesOf(circuit).length > 0) &&
-      (selection.has('circuit', circuit.id) || !refusedByFile(selection, circuit.id)),
-  );
-  return {
-    entries: own.map((circuit) => ({
-      spaces: spacesOf(circuit),
-      run: firstRun.get(circuit.id)?.code ?? null,
-      kind: circuit.kind,
-      description: circuit.description,
-    })),
-    rows: own.map((circuit) => circuit.id),
-  };
-}
-
-/** A circuit whose place in its panel the job file refuses; one that only lacks a load keeps its place. */
-const refusedByFile = (selection: Selection, circuitId: string): boolean =>
-  selection
-    .leftOut()
-    .some((one) => one.table === 'circuit' && one.row === circuitId && one.field === 'spaces');

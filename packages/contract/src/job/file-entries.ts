@@ -1,7 +1,7 @@
 import type { Bus, ConductorRow, Job, Load, Panel, Run, Source, Transformer } from '@farlug/solver/job';
 import type { Row } from '../rows/index.ts';
+import type { CircuitPlace } from './overlay-entries.ts';
 import { lengthIn, loadSizeOf, numberOrNull } from './quantity.ts';
-import { firstBreaker, spacesOfCircuit } from './spaces.ts';
 
 /** Complete rows as entries of the job file. */
 type CodeOf = (busId: string) => string;
@@ -24,9 +24,9 @@ export function runEntry(
   row: Row<'run'>,
   codeOf: CodeOf,
   unit: Job['lengthUnit'],
-  circuit: { layout: Row<'panel'>['layout']; breakers: readonly Row<'breaker'>[] } | null,
+  circuit: Pick<CircuitPlace, 'spaces' | 'breaker'> | null,
 ): Run {
-  const spaces = circuit ? spacesOfCircuit(circuit.layout, circuit.breakers) : [];
+  const spaces = circuit?.spaces ?? [];
   return {
     id: row.code,
     kind: row.kind,
@@ -51,7 +51,7 @@ export function runEntry(
     protection: row.protection,
     ohms: ohmsOf(row),
     demand: Number(row.demand ?? '1'),
-    breaker: breakerOf(row, circuit ? firstBreaker(circuit.breakers) : null),
+    breaker: breakerOf(row, circuit?.breaker ?? null),
     circuit: spaces.length === 0 ? null : spaces.join(','),
     locked: row.locked,
   };

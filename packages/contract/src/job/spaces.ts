@@ -19,9 +19,10 @@ export function spacesOfBreaker(
   return Array.from({ length: breaker.poles }, (_, i) => breaker.space + i * spaceStep(layout));
 }
 
+const compare = (a: string, b: string): number => (a < b ? -1 : a > b ? 1 : 0);
 const inSpaceOrder = (breakers: readonly Row<'breaker'>[]): Row<'breaker'>[] =>
   [...breakers].sort(
-    (a, b) => a.space - b.space || (a.half ?? '').localeCompare(b.half ?? '') || (a.id < b.id ? -1 : 1),
+    (a, b) => a.space - b.space || compare(a.half ?? '', b.half ?? '') || compare(a.id, b.id),
   );
 
 /** Every space of a circuit's breakers, in the order of the panel. */

@@ -7,11 +7,10 @@ import {
   blankLoad,
   blankRun,
   lineOfSpace,
-  orderKeyBetween,
   spacesOfBreaker,
 } from '../job/index.ts';
 import { proposedPowerFactor } from '../presets/defaults.ts';
-import type { JobRows, JobTable, Row } from '../rows/index.ts';
+import type { JobRows, Row } from '../rows/index.ts';
 import { inConductorOrder, terminalsOf, usualTerminals } from './reline.ts';
 import type { RowChanges } from './row-changes.ts';
 
@@ -40,7 +39,7 @@ export interface CircuitSpec {
  */
 export function buildCircuit(changes: RowChanges, panel: Row<'panel'>, spec: CircuitSpec): Row<'circuit'> {
   const circuit = changes.insert('circuit', {
-    ...blankCircuit({ id: newId(), orderKey: lastKey(changes.rows, 'circuit'), panelId: panel.id }),
+    ...blankCircuit({ id: newId(), orderKey: changes.nextKey('circuit'), panelId: panel.id }),
     kind: spec.kind,
     ...spec.circuit,
   });
@@ -60,7 +59,7 @@ export function buildCircuit(changes: RowChanges, panel: Row<'panel'>, spec: Cir
     ...blankBus({
       id: newId(),
       code: changes.freshCode('bus', `${code}-end`),
-      orderKey: lastKey(changes.rows, 'bus'),
+      orderKey: changes.nextKey('bus'),
     }),
     kind: 'outlet',
   });
@@ -68,7 +67,7 @@ export function buildCircuit(changes: RowChanges, panel: Row<'panel'>, spec: Cir
     ...blankRun({
       id: newId(),
       code: changes.freshCode('run', code),
-      orderKey: lastKey(changes.rows, 'run'),
+      orderKey: changes.nextKey('run'),
       kind: 'branch',
       fromBusId: panel.busId,
       toBusId: end.id,
@@ -102,7 +101,7 @@ export function insertLoad(
     ...blankLoad({
       id: newId(),
       code: changes.freshCode('load', code),
-      orderKey: lastKey(changes.rows, 'load'),
+      orderKey: changes.nextKey('load'),
       terminals: given.terminals,
     }),
     ...given,
@@ -127,15 +126,6 @@ export function codeOfSpec(rows: JobRows, panel: Row<'panel'>, breakers: readonl
   return spaces.length === 0
     ? `${panelCode}-x`
     : `${panelCode}-${spaces.join('/')}${breakers[0]?.half ?? ''}`;
-}
-
-type Ordered = { [T in JobTable]: Row<T> extends { orderKey: string } ? T : never }[JobTable];
-
-/** A key after the last row of a table. */
-export function lastKey(rows: JobRows, table: Ordered): string {
-  let last: string | null = null;
-  for (const row of rows[table].values()) if (last === null || row.orderKey > last) last = row.orderKey;
-  return orderKeyBetween(last, null);
 }
 
 export const jobRowOf = (rows: JobRows): Row<'job'> => [...rows.job.values()][0]!;

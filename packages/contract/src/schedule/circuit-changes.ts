@@ -5,7 +5,7 @@ import { blankBreaker, breakersOfSpaces, spaceStep, spacesFromText, spacesOfBrea
 import type { Row } from '../rows/index.ts';
 import { buildCircuit, insertLoad, jobRowOf } from './build-circuit.ts';
 import type { CircuitField } from './circuit-fields.ts';
-import { type CircuitParts, spacesOf } from './circuit-parts.ts';
+import type { CircuitParts } from './circuit-parts.ts';
 import { readDistances } from './distances.ts';
 import {
   classChange,
@@ -200,7 +200,7 @@ function changeBreaker(changes: RowChanges, parts: CircuitParts, text: string): 
   const amps = String(read.amps);
   const space = breakers[0]?.space ?? firstOpenSpace(changes.rows, panel, read.poles);
   if (space === null) return `must fit the panel: it has no ${read.poles} open spaces together`;
-  const total = spacesOf(parts).length;
+  const total = parts.spaces.length;
   if (read.poles === poles || (breakers.length > 1 && read.poles !== total)) {
     if (breakers.length === 0)
       writeBreakers(changes, circuit.id, [], [{ space, poles: read.poles, half: null }]);

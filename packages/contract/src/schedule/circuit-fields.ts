@@ -1,5 +1,5 @@
 import type { Row } from '../rows/index.ts';
-import { type CircuitParts, spacesOf } from './circuit-parts.ts';
+import type { CircuitParts } from './circuit-parts.ts';
 import { cumulativeLength } from './distances.ts';
 import { racewayFromText } from './words.ts';
 
@@ -34,7 +34,7 @@ export function fieldText(parts: CircuitParts, field: CircuitField): string {
   const run = runs[0];
   switch (field) {
     case 'spaces':
-      return `${spacesOf(parts).join(',')}${parts.breakers[0]?.half ?? ''}`;
+      return `${parts.spaces.join(',')}${parts.breakers[0]?.half ?? ''}`;
     case 'breaker':
       return breakerText(parts.breakers);
     case 'kind':

@@ -8,19 +8,22 @@ export interface CircuitParts {
   breakers: Row<'breaker'>[];
   runs: Row<'run'>[];
   loads: Row<'load'>[];
+  /** Every space of its breakers, in the order of the panel. */
+  spaces: number[];
 }
 
 export function allCircuitParts(rows: JobRows): Map<string, CircuitParts> {
   const parts = new Map<string, CircuitParts>();
   for (const circuit of rows.circuit.values()) {
     const panel = rows.panel.get(circuit.panelId)!;
-    parts.set(circuit.id, { circuit, panel, breakers: [], runs: [], loads: [] });
+    parts.set(circuit.id, { circuit, panel, breakers: [], runs: [], loads: [], spaces: [] });
   }
   for (const breaker of rows.breaker.values()) parts.get(breaker.circuitId)?.breakers.push(breaker);
   for (const run of inOrder(rows.run.values())) parts.get(run.circuitId ?? '')?.runs.push(run);
   for (const load of inOrder(rows.load.values())) parts.get(load.circuitId ?? '')?.loads.push(load);
   for (const one of parts.values()) {
-    one.breakers.sort((a, b) => a.space - b.space || (a.half ?? '').localeCompare(b.half ?? ''));
+    one.breakers.sort(bySpace);
+    one.spaces = spacesOfCircuit(one.panel.layout, one.breakers);
     one.runs = outward(one.runs, one.panel.busId);
   }
   return parts;
@@ -32,16 +35,20 @@ export function circuitParts(rows: JobRows, circuitId: string): CircuitParts | n
   if (!circuit || !panel) return null;
   const ofCircuit = <R extends { circuitId: string | null }>(list: Iterable<R>) =>
     [...list].filter((row) => row.circuitId === circuitId);
+  const breakers = ofCircuit(rows.breaker.values()).sort(bySpace);
   return {
     circuit,
     panel,
-    breakers: ofCircuit(rows.breaker.values()).sort(
-      (a, b) => a.space - b.space || (a.half ?? '').localeCompare(b.half ?? ''),
-    ),
+    breakers,
     runs: outward(inOrder(ofCircuit(rows.run.values())), panel.busId),
     loads: inOrder(ofCircuit(rows.load.values())),
+    spaces: spacesOfCircuit(panel.layout, breakers),
   };
 }
+
+const bySpace = (a: Row<'breaker'>, b: Row<'breaker'>): number =>
+  a.space - b.space || compare(a.half ?? '', b.half ?? '') || compare(a.id, b.id);
+export const compare = (a: string, b: string): number => (a < b ? -1 : a > b ? 1 : 0);
 
 /** Runs in the order in which a walk outward from `busId` meets them, each leg to its end; what is apart comes last. */
 function outward(runs: readonly Row<'run'>[], busId: string): Row<'run'>[] {
@@ -64,12 +71,9 @@ function outward(runs: readonly Row<'run'>[], busId: string): Row<'run'>[] {
   return [...met];
 }
 
-export const spacesOf = (parts: Pick<CircuitParts, 'panel' | 'breakers'>): number[] =>
-  spacesOfCircuit(parts.panel.layout, parts.breakers);
-
 /** `LP-2-27`, `LP-2-2/4`, `LP-2-7a`; a circuit without a space goes by the code of its run or load. */
 export function circuitCode(parts: CircuitParts, panelCode: string): string {
-  const spaces = spacesOf(parts);
+  const { spaces } = parts;
   if (spaces.length > 0) return `${panelCode}-${spaces.join('/')}${parts.breakers[0]?.half ?? ''}`;
   return parts.runs[0]?.code ?? parts.loads[0]?.code ?? panelCode;
 }

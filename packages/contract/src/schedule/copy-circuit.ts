@@ -1,7 +1,7 @@
 import { newId } from '../edit/index.ts';
 import { blankBreaker } from '../job/index.ts';
 import type { Row } from '../rows/index.ts';
-import { type BreakerSpec, codeOfSpec, lastKey } from './build-circuit.ts';
+import { type BreakerSpec, codeOfSpec } from './build-circuit.ts';
 import type { CircuitParts } from './circuit-parts.ts';
 import { relineCircuit } from './reline.ts';
 import type { RowChanges } from './row-changes.ts';
@@ -17,7 +17,7 @@ export function copyCircuit(
     ...parts.circuit,
     id: newId(),
     panelId: panel.id,
-    orderKey: lastKey(changes.rows, 'circuit'),
+    orderKey: changes.nextKey('circuit'),
   });
   for (const { space, poles, half = null, amps = null } of places)
     changes.insert('breaker', {
@@ -34,7 +34,7 @@ export function copyCircuit(
       ...changes.rows.bus.get(id)!,
       id: newId(),
       code: changes.freshCode('bus', `${base}-end`),
-      orderKey: lastKey(changes.rows, 'bus'),
+      orderKey: changes.nextKey('bus'),
     });
     buses.set(id, bus.id);
     return bus.id;
@@ -45,7 +45,7 @@ export function copyCircuit(
       ...run,
       id: newId(),
       code: changes.freshCode('run', base),
-      orderKey: lastKey(changes.rows, 'run'),
+      orderKey: changes.nextKey('run'),
       circuitId: circuit.id,
       fromBusId: busCopy(run.fromBusId),
       toBusId: busCopy(run.toBusId),
@@ -58,7 +58,7 @@ export function copyCircuit(
       ...load,
       id: newId(),
       code: changes.freshCode('load', base),
-      orderKey: lastKey(changes.rows, 'load'),
+      orderKey: changes.nextKey('load'),
       circuitId: circuit.id,
       busId: load.busId === null ? null : busCopy(load.busId),
       alongRunId: load.alongRunId === null ? null : (runs.get(load.alongRunId) ?? null),

@@ -2,7 +2,7 @@ import { type Conductor, SYSTEM_CONDUCTORS, type System } from '@farlug/solver/j
 import { newId } from '../edit/index.ts';
 import { blankRun } from '../job/index.ts';
 import type { JobRows, Row } from '../rows/index.ts';
-import { buildCircuit, lastKey, linesOfBreakers } from './build-circuit.ts';
+import { buildCircuit, linesOfBreakers } from './build-circuit.ts';
 import { codeOfPanel } from './circuit-edits.ts';
 import { systemsOfRows } from './nominal.ts';
 import { inConductorOrder } from './reline.ts';
@@ -70,7 +70,7 @@ export function insertRun(
     ...blankRun({
       id: newId(),
       code: changes.freshCode('run', code),
-      orderKey: lastKey(changes.rows, 'run'),
+      orderKey: changes.nextKey('run'),
       kind: 'feeder',
       fromBusId: from,
       toBusId: to,

@@ -2,7 +2,7 @@ import { type Conductor, SYSTEM_CONDUCTORS } from '@farlug/solver/job';
 import { newId } from '../edit/index.ts';
 import { blankBus, blankPanel } from '../job/index.ts';
 import type { JobRows, Row } from '../rows/index.ts';
-import { buildCircuit, lastKey } from './build-circuit.ts';
+import { buildCircuit } from './build-circuit.ts';
 import { codeOfPanel, type ScheduleAddition, type ScheduleChange } from './circuit-edits.ts';
 import { circuitParts } from './circuit-parts.ts';
 import { copyCircuit } from './copy-circuit.ts';
@@ -34,7 +34,7 @@ export function addPanelEdit(rows: JobRows, given: NewPanel): ScheduleAddition {
   if (problem) return { edit: null, problem, id: null };
   const changes = new RowChanges(rows);
   const bus = changes.insert('bus', {
-    ...blankBus({ id: newId(), code, orderKey: lastKey(rows, 'bus') }),
+    ...blankBus({ id: newId(), code, orderKey: changes.nextKey('bus') }),
     kind: 'panel',
     name: given.name ?? null,
   });
@@ -84,7 +84,7 @@ export function duplicatePanelEdit(rows: JobRows, panelId: string, typedCode: st
     ...rows.bus.get(original.busId)!,
     id: newId(),
     code,
-    orderKey: lastKey(rows, 'bus'),
+    orderKey: changes.nextKey('bus'),
   });
   const panel = changes.insert('panel', { ...original, id: newId(), busId: bus.id });
   for (const circuit of rows.circuit.values()) {
@@ -114,7 +114,7 @@ function copyFeeder(changes: RowChanges, run: Row<'run'>, toBusId: string, code:
     ...run,
     id: newId(),
     code: changes.freshCode('run', code),
-    orderKey: lastKey(changes.rows, 'run'),
+    orderKey: changes.nextKey('run'),
     circuitId: circuit?.id ?? null,
     toBusId,
     locked: false,

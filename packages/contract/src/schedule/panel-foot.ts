@@ -1,6 +1,6 @@
 import { type BusSystem, type Conductor, magnitude } from '@farlug/solver/job';
 import type { JobRows, Row } from '../rows/index.ts';
-import { type CircuitParts, spacesOf } from './circuit-parts.ts';
+import type { CircuitParts } from './circuit-parts.ts';
 import { loadVa } from './load-va.ts';
 import type { PanelNode } from './panel-tree.ts';
 
@@ -58,20 +58,22 @@ export function panelFeet(
     addTo(above.demand, upward(own.demand));
     above.unknown += own.unknown;
   }
+  const used = new Map(nodes.map(({ panel }) => [panel.id, new Set<number>()]));
+  for (const one of parts.values()) for (const space of one.spaces) used.get(one.panel.id)!.add(space);
   return new Map(
-    nodes.map(({ panel }) => [panel.id, footOf(panel, sums.get(panel.id)!, parts, systems.get(panel.busId))]),
+    nodes.map(({ panel }) => [
+      panel.id,
+      footOf(panel, sums.get(panel.id)!, used.get(panel.id)!, systems.get(panel.busId)),
+    ]),
   );
 }
 
 function footOf(
   panel: Row<'panel'>,
   { connected, demand, unknown }: Sums,
-  parts: ReadonlyMap<string, CircuitParts>,
+  used: ReadonlySet<number>,
   system: BusSystem | undefined,
 ): PanelFoot {
-  const used = new Set<number>();
-  for (const one of parts.values())
-    if (one.panel.id === panel.id) for (const space of spacesOf(one)) used.add(space);
   const lines = panel.lines.map((line) => {
     const emf = system?.origin.emfs[line];
     const demandVa = demand[line] ?? 0;

@@ -1,6 +1,9 @@
 import { deleteOp, type Edit, editOf, insertOp, sameValue, updateOp } from '../edit/index.ts';
 import { CODE_FIELD } from '../edit/references.ts';
+import { orderKeyBetween } from '../job/index.ts';
 import { JOB_TABLE_NAMES, type JobRows, type JobTable, type Row } from '../rows/index.ts';
+
+type Ordered = { [T in JobTable]: Row<T> extends { orderKey: string } ? T : never }[JobTable];
 
 /** Rows that are being changed, and the edit that leads there. */
 export class RowChanges {
@@ -8,6 +11,8 @@ export class RowChanges {
   private readonly before: JobRows;
   private readonly touched = new Map<JobTable, Set<string>>();
   private readonly copied = new Set<JobTable>();
+  private readonly codes = new Map<JobTable, Set<string>>();
+  private readonly lastKeys = new Map<JobTable, string | null>();
 
   constructor(before: JobRows) {
     this.before = before;
@@ -16,6 +21,8 @@ export class RowChanges {
 
   insert<T extends JobTable>(table: T, row: Row<T>): Row<T> {
     this.writable(table, row.id).set(row.id, row);
+    const field = CODE_FIELD[table];
+    if (field) this.codes.get(table)?.add((row as unknown as Record<string, string>)[field]!);
     return row;
   }
 
@@ -36,14 +43,33 @@ export class RowChanges {
     return editOf(label, [...inserts, ...updates, ...deletes]);
   }
 
-  /** `base`, or `base.2`, `base.3` … where another row of the table has that code. */
+  /** `base`, or `base.2`, `base.3` … where a row of the table has or had that code; taken from now on. */
   freshCode(table: JobTable, base: string): string {
-    const field = CODE_FIELD[table] as 'code';
-    const taken = new Set<string>();
-    for (const row of this.rows[table].values()) taken.add((row as { code: string })[field]);
+    const taken = this.codes.get(table) ?? this.codesOf(table);
+    this.codes.set(table, taken);
     const short = base.slice(0, 72) || table;
-    if (!taken.has(short)) return short;
-    for (let n = 2; ; n++) if (!taken.has(`${short}.${n}`)) return `${short}.${n}`;
+    let code = short;
+    for (let n = 2; taken.has(code); n++) code = `${short}.${n}`;
+    taken.add(code);
+    return code;
+  }
+
+  /** An order key after every key of the table, and after those that were given out before. */
+  nextKey(table: Ordered): string {
+    let last = this.lastKeys.get(table);
+    if (last === undefined) {
+      last = null;
+      for (const row of this.rows[table].values())
+        if (last === null || row.orderKey > last) last = row.orderKey;
+    }
+    const key = orderKeyBetween(last, null);
+    this.lastKeys.set(table, key);
+    return key;
+  }
+
+  private codesOf(table: JobTable): Set<string> {
+    const field = CODE_FIELD[table] as 'code';
+    return new Set([...this.rows[table].values()].map((row) => (row as { code: string })[field]));
   }
 
   private writable<T extends JobTable>(table: T, id: string): Map<string, Row<T>> {

@@ -1,10 +1,10 @@
 import type { BusSystem, Conductor } from '@farlug/solver/job';
 import { incompleteRows, type Missing } from '../job/incomplete.ts';
-import { inOrder, lineOfSpace } from '../job/index.ts';
+import { inOrder, lineOfSpace, spacesOfBreaker } from '../job/index.ts';
 import type { JobRows, Row } from '../rows/index.ts';
 import { CIRCUIT_FIELDS, type CircuitField, fieldText } from './circuit-fields.ts';
 import { type CircuitForm, circuitForm } from './circuit-form.ts';
-import { allCircuitParts, type CircuitParts, circuitCode, spacesOf } from './circuit-parts.ts';
+import { allCircuitParts, type CircuitParts, circuitCode, compare } from './circuit-parts.ts';
 import { systemsOfRows, systemText } from './nominal.ts';
 import { type PanelFoot, panelFeet } from './panel-foot.ts';
 import { type FedFrom, panelTree } from './panel-tree.ts';
@@ -22,7 +22,6 @@ export interface CircuitView extends CircuitParts {
   /** `LP-2-2/4`. */
   code: string;
   form: CircuitForm;
-  spaces: number[];
   /** Lines of its poles, by the panel's layout; those of its conductors where it has no space. */
   lines: Conductor[];
   fields: Record<CircuitField, FieldView>;
@@ -76,8 +75,10 @@ export function scheduleView(rows: JobRows): ScheduleView {
     nodes.flatMap(({ panel, fedFrom }) => (fedFrom?.circuitId ? [[fedFrom.circuitId, panel.id]] : [])),
   );
 
+  const ofPanel = byPanel(parts.values());
+
   const panels = nodes.map(({ panel, depth, fedFrom, childIds }): PanelView => {
-    const own = [...parts.values()].filter((one) => one.panel.id === panel.id);
+    const own = ofPanel.get(panel.id) ?? [];
     const claims = claimsOf(own);
     const code = codeOf(panel.id);
     const system = systems.get(panel.busId);
@@ -86,11 +87,10 @@ export function scheduleView(rows: JobRows): ScheduleView {
       id: one.circuit.id,
       code: circuitCode(one, code),
       form: circuitForm(one),
-      spaces: spacesOf(one),
       lines: linesOf(one),
       fields: fieldsOf(one, drafts.get(one.circuit.id) ?? new Map()),
       clashes: clashesOf(one, claims),
-      beyond: spacesOf(one).some((space) => space > panel.spaces),
+      beyond: one.spaces.some((space) => space > panel.spaces),
       feedsPanelId: feeds.get(one.circuit.id) ?? null,
       next: next.get(one.circuit.id) ?? null,
     }));
@@ -116,8 +116,18 @@ export function scheduleView(rows: JobRows): ScheduleView {
   };
 }
 
+function byPanel(parts: Iterable<CircuitParts>): Map<string, CircuitParts[]> {
+  const grouped = new Map<string, CircuitParts[]>();
+  for (const one of parts) {
+    const own = grouped.get(one.panel.id);
+    if (own) own.push(one);
+    else grouped.set(one.panel.id, [one]);
+  }
+  return grouped;
+}
+
 export function linesOf(parts: CircuitParts): Conductor[] {
-  const lines = spacesOf(parts).map((space) => lineOfSpace(parts.panel, space));
+  const lines = parts.spaces.map((space) => lineOfSpace(parts.panel, space));
   const distinct = [...new Set(lines)];
   return distinct.length > 0 ? distinct : (parts.runs[0]?.conductors.filter((one) => one !== 'N') ?? []);
 }
@@ -178,14 +188,17 @@ function claimsOf(circuits: readonly CircuitParts[]): Claims {
   const claims: Claims = new Map();
   for (const { circuit, panel, breakers } of circuits)
     for (const breaker of breakers)
-      for (const space of spacesOf({ panel, breakers: [breaker] }))
-        claims.set(space, [...(claims.get(space) ?? []), { circuitId: circuit.id, half: breaker.half }]);
+      for (const space of spacesOfBreaker(panel.layout, breaker)) {
+        const here = claims.get(space) ?? [];
+        claims.set(space, here);
+        here.push({ circuitId: circuit.id, half: breaker.half });
+      }
   return claims;
 }
 
 function clashesOf(parts: CircuitParts, claims: Claims): string[] {
   const found = new Set<string>();
-  for (const space of spacesOf(parts)) {
+  for (const space of parts.spaces) {
     const here = claims.get(space) ?? [];
     const halves = here.map((claim) => claim.half);
     const tandem = here.length === 2 && halves.includes('a') && halves.includes('b');
@@ -195,12 +208,12 @@ function clashesOf(parts: CircuitParts, claims: Claims): string[] {
 }
 
 function inSpaceOrder(circuits: readonly CircuitView[]): CircuitView[] {
-  const keyOf = (one: CircuitView) => one.circuit.orderKey;
   return [...circuits].sort(
     (a, b) =>
       (a.spaces[0] ?? Infinity) - (b.spaces[0] ?? Infinity) ||
-      (a.breakers[0]?.half ?? '').localeCompare(b.breakers[0]?.half ?? '') ||
-      (keyOf(a) < keyOf(b) ? -1 : keyOf(a) > keyOf(b) ? 1 : a.id < b.id ? -1 : 1),
+      compare(a.breakers[0]?.half ?? '', b.breakers[0]?.half ?? '') ||
+      compare(a.circuit.orderKey, b.circuit.orderKey) ||
+      compare(a.id, b.id),
   );
 }
 
@@ -213,7 +226,7 @@ function fedFromText(
   if (!from) return null;
   if (from.panelId === null) return rows.source.get(from.sourceId ?? '')?.code ?? null;
   const circuit = parts.get(from.circuitId ?? '');
-  return circuit && spacesOf(circuit).length > 0
+  return circuit && circuit.spaces.length > 0
     ? circuitCode(circuit, codeOf(from.panelId))
     : codeOf(from.panelId);
 }

@@ -2,7 +2,6 @@ import type { System, TransformerConnection } from '@farlug/solver/job';
 import { newId } from '../edit/index.ts';
 import { blankBus, blankTransformer } from '../job/index.ts';
 import type { JobRows, Row } from '../rows/index.ts';
-import { lastKey } from './build-circuit.ts';
 import type { ScheduleAddition } from './circuit-edits.ts';
 import { type Feed, feedTo } from './feed.ts';
 import { RowChanges } from './row-changes.ts';
@@ -42,7 +41,7 @@ export function insertTransformer(
       blankBus({
         id: newId(),
         code: changes.freshCode('bus', `${code}-${side}`),
-        orderKey: lastKey(changes.rows, 'bus'),
+        orderKey: changes.nextKey('bus'),
       }),
     ).id;
   const fromBusId = point('pri');
@@ -57,7 +56,7 @@ export function insertTransformer(
     ...blankTransformer({
       id: newId(),
       code,
-      orderKey: lastKey(changes.rows, 'transformer'),
+      orderKey: changes.nextKey('transformer'),
       fromBusId,
       toBusId,
       connection,

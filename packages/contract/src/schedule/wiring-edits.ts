@@ -1,7 +1,7 @@
 import { newId } from '../edit/index.ts';
 import { blankBreaker, blankBus, spacesOfBreaker } from '../job/index.ts';
 import type { JobRows, Row } from '../rows/index.ts';
-import { insertLoad, lastKey, letter, linesOfBreakers } from './build-circuit.ts';
+import { insertLoad, letter, linesOfBreakers } from './build-circuit.ts';
 import { codeOf, type ScheduleChange } from './circuit-edits.ts';
 import { circuitForm } from './circuit-form.ts';
 import { type CircuitParts, circuitParts } from './circuit-parts.ts';
@@ -140,7 +140,7 @@ function newPoint(changes: RowChanges, like: Row<'run'>): string {
   const bus = blankBus({
     id: newId(),
     code: changes.freshCode('bus', `${like.code}-end`),
-    orderKey: lastKey(changes.rows, 'bus'),
+    orderKey: changes.nextKey('bus'),
   });
   return changes.insert('bus', { ...bus, kind: 'outlet' }).id;
 }
@@ -157,7 +157,7 @@ function segment(
     ...like,
     id: newId(),
     code: changes.freshCode('run', like.code),
-    orderKey: lastKey(changes.rows, 'run'),
+    orderKey: changes.nextKey('run'),
     fromBusId,
     toBusId,
     length: null,
