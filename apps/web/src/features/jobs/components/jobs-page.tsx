@@ -6,6 +6,7 @@ import { formatCount } from '../../../lib/format.ts';
 import { routeUrl } from '../../../lib/route-url.ts';
 import { usePageTitle } from '../../../lib/use-page-title.ts';
 import { Button, LinkButton } from '../../../ui/button.tsx';
+import { cx } from '../../../ui/cx.ts';
 import { EmptyState } from '../../../ui/empty-state.tsx';
 import { ErrorState } from '../../../ui/error-state.tsx';
 import { Field } from '../../../ui/field.tsx';
@@ -72,6 +73,7 @@ export function JobsPage({ firm, firmName, cautions }: JobsPageProps) {
     },
   ];
   const untouched = search === '' && !archived;
+  const none = untouched && jobs.data?.length === 0;
 
   return (
     <>
@@ -82,13 +84,13 @@ export function JobsPage({ firm, firmName, cautions }: JobsPageProps) {
         actions={
           <>
             <LinkButton to={paths.uploadJob(firm)}>Upload a job file</LinkButton>
-            <LinkButton to={paths.newJob(firm)} look="go">
+            <LinkButton to={paths.newJob(firm)} look={none ? 'plain' : 'go'}>
               New job
             </LinkButton>
           </>
         }
       />
-      <div className="flex flex-wrap items-end gap-3 px-4 pb-3" data-print="never">
+      <div className={cx('flex flex-wrap items-end gap-3 px-4 pb-3', none && 'hidden')} data-print="never">
         <Field label="Search name, address, permit" className="w-full desk:w-72">
           <TextInput
             type="search"
