@@ -3,6 +3,7 @@ import { createServer } from 'node:http';
 import { createDatabase, removeOldCounters } from '@farlug/db';
 import { createApp } from './app.ts';
 import { readConfig } from './config.ts';
+import { seedDemo } from './demo/seed-demo.ts';
 import type { Deps } from './deps.ts';
 import { MailStore } from './features/mailbox/mail-store.ts';
 import { startSmtpSink } from './features/mailbox/smtp-sink.ts';
@@ -24,21 +25,28 @@ const log = createLogger(config.logLevel);
 const db = createDatabase(config.databaseUrl);
 const deps: Deps = { config, db, log, now: () => new Date(), rateLimits: RATE_LIMITS };
 
-const sink = config.local
-  ? await startSmtpSink(config.mailboxPort, new MailStore(config.mailboxDir), log)
-  : null;
-if (config.local) await (await import('./demo/seed-demo.ts')).seedDemo(deps);
-
-const server = createServer(createApp(deps));
-server.headersTimeout = 20_000;
-server.requestTimeout = 120_000;
-server.listen(config.port, config.host);
-await once(server, 'listening');
+const { server, sink } = await start().catch((error: unknown) => {
+  log.fatal({ err: error }, 'the api cannot start');
+  process.exit(1);
+});
 log.info({ address: config.publicUrl, host: config.host, port: config.port }, 'the api listens');
 
 const tidying = setInterval(() => {
   db.global(removeOldCounters).catch((error: unknown) => log.warn({ err: error }, 'old counters stay'));
 }, HOUR_MS);
+
+async function start() {
+  const mailbox = config.local
+    ? await startSmtpSink(config.mailboxPort, new MailStore(config.mailboxDir), log)
+    : null;
+  if (config.local) await seedDemo(deps);
+  const http = createServer(createApp(deps));
+  http.headersTimeout = 20_000;
+  http.requestTimeout = 120_000;
+  http.listen(config.port, config.host);
+  await once(http, 'listening');
+  return { server: http, sink: mailbox };
+}
 
 let stopping = false;
 async function stop(signal: string): Promise<void> {

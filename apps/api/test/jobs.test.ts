@@ -64,6 +64,13 @@ describe('a job', () => {
     expect(await send(other)).toMatchObject({ status: 409, error: { code: 'conflict' } });
   });
 
+  it('is made once by calls that overtake each other', async () => {
+    const rows = rowsFromJob(demoFile('ridge-cabin'));
+    const send = () => firm.admin.call(createJob, { params: { firm: firm.firm }, body: { rows } });
+    const answers = await Promise.all([send(), send(), send()]);
+    expect(answers.map(({ status }) => status)).toEqual([200, 200, 200]);
+  });
+
   it('is refused with every row that hangs in the air, and nothing of it stays', async () => {
     const rows = rowsFromJob(demoFile('ridge-cabin'));
     const run = { ...rows.run[0]!, toBusId: randomUUID() };

@@ -77,6 +77,23 @@ it('refuses to start with neither the local flag nor a mail server, and says so'
   expect(said).toMatch(/The api cannot start:\n {2}SMTP_URL is needed/);
 });
 
+it('says which of its ports is taken, and ends', async () => {
+  const taken = createServer();
+  taken.listen(0, '127.0.0.1');
+  await once(taken, 'listening');
+  const port = String((taken.address() as { port: number }).port);
+  for (const env of [
+    { PORT: port, MAILBOX_PORT: String(await freePort()) },
+    { PORT: '0', MAILBOX_PORT: port },
+  ]) {
+    const { code, said } = await start({ FARLUG_LOCAL: '1', ...env }).ended;
+    expect(code).toBe(1);
+    expect(said).toMatch(/the api cannot start|EADDRINUSE/);
+    expect(said).toContain(port);
+  }
+  taken.close();
+});
+
 it('seeds the demo firm once, keeps it through a restart, and stops when it is told to', async () => {
   const counts = async () => {
     const [row] = await database.asOwner(

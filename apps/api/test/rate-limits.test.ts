@@ -16,7 +16,7 @@ beforeAll(async () => {
   byEmail = await startTestApi({
     rateLimits: {
       ...RATE_LIMITS,
-      signIn: { hits: 100, windowS: 3600, hitsPerEmail: 2 },
+      signIn: { hits: 100, windowS: 3600, hitsPerEmail: 2, refusalsOnly: true },
       requestPasswordReset: { hits: 100, windowS: 3600, hitsPerEmail: 2 },
     },
   });
@@ -64,7 +64,7 @@ it('counts tries on one address across browsers, and leaves others alone', async
   expect((await tryOnce(adminEmail, 'a')).status).toBe(401);
   expect((await tryOnce(adminEmail.toUpperCase(), 'b')).status).toBe(401);
   expect((await tryOnce(` ${adminEmail}`.trim(), PASSWORD)).status).toBe(429);
-  expect((await tryOnce(other, PASSWORD)).status).toBe(200);
+  for (let times = 0; times < 4; times += 1) expect((await tryOnce(other, PASSWORD)).status).toBe(200);
   const reset = () => byEmail.client().call(requestPasswordReset, { body: { email: adminEmail } });
   expect([(await reset()).status, (await reset()).status, (await reset()).status]).toEqual([200, 200, 429]);
 });

@@ -24,6 +24,9 @@ export function limitersOf(deps: Deps, route: Route): Limiters {
       limit: hits,
       standardHeaders: 'draft-8',
       legacyHeaders: false,
+      skipSuccessfulRequests: limit.refusalsOnly === true,
+      // Whether a proxy is believed is a setting of ours.
+      validate: { xForwardedForHeader: false },
       identifier: `${route.name}-${kind}`,
       keyGenerator: (request) => key(request),
       store: new RateCounterStore(deps, `${route.name} ${kind}`),

@@ -4,6 +4,8 @@ export interface RateLimit {
   windowS: number;
   /** A further bound on one e-mail address, whoever asks from wherever. */
   hitsPerEmail?: number;
+  /** Count only what is refused: a person who knows the password may come back as often as they like. */
+  refusalsOnly?: true;
 }
 
 const QUARTER_HOUR = 900;
@@ -12,7 +14,7 @@ const HOUR = 3600;
 /** One per route that answers `too_many`; the frame refuses to mount such a route without. */
 export const RATE_LIMITS = {
   signUp: { hits: 20, windowS: HOUR },
-  signIn: { hits: 60, windowS: QUARTER_HOUR, hitsPerEmail: 10 },
+  signIn: { hits: 60, windowS: QUARTER_HOUR, hitsPerEmail: 10, refusalsOnly: true },
   requestPasswordReset: { hits: 20, windowS: HOUR, hitsPerEmail: 5 },
   resetPassword: { hits: 30, windowS: QUARTER_HOUR },
   readInvitation: { hits: 60, windowS: QUARTER_HOUR },

@@ -44,12 +44,30 @@ export async function createJob(deps: Deps, member: Member, rows: JobRowLists): 
   const wrong = wrongRows(rows);
   if (wrong.length > 0) return refuse('invalid', 'The rows do not make a job.', wrong.slice(0, 100));
   const id = rows.job[0]!.id;
-  return asMember(deps, member, async (tx) => {
-    const result = await createJobRows(tx, rows);
-    if (result.kind === 'created') return { id, headSeq: result.headSeq };
-    const there = await openJobRows(tx, id);
-    return there?.headSeq === 0 && sameRows(there.rows, rows) ? { id, headSeq: 0 } : idTaken();
-  });
+  return againIfOvertaken(() =>
+    asMember(deps, member, async (tx) => {
+      const result = await createJobRows(tx, rows);
+      if (result.kind === 'created') return { id, headSeq: result.headSeq };
+      const there = await openJobRows(tx, id);
+      return there?.headSeq === 0 && sameRows(there.rows, rows) ? { id, headSeq: 0 } : idTaken();
+    }),
+  );
+}
+
+/** Two calls with the same id at once: the one that comes second finds what the first has made. */
+async function againIfOvertaken<T>(work: () => Promise<T>): Promise<T> {
+  try {
+    return await work();
+  } catch (error) {
+    if (!isTakenKey(error)) throw error;
+    return work();
+  }
+}
+
+/** PostgreSQL's unique_violation, as the database layer hands it on. */
+function isTakenKey(error: unknown): boolean {
+  const cause: unknown = error instanceof Error ? (error.cause ?? error) : error;
+  return typeof cause === 'object' && cause !== null && 'code' in cause && cause.code === '23505';
 }
 
 const idTaken = () => refuse('conflict', 'There is a job with this id already. Send the job under a new id.');
@@ -69,17 +87,19 @@ export async function duplicateJob(
   jobId: string,
   copy: { id: string; name: string },
 ): Promise<Created | Refusal> {
-  return asMember(deps, member, async (tx) => {
-    const result = await duplicateJobRows(tx, jobId, copy.id, copy.name);
-    if (result.kind === 'missing') return noJob();
-    if (result.kind === 'created') return { id: copy.id, headSeq: result.headSeq };
-    const there = await openJobRows(tx, copy.id);
-    const source = await openJobRows(tx, jobId);
-    const wanted = source && { ...source.rows, job: source.rows.job.map((row) => ({ ...row, ...copy })) };
-    return there?.headSeq === 0 && wanted && sameRows(there.rows, wanted)
-      ? { id: copy.id, headSeq: 0 }
-      : idTaken();
-  });
+  return againIfOvertaken(() =>
+    asMember(deps, member, async (tx) => {
+      const result = await duplicateJobRows(tx, jobId, copy.id, copy.name);
+      if (result.kind === 'missing') return noJob();
+      if (result.kind === 'created') return { id: copy.id, headSeq: result.headSeq };
+      const there = await openJobRows(tx, copy.id);
+      const source = await openJobRows(tx, jobId);
+      const wanted = source && { ...source.rows, job: source.rows.job.map((row) => ({ ...row, ...copy })) };
+      return there?.headSeq === 0 && wanted && sameRows(there.rows, wanted)
+        ? { id: copy.id, headSeq: 0 }
+        : idTaken();
+    }),
+  );
 }
 
 export async function archiveJob(

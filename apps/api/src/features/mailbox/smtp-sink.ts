@@ -37,8 +37,9 @@ export async function startSmtpSink(port: number, store: MailStore, log: Logger)
     },
   });
   server.on('error', (error) => log.warn({ err: error }, 'local mail server'));
+  const listening = once(server.server, 'listening');
   server.listen(port, '127.0.0.1');
-  await once(server.server, 'listening');
+  await listening;
   return {
     port: (server.server.address() as AddressInfo).port,
     close: () => new Promise((resolve) => server.close(() => resolve())),

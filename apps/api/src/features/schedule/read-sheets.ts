@@ -17,7 +17,7 @@ type Reply =
   | { ok: true; sheets: Sheet[] }
   | { ok: false; code: 'too_large' | 'unsupported_file' | 'invalid'; message: string };
 
-const LIMITS: ReadLimits = { timeMs: 10_000, heapMb: 256, residentMb: 512 };
+const LIMITS: ReadLimits = { timeMs: 10_000, heapMb: 256, residentMb: 384 };
 const AT_ONCE = 2;
 const WATCH_MS = 100;
 const child = fileURLToPath(new URL('./read-sheets-child.mjs', import.meta.url));
