@@ -6,17 +6,20 @@ import { Scroller } from './scroller.tsx';
 export function Table({
   caption,
   showCaption = false,
+  stacked = false,
   className,
   children,
 }: {
   caption: ReactNode;
   showCaption?: boolean;
+  /** Rows under each other on a phone; the cells then need their `label`. */
+  stacked?: boolean;
   className?: string;
   children: ReactNode;
 }) {
   return (
     <Scroller label={`Table: ${textOf(caption)}`} className="max-w-full overflow-x-auto">
-      <table className={cx('w-full border-collapse text-grid', className)}>
+      <table className={cx('w-full border-collapse text-grid', stacked && 'stack-rows', className)}>
         <caption className={cx(showCaption ? 'pb-1 text-left text-label text-ink-soft' : 'sr-only')}>
           {caption}
         </caption>
@@ -74,9 +77,16 @@ export function Tr({ chosen = false, className, ...rest }: ComponentProps<'tr'> 
   );
 }
 
-export function Td({ numeric = false, className, ...rest }: ComponentProps<'td'> & { numeric?: boolean }) {
+interface TdProps extends ComponentProps<'td'> {
+  numeric?: boolean;
+  /** The word of its column, shown beside it where rows are stacked. */
+  label?: string;
+}
+
+export function Td({ numeric = false, label, className, ...rest }: TdProps) {
   return (
     <td
+      data-label={label}
       className={cx(
         'border-b border-hair px-2 py-1 align-baseline first:pl-4 last:pr-4',
         numeric && 'whitespace-nowrap text-right',

@@ -35,7 +35,7 @@ export function AuditPart({ firm }: { firm: string }) {
       {events.length === 0 ? (
         <EmptyState title="Nothing has happened yet" />
       ) : (
-        <Table caption="Audit trail">
+        <Table stacked caption="Audit trail">
           <thead>
             <tr>
               <Th>When</Th>
@@ -48,9 +48,11 @@ export function AuditPart({ firm }: { firm: string }) {
             {events.map((event) => (
               <tr key={`${event.at} ${event.what} ${event.subject}`}>
                 <RowHead className="whitespace-nowrap font-normal">{formatMoment(event.at)}</RowHead>
-                <Td>{event.person ?? 'the product itself'}</Td>
-                <Td>{event.what}</Td>
-                <Td className="text-ink-soft">{event.subject}</Td>
+                <Td label="Who">{event.person ?? 'the product itself'}</Td>
+                <Td label="What">{event.what}</Td>
+                <Td label="Of" className="text-ink-soft">
+                  {event.subject}
+                </Td>
               </tr>
             ))}
           </tbody>

@@ -37,7 +37,7 @@ export function ConductorsPart({ firm, actions, mayManage }: FirmPartProps) {
           The tables of the product are always there.
         </EmptyState>
       ) : (
-        <Table caption="Conductors of the firm">
+        <Table stacked caption="Conductors of the firm">
           <thead>
             <tr>
               <Th>Name</Th>
@@ -60,14 +60,26 @@ export function ConductorsPart({ firm, actions, mayManage }: FirmPartProps) {
             {firm.conductors.map((row) => (
               <tr key={row.id}>
                 <RowHead>{row.name}</RowHead>
-                <Td>{row.material}</Td>
-                <Td numeric>{row.areaMm2}</Td>
-                <Td numeric>{row.r}</Td>
-                <Td numeric>{row.x}</Td>
-                <Td>{PER_WORDS[row.per]}</Td>
-                <Td numeric>{row.temperature}</Td>
-                <Td numeric>{row.ampacity === null ? '' : `${row.ampacity} A`}</Td>
-                <Td className="text-ink-soft">{row.source}</Td>
+                <Td label="Material">{row.material}</Td>
+                <Td label="mm²" numeric>
+                  {row.areaMm2}
+                </Td>
+                <Td label="R" numeric>
+                  {row.r}
+                </Td>
+                <Td label="X" numeric>
+                  {row.x}
+                </Td>
+                <Td label="Unit">{PER_WORDS[row.per]}</Td>
+                <Td label="°C" numeric>
+                  {row.temperature}
+                </Td>
+                <Td label="Ampacity" numeric>
+                  {row.ampacity === null ? '' : `${row.ampacity} A`}
+                </Td>
+                <Td label="Source" className="text-ink-soft">
+                  {row.source}
+                </Td>
                 {mayManage && (
                   <Td className="whitespace-nowrap text-right">
                     <Button

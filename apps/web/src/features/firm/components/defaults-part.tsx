@@ -27,7 +27,7 @@ export function DefaultsPart({ firm, actions, mayManage }: FirmPartProps) {
         title="Starting defaults"
         note="What a new circuit starts from where nobody says otherwise, and why. A house rule is shown to your people beside the default; the figures themselves are changed on each job."
       />
-      <Table caption="Starting defaults and their grounds">
+      <Table stacked caption="Starting defaults and their grounds">
         <thead>
           <tr>
             <Th>Default</Th>
@@ -39,8 +39,10 @@ export function DefaultsPart({ firm, actions, mayManage }: FirmPartProps) {
           {DEFAULTS.map(({ id, text, ground }) => (
             <tr key={id}>
               <RowHead className="min-w-64 font-normal">{text}</RowHead>
-              <Td className="min-w-48 text-ink-soft">{ground}</Td>
-              <Td className="min-w-56">
+              <Td label="Ground" className="min-w-48 text-ink-soft">
+                {ground}
+              </Td>
+              <Td label="House rule, if different" className="min-w-56">
                 {mayManage ? (
                   <TextInput
                     compact

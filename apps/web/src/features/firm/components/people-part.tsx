@@ -27,7 +27,7 @@ export function PeoplePart({ firm, actions, mayManage, self }: FirmPartProps & {
           {refused}
         </Message>
       )}
-      <Table caption="People of the firm">
+      <Table stacked caption="People of the firm">
         <thead>
           <tr>
             <Th>Name</Th>
@@ -47,8 +47,8 @@ export function PeoplePart({ firm, actions, mayManage, self }: FirmPartProps & {
                 {member.name}
                 {member.personId === self && <span className="font-normal text-ink-soft"> (you)</span>}
               </RowHead>
-              <Td>{member.email}</Td>
-              <Td>
+              <Td label="E-mail">{member.email}</Td>
+              <Td label="Role">
                 {mayManage ? (
                   <Select
                     bare
@@ -76,7 +76,7 @@ export function PeoplePart({ firm, actions, mayManage, self }: FirmPartProps & {
       {firm.invitations.length > 0 && (
         <>
           <PartHeading title="Invited" note="Not accepted yet." />
-          <Table caption="Open invitations">
+          <Table stacked caption="Open invitations">
             <thead>
               <tr>
                 <Th>E-mail</Th>
@@ -93,8 +93,8 @@ export function PeoplePart({ firm, actions, mayManage, self }: FirmPartProps & {
               {firm.invitations.map((invitation) => (
                 <tr key={invitation.id}>
                   <RowHead>{invitation.email}</RowHead>
-                  <Td>{ROLE_NAMES[invitation.role]}</Td>
-                  <Td>{formatDay(invitation.expiresAt)}</Td>
+                  <Td label="Role">{ROLE_NAMES[invitation.role]}</Td>
+                  <Td label="Until">{formatDay(invitation.expiresAt)}</Td>
                   {mayManage && (
                     <Td className="text-right">
                       <Button

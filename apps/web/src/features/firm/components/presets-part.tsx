@@ -46,7 +46,7 @@ export function PresetsPart({
       {firm.presets.length === 0 ? (
         <EmptyState title="No preset yet">Limits are then typed on each job.</EmptyState>
       ) : (
-        <Table caption="Limit presets">
+        <Table stacked caption="Limit presets">
           <thead>
             <tr>
               <Th>Name</Th>
@@ -67,12 +67,20 @@ export function PresetsPart({
             {firm.presets.map((preset) => (
               <tr key={preset.id}>
                 <RowHead>{preset.name}</RowHead>
-                <Td>{preset.clause}</Td>
-                <Td>{preset.force}</Td>
-                <Td numeric>{figureOf(preset, 'feeder')}</Td>
-                <Td numeric>{figureOf(preset, 'branch')}</Td>
-                <Td numeric>{figureOf(preset, 'total')}</Td>
-                <Td numeric>{others(preset) || ''}</Td>
+                <Td label="Clause">{preset.clause}</Td>
+                <Td label="Force">{preset.force}</Td>
+                <Td label="Feeder" numeric>
+                  {figureOf(preset, 'feeder')}
+                </Td>
+                <Td label="Branch" numeric>
+                  {figureOf(preset, 'branch')}
+                </Td>
+                <Td label="Together" numeric>
+                  {figureOf(preset, 'total')}
+                </Td>
+                <Td label="Others" numeric>
+                  {others(preset) || ''}
+                </Td>
                 {mayManage && (
                   <Td className="whitespace-nowrap text-right">
                     <Button
@@ -100,7 +108,7 @@ export function PresetsPart({
         </Table>
       )}
       <PartHeading title="Codes and standards" note="Offered beside your own on every job." />
-      <Table caption="Limits of codes and standards">
+      <Table stacked caption="Limits of codes and standards">
         <thead>
           <tr>
             <Th>Name</Th>
@@ -114,10 +122,14 @@ export function PresetsPart({
           {LIMIT_PRESETS.map((preset) => (
             <tr key={preset.id}>
               <RowHead className="min-w-48">{preset.name}</RowHead>
-              <Td className="min-w-48">{preset.clause}</Td>
-              <Td>{preset.edition}</Td>
-              <Td>{preset.standing}</Td>
-              <Td className="text-ink-soft">{preset.verified}</Td>
+              <Td label="Clause" className="min-w-48">
+                {preset.clause}
+              </Td>
+              <Td label="Edition">{preset.edition}</Td>
+              <Td label="Standing">{preset.standing}</Td>
+              <Td label="How it was seen" className="text-ink-soft">
+                {preset.verified}
+              </Td>
             </tr>
           ))}
         </tbody>

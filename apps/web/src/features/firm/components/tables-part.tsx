@@ -9,7 +9,7 @@ export function TablesPart() {
         title="Tables"
         note="What the results stand on. Confirm them against the edition that is adopted where you work."
       />
-      <Table caption="Tables with source and edition">
+      <Table stacked caption="Tables with source and edition">
         <thead>
           <tr>
             <Th>Table</Th>
@@ -22,9 +22,15 @@ export function TablesPart() {
           {tableSources().map((table) => (
             <tr key={table.id}>
               <RowHead className="min-w-52">{table.title}</RowHead>
-              <Td className="min-w-52">{table.source}</Td>
-              <Td className="min-w-40">{table.verified}</Td>
-              <Td className="min-w-64 text-ink-soft">{table.note}</Td>
+              <Td label="Source and edition" className="min-w-52">
+                {table.source}
+              </Td>
+              <Td label="How it was seen" className="min-w-40">
+                {table.verified}
+              </Td>
+              <Td label="Note" className="min-w-64 text-ink-soft">
+                {table.note}
+              </Td>
             </tr>
           ))}
         </tbody>

@@ -75,7 +75,7 @@ export function UploadJobPage({ firm }: { firm: string }) {
               <b>{read.name}</b>: {read.result.reason} Nothing was written.
             </Message>
             {read.result.problems.length > 0 && (
-              <Table caption="What must be put right">
+              <Table stacked caption="What must be put right">
                 <thead>
                   <tr>
                     <Th>Place in the file</Th>
@@ -86,7 +86,7 @@ export function UploadJobPage({ firm }: { firm: string }) {
                   {read.result.problems.slice(0, SHOWN_MAX).map((problem) => (
                     <tr key={`${problem.path} ${problem.message}`}>
                       <RowHead className="font-code text-label">{problem.path || 'the whole file'}</RowHead>
-                      <Td>{problem.message}</Td>
+                      <Td label="What is wrong">{problem.message}</Td>
                     </tr>
                   ))}
                 </tbody>

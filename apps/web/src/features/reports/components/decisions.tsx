@@ -6,7 +6,7 @@ import { RowHead, Table, Td, Th } from '../../../ui/table.tsx';
 export function Decisions({ decisions, letter }: { decisions: readonly DecisionView[]; letter: string }) {
   if (decisions.length === 0) return null;
   return (
-    <Table caption={`Decisions on revision ${letter}`} className="mt-3">
+    <Table stacked caption={`Decisions on revision ${letter}`} className="mt-3">
       <thead>
         <tr>
           <Th>Decision</Th>
@@ -22,11 +22,11 @@ export function Decisions({ decisions, letter }: { decisions: readonly DecisionV
               {decisionWord(decision.decision)}
               {decision.words && <span className="block font-normal">“{decision.words}”</span>}
             </RowHead>
-            <Td>
+            <Td label="Name as typed, unverified">
               {decision.name}
               {decision.title && <span className="block text-label text-ink-soft">{decision.title}</span>}
             </Td>
-            <Td>
+            <Td label="When and how">
               {formatMoment(decision.at)}
               <span className="block text-label text-ink-soft">
                 {decision.via === 'paper'
@@ -34,7 +34,9 @@ export function Decisions({ decisions, letter }: { decisions: readonly DecisionV
                   : `by the link of ${decision.recipient ?? 'an inspector'}`}
               </span>
             </Td>
-            <Td className="min-w-48 whitespace-pre-line">{decision.comments}</Td>
+            <Td label="Comments" className="min-w-48 whitespace-pre-line">
+              {decision.comments}
+            </Td>
           </tr>
         ))}
       </tbody>

@@ -56,7 +56,7 @@ export function Deliveries({ deliveries, letter, actions }: DeliveriesProps) {
           {refused}
         </Message>
       )}
-      <Table caption={`Deliveries of revision ${letter}`}>
+      <Table stacked caption={`Deliveries of revision ${letter}`}>
         <thead>
           <tr>
             <Th>Sent to</Th>
@@ -77,17 +77,17 @@ export function Deliveries({ deliveries, letter, actions }: DeliveriesProps) {
                 {delivery.recipientName}
                 <span className="block text-label font-normal text-ink-soft">{delivery.recipientEmail}</span>
               </RowHead>
-              <Td>
+              <Td label="Message">
                 <DeliveryState delivery={delivery} />
               </Td>
-              <Td>
+              <Td label="Opened">
                 {delivery.openedAt ? (
                   formatMoment(delivery.openedAt)
                 ) : (
                   <span className="text-ink-soft">not yet</span>
                 )}
               </Td>
-              <Td>
+              <Td label="Link">
                 {LINK_WORDS[delivery.link]} {delivery.link === 'open' && formatDay(delivery.linkExpiresAt)}
               </Td>
               {actions && (
