@@ -1,7 +1,9 @@
+import { readFileSync } from 'node:fs';
 import { request as httpRequest } from 'node:http';
 import { readSchedule } from '@farlug/contract/routes';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import writeXlsx from 'write-excel-file/node';
+import { zipBomb } from '../../../fixtures/uploads/zip-bomb.ts';
 import { startTestApi, type TestApi } from './start-test-api.ts';
 import { pathOf } from './test-client.ts';
 import { signUpFirm, type TestFirm } from './test-firm.ts';
@@ -17,6 +19,38 @@ afterAll(() => api.close());
 
 const send = (name: string, bytes: Buffer) =>
   firm.admin.call(readSchedule, { params: { firm: firm.firm }, file: { name, bytes } });
+
+const sample = (name: string) => readFileSync(new URL(`../../../fixtures/uploads/${name}`, import.meta.url));
+
+describe('a sample upload', () => {
+  it.each([
+    ['loft-panel.csv', 1],
+    ['hall-board-de.csv', 1],
+    ['store-panel.xlsx', 2],
+    ['mixed-units.csv', 1],
+    ['duplicate-circuits.csv', 1],
+    ['two-hundred-columns.csv', 1],
+  ])('%s comes back as cells', async (name, sheets) => {
+    const { status, body } = await send(name, sample(name));
+    expect(status).toBe(200);
+    expect(body.sheets).toHaveLength(sheets);
+    expect(Math.max(...body.sheets.map(({ cells }) => cells.length))).toBeGreaterThan(1);
+  });
+
+  it('with formulas shows them as text', async () => {
+    const { body } = await send('formulas.xlsx', sample('formulas.xlsx'));
+    const cells = body.sheets.flatMap((sheet) => sheet.cells.flat());
+    expect(cells.filter((cell) => cell.startsWith('=')).length).toBeGreaterThan(0);
+  });
+
+  it('that is no workbook, or unpacks to 300 MB, is refused', async () => {
+    expect((await send('not-a-workbook.xlsx', sample('not-a-workbook.xlsx'))).error.code).toBe(
+      'unsupported_file',
+    );
+    expect((await send('bomb.xlsx', zipBomb(300, true))).error.code).toBe('too_large');
+    expect((await send('bomb.xlsx', zipBomb(300, false))).error.code).toBe('unsupported_file');
+  });
+});
 
 describe('a schedule file', () => {
   it('comes back as cells, whatever its name says', async () => {
@@ -59,6 +93,7 @@ describe('a schedule file', () => {
     ['a web page', Buffer.from('<!DOCTYPE html><table></table>'), /page/],
     ['bytes', Buffer.from([1, 2, 3, 0, 4]), /not a text file/],
     ['nothing', Buffer.alloc(0), /empty/],
+    ['plain text', Buffer.from('A letter about the job.\nIt holds no sheet.\n'), /without columns/],
     ['only separators', Buffer.from(',,,\n,,,\n'), /no cell/],
     ['another archive', zipOf([{ name: 'a.txt', bytes: Buffer.from('a') }]), /save it as XLSX or CSV/],
   ])('that is %s is refused with what would be right', async (_what, bytes, message) => {

@@ -21,5 +21,10 @@ export async function readSchedule(
       'unsupported_file',
       'The file has no cell with anything in it. Send the one that has the schedule.',
     );
+  if (sniffed.kind === 'csv' && sheets.every(({ cells }) => cells.every((row) => row.length < 2)))
+    return refuse(
+      'unsupported_file',
+      'This is text without columns. Save the schedule as CSV, with commas or semicolons between the columns, or as XLSX.',
+    );
   return { fileName: file.name.slice(0, 200), sheets };
 }
