@@ -6,6 +6,7 @@ import { jobFromRows } from '../job/index.ts';
 import type { JobRows } from '../rows/index.ts';
 import { scheduleView } from '../schedule/index.ts';
 import type { Cells } from './cells.ts';
+import { panelTitle } from './panel-title.ts';
 import { previewImport } from './preview-import.ts';
 import { recogniseColumns } from './recognise-columns.ts';
 
@@ -123,6 +124,19 @@ describe('columns', () => {
     expect(
       fields('1 | Corridor lighting | 20/1 | #12 | 84 ft\n3 | Reception sockets | 20/1 | #12 | 47 ft'),
     ).toEqual(['space', 'description', 'breaker', 'size', 'length']);
+  });
+});
+
+describe('the lines above the headings', () => {
+  test.each([
+    ['Panel LP-5', '208Y/120 V, 225 A main, surface', 'LP-5', '225'],
+    ['PANELBOARD: HP2', 'Mains: 400 A', 'HP2', '400'],
+    ['Panel schedule "RP-1A"', '100A MLO', 'RP-1A', '100'],
+    ['Verteiler UV-3', '', 'UV-3', null],
+    ['Second floor', 'see plans', null, null],
+  ])('“%s / %s” name the panel and its main', (first, second, code, mainAmps) => {
+    const cells = [[first], [second], ['Ckt', 'Description', 'Breaker'], ['1', 'Lights', '20']];
+    expect(panelTitle(cells, recogniseColumns(cells))).toEqual({ code, mainAmps });
   });
 });
 

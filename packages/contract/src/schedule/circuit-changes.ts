@@ -19,6 +19,7 @@ import {
 import { relineCircuit, usualTerminals } from './reline.ts';
 import type { RowChanges } from './row-changes.ts';
 import {
+  feederDemandChange,
   groundChange,
   materialChange,
   neutralChange,
@@ -43,7 +44,8 @@ export const CIRCUIT_CHANGES: Record<CircuitField, Change> = {
   notes: words('notes', 4000),
   load: changeLoad,
   powerFactor: eachLoad(powerFactorChange),
-  demand: eachLoad((_, text) => demandChange(text)),
+  demand: (changes, parts, text) =>
+    isFeeder(parts) ? feederDemand(changes, parts, text) : loadDemand(changes, parts, text),
   continuous: eachLoad((_, text) => continuousChange(text)),
   class: eachLoad(classChange),
   starting: eachLoad((_, text) => startingChange(text)),
@@ -55,6 +57,11 @@ export const CIRCUIT_CHANGES: Record<CircuitField, Change> = {
   raceway: everyRun((_, text) => racewayChange(text)),
   length: changeLength,
 };
+
+const isFeeder = ({ circuit }: CircuitParts): boolean =>
+  circuit.kind === 'feeder' || circuit.kind === 'feed-through';
+const loadDemand = eachLoad((_, text) => demandChange(text));
+const feederDemand = everyRun((_, text) => feederDemandChange(text));
 
 function words(field: 'description' | 'room' | 'loadType' | 'notes', max: number): Change {
   return (changes, { circuit }, text) => {
@@ -82,6 +89,8 @@ function eachLoad(read: (load: Row<'load'>, text: string) => LoadChange): Change
 }
 
 function changeLoad(changes: RowChanges, parts: CircuitParts, text: string): string | null {
+  if (isFeeder(parts)) return 'must be empty: a feeder carries what lies beyond it';
+  if (parts.circuit.kind !== 'branch') return 'must be empty: make it a branch circuit first';
   const loads = parts.loads.length > 0 ? parts.loads : [firstLoad(changes, parts)];
   const each = text === '' ? loads.map(() => '') : text.split(PARTS);
   if (each.length !== loads.length)

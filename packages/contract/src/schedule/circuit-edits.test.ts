@@ -149,6 +149,25 @@ describe('typing into the grid', () => {
     expect(moved.loads.map((load) => load.terminals).sort()).toEqual(['L1-N', 'L2-N']);
   });
 
+  test('a feeder takes a demand of its own, and no load', () => {
+    const before = workshop();
+    const rows = after(before, type(before, 'MDP-1/3/5', 'demand', '80 %'));
+    expect(row(rows, 'MDP-1/3/5').runs[0]?.demand).toBe('0.8');
+    expect(row(rows, 'MDP-1/3/5').fields.demand.text).toBe('0.8');
+    expect(type(before, 'MDP-1/3/5', 'demand', '1.2').problem).toMatch(/share/);
+    expect(type(before, 'MDP-1/3/5', 'load', '16 A').problem).toMatch(/a feeder carries what lies beyond it/);
+    expect(type(before, 'LP-1-41', 'load', '16 A').problem).toMatch(/branch circuit first/);
+  });
+
+  test('a spare becomes a circuit with a run and a load to fill in', () => {
+    const before = workshop();
+    const made = row(after(before, type(before, 'LP-1-41', 'kind', 'branch')), 'LP-1-41');
+    expect(made.runs).toHaveLength(1);
+    expect(made.loads).toHaveLength(1);
+    expect(made.breakers).toHaveLength(1);
+    expect(type(before, 'LP-1-1', 'kind', 'spare').problem).toMatch(/delete the circuit/);
+  });
+
   test('horsepower makes a motor, with its power factor assumed', () => {
     const before = workshop();
     const rows = after(before, type(before, 'LP-1-1', 'load', '1/2 hp'));

@@ -49,7 +49,9 @@ export function fieldText(parts: CircuitParts, field: CircuitField): string {
     case 'powerFactor':
       return shared(loads, (load) => powerFactorText(load));
     case 'demand':
-      return shared(loads, demandText);
+      return loads.length === 0 && run && circuit.kind !== 'branch'
+        ? (run.demand ?? '1')
+        : shared(loads, demandText);
     case 'continuous':
       return loads.length === 0 ? '' : shared(loads, (load) => (load.continuous ? 'yes' : 'no'));
     case 'class':

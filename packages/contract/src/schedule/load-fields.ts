@@ -1,5 +1,6 @@
 import { LOAD_CLASSES, type LoadClass } from '@farlug/solver/job';
 import { parseAmps, parseNumber, parsePower } from '@farlug/solver/units';
+import { Decimal } from 'decimal.js';
 import { proposedPowerFactor, STARTING_POWER_FACTOR } from '../presets/defaults.ts';
 import type { Row } from '../rows/index.ts';
 import { classFromText, yesOrNo } from './words.ts';
@@ -38,7 +39,7 @@ export function powerFactorChange(load: Pick<Row<'load'>, 'class'>, text: string
   const value = parseNumber(number.replace(/%$/, '').trim(), { min: 0, above: true, max: percent ? 100 : 1 });
   if (!value.ok)
     return refused(`must be a power factor above 0 and at most 1, such as 0.85: ${value.message}`);
-  const powerFactor = percent ? String(Number(value.value) / 100) : value.value;
+  const powerFactor = percent ? new Decimal(value.value).div(100).toFixed() : value.value;
   return { ok: true, set: { powerFactor, powerFactorAssumed: false, leading: /^(lead|cap)/i.test(side) } };
 }
 
@@ -53,7 +54,7 @@ export function demandChange(text: string): LoadChange {
   if (/va$/i.test(text)) {
     const va = parsePower(text);
     if (!va.ok) return va;
-    const amount = va.unit === 'kVA' ? String(Number(va.value) * 1000) : va.value;
+    const amount = va.unit === 'kVA' ? new Decimal(va.value).times(1000).toFixed() : va.value;
     return Number(amount) < 0
       ? refused('must be ≥ 0 VA')
       : { ok: true, set: { demand: null, demandVa: amount } };
@@ -64,7 +65,7 @@ export function demandChange(text: string): LoadChange {
     return refused(
       `must be a factor up to 1.5, a percentage, or VA, such as 0.4, 40 % or 1080 VA: ${value.message}`,
     );
-  const demand = percent ? String(Number((Number(value.value) / 100).toPrecision(12))) : value.value;
+  const demand = percent ? new Decimal(value.value).div(100).toFixed() : value.value;
   return { ok: true, set: { demand: demand === '1' ? null : demand, demandVa: null } };
 }
 

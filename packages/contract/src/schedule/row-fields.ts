@@ -20,10 +20,12 @@ import {
   startingChange,
 } from './load-fields.ts';
 import {
+  feederDemandChange,
   groundChange,
   materialChange,
   neutralChange,
   racewayChange,
+  readShare,
   setsChange,
   sizeChange,
 } from './run-fields.ts';
@@ -81,14 +83,6 @@ const rated = (field: string, values: readonly number[]) => (text: string) => {
   if (text === '') return set(field, null);
   const value = Number(text.replace(/\s*°?\s*c$/i, ''));
   return values.includes(value) ? set(field, value) : refused(`must be ${values.join(', ')} °C`);
-};
-
-const share = (text: string): Parsed => {
-  const percent = /%$/.test(text);
-  const read = parseNumber(text.replace(/\s*%$/, ''), { min: 0, max: percent ? 100 : 1 });
-  return read.ok && percent
-    ? { ok: true, value: String(Number((Number(read.value) / 100).toPrecision(12))) }
-    : read;
 };
 
 const temperature = (text: string): Change => {
@@ -156,7 +150,7 @@ export const ROW_FIELDS = {
     bundled: whole('bundled', 1, 200),
     method: oneOfOrNone('method', INSTALLATION_METHODS),
     protection: oneOf('protection', PROTECTIONS),
-    demand: decimal('demand', share),
+    demand: feederDemandChange,
     breaker,
     open: yes('open'),
     locked: yes('locked'),
@@ -184,7 +178,7 @@ export const ROW_FIELDS = {
     size: (text, { row }) => loadSizeChange(row, text),
     powerFactor: (text, { row }) => powerFactorChange(row, text),
     demand: demandChange,
-    minimum: decimal('minimum', share),
+    minimum: decimal('minimum', readShare),
     continuous: continuousChange,
     class: (text, { row }) => classChange(row, text),
     behaviour: oneOf('behaviour', BEHAVIOURS),

@@ -1,4 +1,5 @@
 import { parseConductorSize, parseNumber } from '@farlug/solver/units';
+import { Decimal } from 'decimal.js';
 import type { JobRows, Row, WireUnit } from '../rows/index.ts';
 import { materialFromText, racewayFromText } from './words.ts';
 
@@ -86,4 +87,19 @@ export function racewayChange(text: string): RunChange {
   const read = racewayFromText(text);
   if (!read) return { ok: false, message: 'must name pvc, aluminum, steel or cable, such as 3/4 EMT or PVC' };
   return { ok: true, set: { raceway: read.raceway, racewaySize: read.size } };
+}
+
+/** The share of what lies beyond a feeder that flows in it at one time: `0.8` or `80 %`; empty is all of it. */
+export function feederDemandChange(text: string): RunChange {
+  if (text === '') return { ok: true, set: { demand: null } };
+  const read = readShare(text);
+  return read.ok ? { ok: true, set: { demand: read.value === '1' ? null : read.value } } : read;
+}
+
+/** A share from 0 to 1, or as a percentage. */
+export function readShare(text: string): { ok: true; value: string } | { ok: false; message: string } {
+  const percent = /%$/.test(text);
+  const read = parseNumber(text.replace(/\s*%$/, ''), { min: 0, max: percent ? 100 : 1 });
+  if (!read.ok) return { ok: false, message: `must be a share such as 0.8 or 80 %: ${read.message}` };
+  return percent ? { ok: true, value: new Decimal(read.value).div(100).toFixed() } : read;
 }
