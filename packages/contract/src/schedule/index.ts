@@ -1,3 +1,4 @@
+export * from './built-length.ts';
 export * from './circuit-edits.ts';
 export * from './circuit-fields.ts';
 export * from './circuit-form.ts';
@@ -8,6 +9,7 @@ export * from './nominal.ts';
 export * from './panel-edits.ts';
 export type { PanelFoot } from './panel-foot.ts';
 export * from './panel-tree.ts';
+export * from './proposal-edits.ts';
 export * from './row-edits.ts';
 export { ROW_FIELDS, type RowField, type TypedTable } from './row-fields.ts';
 export * from './run-edits.ts';
