@@ -37,7 +37,11 @@ const tidying = setInterval(() => {
 
 async function start() {
   const mailbox = config.local
-    ? await startSmtpSink(config.mailboxPort, new MailStore(config.mailboxDir), log)
+    ? await startSmtpSink(
+        { host: '127.0.0.1', port: config.mailboxPort },
+        new MailStore(config.mailboxDir),
+        log,
+      )
     : null;
   if (config.local) await seedDemo(deps);
   const http = createServer(createApp(deps));

@@ -21,7 +21,7 @@ afterAll(async () => {
 });
 
 async function deliver(...subjects: string[]): Promise<void> {
-  const sink = await startSmtpSink(0, new MailStore(directory), api.deps.log);
+  const sink = await startSmtpSink({ host: '127.0.0.1', port: 0 }, new MailStore(directory), api.deps.log);
   const transport = createTransport({ host: '127.0.0.1', port: sink.port });
   for (const subject of subjects)
     await transport.sendMail({

@@ -1,16 +1,18 @@
 import { type ChildProcess, spawn } from 'node:child_process';
 import { once } from 'node:events';
-import { mkdirSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { mkdirSync, mkdtempSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { type TestDatabase, withTestDatabase } from '@farlug/db/testing';
-import { afterAll, afterEach, beforeAll, expect, it } from 'vitest';
+import { createTransport } from 'nodemailer';
+import { afterAll, afterEach, beforeAll, expect, it, vi } from 'vitest';
 import { DEMO_ACCOUNTS } from '../src/demo/demo-accounts.ts';
 import { TestClient } from './test-client.ts';
 
 const main = fileURLToPath(new URL('../src/main.ts', import.meta.url));
+const mailSink = fileURLToPath(new URL('../src/mailbox-main.ts', import.meta.url));
 const directory = mkdtempSync(path.join(tmpdir(), 'farlug-main-'));
 let database: TestDatabase;
 let running: ChildProcess | undefined;
@@ -36,8 +38,8 @@ async function freePort(): Promise<number> {
   return port;
 }
 
-function start(env: Record<string, string>) {
-  const child = spawn(process.execPath, ['--import', 'tsx', main], {
+function start(env: Record<string, string>, file = main) {
+  const child = spawn(process.execPath, ['--import', 'tsx', file], {
     env: {
       PATH: process.env.PATH ?? '',
       TZ: 'UTC',
@@ -117,4 +119,19 @@ it('seeds the demo firm once, keeps it through a restart, and stops when it is t
     child.kill('SIGTERM');
     expect((await ended).code).toBe(0);
   }
+});
+
+it('runs its mail sink as a program of its own', async () => {
+  const port = await freePort();
+  const { child, ended } = start({ MAILBOX_PORT: String(port) }, mailSink);
+  const transport = createTransport({ host: '127.0.0.1', port });
+  await vi.waitFor(() => transport.verify(), { timeout: 20_000, interval: 100 });
+  await transport.sendMail({ from: 'a@firm.example', to: 'b@firm.example', subject: 'Kept', text: 'Kept.' });
+  transport.close();
+  child.kill('SIGTERM');
+  expect((await ended).code).toBe(0);
+  const kept = readdirSync(path.join(directory, 'mail')).map((name) =>
+    readFileSync(path.join(directory, 'mail', name), 'utf8'),
+  );
+  expect(kept.filter((message) => message.includes('Subject: Kept'))).toHaveLength(1);
 });

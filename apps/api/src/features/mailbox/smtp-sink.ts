@@ -11,8 +11,12 @@ export interface SmtpSink {
   close: () => Promise<void>;
 }
 
-/** A real SMTP server on loopback that keeps whatever it is given and passes nothing on. */
-export async function startSmtpSink(port: number, store: MailStore, log: Logger): Promise<SmtpSink> {
+/** A real SMTP server that keeps whatever it is given and passes nothing on. */
+export async function startSmtpSink(
+  { host, port }: { host: string; port: number },
+  store: MailStore,
+  log: Logger,
+): Promise<SmtpSink> {
   const server = new SMTPServer({
     name: 'mailbox.invalid',
     banner: 'Farlug local mailbox',
@@ -38,7 +42,7 @@ export async function startSmtpSink(port: number, store: MailStore, log: Logger)
   });
   server.on('error', (error) => log.warn({ err: error }, 'local mail server'));
   const listening = once(server.server, 'listening');
-  server.listen(port, '127.0.0.1');
+  server.listen(port, host);
   await listening;
   return {
     port: (server.server.address() as AddressInfo).port,
