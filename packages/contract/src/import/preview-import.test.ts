@@ -365,6 +365,7 @@ describe('problems', () => {
         'Total',
       ),
       fc.string({ maxLength: 12 }),
+      fc.string({ maxLength: 5, unit: 'binary' }),
     );
     const headings = [
       'Ckt',

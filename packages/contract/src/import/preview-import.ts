@@ -1,7 +1,7 @@
 import type { CircuitKind } from '@farlug/solver/job';
 import { applyEdit, composeEdits, type Edit } from '../edit/index.ts';
 import { spacesOfBreaker } from '../job/index.ts';
-import type { JobRows, Row } from '../rows/index.ts';
+import { isStorable, type JobRows, type Row } from '../rows/index.ts';
 import { buildCircuit } from '../schedule/build-circuit.ts';
 import { fieldText } from '../schedule/circuit-fields.ts';
 import { circuitParts } from '../schedule/circuit-parts.ts';
@@ -53,8 +53,9 @@ export function previewImport(
   if ('problem' in made) return { circuits: [], problems: [sheetError(made.problem)], edit: null };
 
   const { records, problems } = recordsOf(cells, mapping);
-  problems.push(...columnProblems(mapping), ...mixedUnits(records, mapping), ...longCells(cells));
   const kept = records.filter((record) => !options.skipRows.includes(record.row));
+  const unreadable = cellProblems(cells).filter((problem) => !options.skipRows.includes(problem.row));
+  problems.push(...columnProblems(mapping), ...mixedUnits(kept, mapping), ...unreadable);
   const numbered = mapping.columns.some((column) => column.field === 'space');
   const placement = placeRecords(kept, made.panel, numbered, (poles, taken) =>
     openBeside(made.rows, made.panel, poles, taken),
@@ -165,22 +166,19 @@ function columnProblems(mapping: ColumnMapping): ImportProblem[] {
   return problems;
 }
 
-function longCells(cells: Cells): ImportProblem[] {
-  return cells.flatMap((row, r) =>
-    row.flatMap((text, c) =>
-      text.length <= CELL_MAX
-        ? []
-        : [
-            {
-              row: r + 1,
-              column: c + 1,
-              severity: 'error' as const,
-              message: `The cell has ${text.length} characters.`,
-              wouldBeRight: `at most ${CELL_MAX} characters`,
-            },
-          ],
-    ),
-  );
+/** Cells that no row can hold. */
+function cellProblems(cells: Cells): ImportProblem[] {
+  const problems: ImportProblem[] = [];
+  cells.forEach((row, r) => {
+    row.forEach((text, c) => {
+      const error = (message: string, wouldBeRight: string) =>
+        problems.push({ row: r + 1, column: c + 1, severity: 'error', message, wouldBeRight });
+      if (text.length > CELL_MAX)
+        error(`The cell has ${text.length} characters.`, `at most ${CELL_MAX} characters`);
+      if (!isStorable(text)) error('The cell holds a character that is no text.', 'the cell typed again');
+    });
+  });
+  return problems;
 }
 
 function shown(changes: RowChanges, circuitId: string, { record }: PlacedRecord): ImportedCircuit {
