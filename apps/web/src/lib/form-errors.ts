@@ -12,10 +12,26 @@ export function schemaErrors(schema: z.ZodType, value: unknown): FieldErrors {
     : firstOf(parsed.error.issues.map((issue) => [issue.path.join('.'), issue.message]));
 }
 
-/** What the server refused, at the fields it named; anything else belongs to the form. */
-export function serverErrors(error: ApiError): FieldErrors {
+/**
+ * What the server refused, at the fields it named. What it says of no field of the form stands on the form itself,
+ * so that nothing is refused in silence.
+ */
+export function serverErrors(error: ApiError, values: object): FieldErrors {
   if (error.details.length === 0) return { '': error.message };
-  return firstOf(error.details.map((detail) => [detail.path.replace(/^body\./, ''), detail.message]));
+  const pairs = error.details.map((detail): readonly [string, string] => [
+    detail.path.replace(/^body\./, ''),
+    detail.message,
+  ]);
+  const simple = (path: string) => {
+    const value = (values as Record<string, unknown>)[path];
+    return typeof value === 'string' || typeof value === 'boolean';
+  };
+  const elsewhere = pairs.filter(([path]) => !simple(path)).map(([path, message]) => `${path}: ${message}`);
+  const shown = elsewhere.length > 3 ? [...elsewhere.slice(0, 3), '…'] : elsewhere;
+  return {
+    ...firstOf(pairs),
+    ...(elsewhere.length > 0 ? { '': `${error.message} ${shown.join(' ')}` } : {}),
+  };
 }
 
 function firstOf(pairs: readonly (readonly [string, string])[]): FieldErrors {

@@ -57,6 +57,9 @@ test('what the server refuses stands at its field or on the form, and what was t
     new ApiError('invalid', 'Some fields are wrong.', 422, 'r', [
       { path: 'body.code', message: 'This code is taken.' },
     ]),
+    new ApiError('invalid', 'The job was not made.', 422, 'r', [
+      { path: 'rows.source.0.volts', message: 'must be > 0' },
+    ]),
     new ApiError('unreachable', 'The server cannot be reached.'),
   ];
   render(<Example submit={async () => refusals.shift() ?? null} />);
@@ -66,6 +69,10 @@ test('what the server refuses stands at its field or on the form, and what was t
   await user.type(screen.getByLabelText('code'), '2');
   expect(screen.queryByText(/This code is taken/)).toBeNull();
   await user.click(screen.getByRole('button', { name: 'Save' }));
-  expect((await screen.findByRole('alert')).textContent).toContain('cannot be reached');
+  expect((await screen.findByRole('alert')).textContent).toContain(
+    'The job was not made. rows.source.0.volts: must be > 0',
+  );
+  await user.click(screen.getByRole('button', { name: 'Save' }));
+  expect(await screen.findByText(/cannot be reached/)).toBeTruthy();
   expect((screen.getByLabelText('code') as HTMLInputElement).value).toBe('A-12');
 });

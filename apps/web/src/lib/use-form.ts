@@ -61,7 +61,7 @@ export function useForm<V extends object>({ initial, schema, check, submit }: Fo
     setBusy(true);
     const error = await submit(values).finally(() => setBusy(false));
     if (error) {
-      setRefused(serverErrors(error));
+      setRefused(serverErrors(error, values));
       focusFirstError();
     } else setChanged(false);
   }

@@ -10,7 +10,16 @@ export function useSignOut(): () => Promise<void> {
   return useCallback(async () => {
     await call(signOut, {});
     forgetKeptEdits();
+    forgetKeptForms();
     cache.clear();
     window.location.assign('/');
   }, [cache]);
+}
+
+function forgetKeptForms(): void {
+  try {
+    sessionStorage.clear();
+  } catch {
+    // A browser that stores nothing has nothing to forget.
+  }
 }

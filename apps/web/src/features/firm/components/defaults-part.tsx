@@ -2,6 +2,7 @@ import { DEFAULTS } from '@farlug/contract/presets';
 import { useState } from 'react';
 import { useForm } from '../../../lib/use-form.ts';
 import { Button } from '../../../ui/button.tsx';
+import { LeaveGuard } from '../../../ui/leave-guard.tsx';
 import { Message } from '../../../ui/message.tsx';
 import { RowHead, Table, Td, Th } from '../../../ui/table.tsx';
 import { TextInput } from '../../../ui/text-input.tsx';
@@ -23,6 +24,7 @@ export function DefaultsPart({ firm, actions, mayManage }: FirmPartProps) {
   });
   return (
     <form noValidate aria-label="Defaults" onSubmit={form.onSubmit}>
+      <LeaveGuard when={form.changed} />
       <PartHeading
         title="Starting defaults"
         note="What a new circuit starts from where nobody says otherwise, and why. A house rule is shown to your people beside the default; the figures themselves are changed on each job."

@@ -3,6 +3,7 @@ import { useState } from 'react';
 import { useForm } from '../../../lib/use-form.ts';
 import { Field } from '../../../ui/field.tsx';
 import { Form } from '../../../ui/form.tsx';
+import { LeaveGuard } from '../../../ui/leave-guard.tsx';
 import { Message } from '../../../ui/message.tsx';
 import { Segmented } from '../../../ui/segmented.tsx';
 import { TextArea, TextInput } from '../../../ui/text-input.tsx';
@@ -102,6 +103,7 @@ export function WordingPart({ firm, actions, mayManage }: FirmPartProps) {
             ]}
           />
         </Field>
+        <LeaveGuard when={form.changed} />
         {saved && !form.changed && <Message kind="done">Saved. Reports from now on carry it.</Message>}
       </Form>
     </>

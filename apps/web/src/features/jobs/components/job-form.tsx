@@ -1,12 +1,13 @@
 import { WIRE_UNITS, type WireUnit } from '@farlug/contract/rows';
 import { BASES, type Basis, LENGTH_UNITS, type LengthUnit } from '@farlug/solver/job';
-import type { ReactNode } from 'react';
+import { type ReactNode, useEffect } from 'react';
 import type { ApiError } from '../../../lib/api-error.ts';
 import { BASIS_WORDS } from '../../../lib/job-words.ts';
 import { useForm } from '../../../lib/use-form.ts';
 import { Button } from '../../../ui/button.tsx';
 import { Field } from '../../../ui/field.tsx';
 import { FormSection } from '../../../ui/form-section.tsx';
+import { LeaveGuard } from '../../../ui/leave-guard.tsx';
 import { Message } from '../../../ui/message.tsx';
 import { Segmented } from '../../../ui/segmented.tsx';
 import { draftErrors } from '../check-draft.ts';
@@ -27,6 +28,8 @@ interface JobFormProps {
   readOnly?: boolean;
   beside?: ReactNode;
   done?: ReactNode;
+  /** Takes every state of the form, to be kept until it is sent; without it, leaving asks first. */
+  keep?: (draft: JobDraft) => void;
 }
 
 /** Everything that a job stands on: the same form for a new one and for its settings. */
@@ -39,8 +42,12 @@ export function JobForm({
   readOnly,
   beside,
   done,
+  keep,
 }: JobFormProps) {
   const form = useForm({ initial, check: draftErrors, submit });
+  useEffect(() => {
+    if (form.changed) keep?.(form.values);
+  }, [form.changed, form.values, keep]);
   const wrong = Object.keys(form.errors).filter((path) => path !== '').length;
   return (
     <form noValidate aria-label="Job" onSubmit={form.onSubmit}>
@@ -58,6 +65,7 @@ export function JobForm({
         <DraftText form={form} field="authority" label="Authority having jurisdiction" />
         <DraftText form={form} field="permitNumber" label="Permit number" />
       </FormSection>
+      {!keep && <LeaveGuard when={form.changed} />}
       {form.values.sources.map((source, index) => (
         <SourceSection key={source.id ?? source.code} form={form} index={index} systemLocked={systemLocked} />
       ))}

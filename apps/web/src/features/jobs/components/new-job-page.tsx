@@ -1,3 +1,4 @@
+import { useCallback, useState } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { paths } from '../../../app/paths.ts';
 import { usePageTitle } from '../../../lib/use-page-title.ts';
@@ -5,7 +6,8 @@ import { LinkButton } from '../../../ui/button.tsx';
 import { PageHeading } from '../../../ui/page-heading.tsx';
 import { Scroller } from '../../../ui/scroller.tsx';
 import { useJobActions } from '../hooks/use-job-actions.ts';
-import { blankDraft } from '../job-draft.ts';
+import { blankDraft, type JobDraft } from '../job-draft.ts';
+import { keepDraft, keptDraft } from '../kept-draft.ts';
 import { rowsOfDraft } from '../rows-of-draft.ts';
 import { JobForm } from './job-form.tsx';
 import type { Preset } from './limits-section.tsx';
@@ -20,6 +22,8 @@ export function NewJobPage({ firm, units, presets }: NewJobPageProps) {
   usePageTitle('New job');
   const navigate = useNavigate();
   const { create } = useJobActions(firm);
+  const [initial] = useState(() => keptDraft(firm) ?? blankDraft(units));
+  const keep = useCallback((draft: JobDraft) => keepDraft(firm, draft), [firm]);
   return (
     <>
       <PageHeading
@@ -29,7 +33,8 @@ export function NewJobPage({ firm, units, presets }: NewJobPageProps) {
       />
       <Scroller label="New job" className="min-h-0 flex-1 overflow-auto">
         <JobForm
-          initial={blankDraft(units)}
+          initial={initial}
+          keep={keep}
           presets={presets}
           action="Make the job"
           beside={
@@ -40,6 +45,7 @@ export function NewJobPage({ firm, units, presets }: NewJobPageProps) {
           submit={async (draft) => {
             const outcome = await create(rowsOfDraft(draft));
             if (!outcome.ok) return outcome.error;
+            keepDraft(firm, null);
             navigate(paths.schedule(firm, outcome.data.id));
             return null;
           }}
