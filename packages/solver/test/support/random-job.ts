@@ -92,8 +92,9 @@ class Builder {
     const { random, job } = this;
     const source: JobFile['sources'][number] = { id: 'service', bus: 'service', system, volts };
     if (random.chance(0.3)) source.openVolts = volts * random.between(0.98, 1.05);
-    if (random.chance(0.4)) source.impedance = { r: random.between(0, 0.01), x: random.between(0, 0.01) };
-    else if (random.chance(0.4))
+    const behind = random.pick(['ideal', 'ohms', 'ohms', 'fault', 'fault']);
+    if (behind === 'ohms') source.impedance = { r: random.between(0, 0.01), x: random.between(0, 0.01) };
+    if (behind === 'fault')
       source.fault = { amps: random.between(3000, 30000), xOverR: random.between(0, 6) };
     job.sources.push(source);
     job.buses.push({ id: 'service', kind: 'service' });
