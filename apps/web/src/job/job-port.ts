@@ -1,4 +1,4 @@
-import { type Edit, edit as editSchema, type EditConflict } from '@farlug/contract/edit';
+import { type Edit, type EditConflict, edit as editSchema } from '@farlug/contract/edit';
 import { conflictDetail, listEdits, postEdit } from '@farlug/contract/routes';
 import type { ApiError } from '../lib/api-error.ts';
 import { ask, call } from '../lib/call.ts';
@@ -18,7 +18,11 @@ export function jobPort(firm: string, job: string): ReplicaPort {
       const answer = await ask(listEdits, { params, query: { since } });
       return {
         headSeq: answer.headSeq,
-        edits: answer.edits.map(({ seq, editId, label, ops, person }) => ({ seq, edit: { editId, label, ops }, person })),
+        edits: answer.edits.map(({ seq, editId, label, ops, person }) => ({
+          seq,
+          edit: { editId, label, ops },
+          person,
+        })),
       };
     },
     keep(pending) {
@@ -57,11 +61,19 @@ const TRY_AGAIN = new Set(['unreachable', 'unreadable', 'unavailable', 'internal
 function refusal(error: ApiError): Sent {
   if (TRY_AGAIN.has(error.code)) return { kind: 'unreachable', message: error.message };
   if (error.code === 'sign_in_needed')
-    return { kind: 'unreachable', message: 'You were signed out: sign in again in another tab. Nothing is lost.' };
+    return {
+      kind: 'unreachable',
+      message: 'You were signed out: sign in again in another tab. Nothing is lost.',
+    };
   const parsed = conflictDetail.array().safeParse(error.details);
   if (error.code === 'conflict' && parsed.success && parsed.data.length > 0) {
-    const conflicts: EditConflict[] = parsed.data.map(({ path: _path, message: _message, ...conflict }) => conflict);
+    const conflicts: EditConflict[] = parsed.data.map(
+      ({ path: _path, message: _message, ...conflict }) => conflict,
+    );
     return { kind: 'conflict', conflicts };
   }
-  return { kind: 'refused', message: [error.message, ...error.details.map((detail) => detail.message)].join(' ') };
+  return {
+    kind: 'refused',
+    message: [error.message, ...error.details.map((detail) => detail.message)].join(' '),
+  };
 }

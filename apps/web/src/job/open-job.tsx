@@ -91,7 +91,9 @@ function Opened({ firm, job, archived, open, children }: OpenedProps) {
   }, [replica]);
 
   if (!solver) return <Skeleton rows={14} label="Opening the job" />;
-  return <JobContext.Provider value={{ firm, job, archived, replica, solver }}>{children}</JobContext.Provider>;
+  return (
+    <JobContext.Provider value={{ firm, job, archived, replica, solver }}>{children}</JobContext.Provider>
+  );
 }
 
 export function useOpenJob(): OpenedJob {

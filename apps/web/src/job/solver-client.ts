@@ -1,0 +1,89 @@
+import { type JobRows, listsFromRows } from '@farlug/contract/rows';
+import type { Scenario } from '@farlug/solver/job';
+import type { FromWorker, ToWorker } from '../workers/protocol.ts';
+import type { Answer, AnswerTo, Question } from '../workers/questions.ts';
+import type { JobResult } from '../workers/results.ts';
+import type { RowsChange } from './replica.ts';
+
+export interface SolverSnapshot {
+  scenario: Scenario;
+  /** The newest result, kept on the page while the next one is being found. */
+  result: JobResult | null;
+  /** True while the result is older than the rows or of another scenario. */
+  solving: boolean;
+  fault: string | null;
+}
+
+/** The page's side of the solver's worker: follows the rows, drops stale results. */
+export class SolverClient {
+  private readonly worker: Worker;
+  private generation = 0;
+  private nextAsk = 0;
+  private readonly waiting = new Map<number, (answer: Answer) => void>();
+  private readonly listeners = new Set<() => void>();
+  private snapshot: SolverSnapshot = { scenario: 'each-circuit', result: null, solving: true, fault: null };
+
+  constructor(rows: JobRows) {
+    this.worker = new Worker(new URL('../workers/solve-worker.ts', import.meta.url), { type: 'module' });
+    this.worker.addEventListener('message', (event: MessageEvent<FromWorker>) => this.receive(event.data));
+    this.worker.addEventListener('error', (event) => this.update({ fault: event.message, solving: false }));
+    this.open(rows);
+  }
+
+  getSnapshot = (): SolverSnapshot => this.snapshot;
+  subscribe = (listener: () => void): (() => void) => {
+    this.listeners.add(listener);
+    return () => this.listeners.delete(listener);
+  };
+
+  follow(change: RowsChange): void {
+    if (change.kind === 'rows') return this.open(change.rows);
+    this.generation += 1;
+    this.send({ kind: 'apply', generation: this.generation, edit: change.edit });
+    this.update({ solving: true });
+  }
+
+  setScenario(scenario: Scenario): void {
+    if (scenario === this.snapshot.scenario) return;
+    this.send({ kind: 'scenario', scenario });
+    this.update({ scenario, solving: true });
+  }
+
+  /** Asks about the rows as they stand; the answer to a question that the rows outran is still given. */
+  ask<Q extends Question>(question: Q): Promise<AnswerTo<Q>> {
+    const id = this.nextAsk++;
+    this.send({ kind: 'ask', id, question });
+    return new Promise((resolve) => this.waiting.set(id, (answer) => resolve(answer as AnswerTo<Q>)));
+  }
+
+  close(): void {
+    this.worker.terminate();
+  }
+
+  private open(rows: JobRows): void {
+    this.generation += 1;
+    this.send({ kind: 'open', generation: this.generation, rows: listsFromRows(rows) });
+    this.update({ solving: true });
+  }
+
+  private receive(message: FromWorker): void {
+    if (message.kind === 'answer') {
+      this.waiting.get(message.id)?.(message.answer);
+      this.waiting.delete(message.id);
+    } else if (message.kind === 'fault') this.update({ fault: message.message, solving: false });
+    else {
+      const { generation, scenario } = message.result;
+      if (scenario !== this.snapshot.scenario) return;
+      this.update({ result: message.result, solving: generation < this.generation, fault: null });
+    }
+  }
+
+  private send(message: ToWorker): void {
+    this.worker.postMessage(message);
+  }
+
+  private update(change: Partial<SolverSnapshot>): void {
+    this.snapshot = { ...this.snapshot, ...change };
+    for (const listener of this.listeners) listener();
+  }
+}
