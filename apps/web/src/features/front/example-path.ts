@@ -12,40 +12,44 @@ export interface PathPoint {
 }
 
 export const EXAMPLE_JOB = 'Tannery Row workshop';
+export const EXAMPLE_LOAD = 'LP-2-20';
 export const EXAMPLE_PATH: readonly PathPoint[] = [
-  { label: 'Service', kind: 'service', volts: 119.04 },
-  { label: 'MDP', kind: 'panel', volts: 118.74, run: { size: '2 sets 350', length: '85 ft', weight: 6.8 } },
+  { label: 'Service', kind: 'service', volts: 118.67 },
+  { label: 'MDP', kind: 'panel', volts: 118.25, run: { size: '2 sets 350', length: '85 ft', weight: 6.8 } },
   {
     label: 'T1',
     kind: 'transformer',
-    volts: 118.47,
-    voltsBehind: 115.67,
+    volts: 117.92,
+    voltsBehind: 114.85,
     run: { size: '2/0 Cu', length: '60 ft', weight: 2.8 },
-    says: '−2.80 V',
+    says: '−3.08 V',
   },
-  { label: 'DP-L', kind: 'panel', volts: 115.54, run: { size: '3/0 Cu', length: '12 ft', weight: 5 } },
+  { label: 'DP-L', kind: 'panel', volts: 114.7, run: { size: '500 Cu', length: '12 ft', weight: 5 } },
   {
     label: 'LP-2',
     kind: 'panel',
-    volts: 112.39,
-    run: { size: '1/0 Cu, 119 A', length: '152 ft', weight: 3.2 },
-    says: 'feeder −3.55 V',
+    volts: 111.56,
+    run: { size: '1/0 Cu, 132 A', length: '152 ft', weight: 3.2 },
+    says: 'feeder −3.61 V',
   },
   {
     label: 'far lug',
     kind: 'far-lug',
-    volts: 107.97,
+    volts: 107.03,
     run: { size: '10 Cu, 16 A', length: '132 ft', weight: 1.6 },
-    says: 'branch −4.51 V',
+    says: 'branch −4.53 V',
   },
 ];
-export const EXAMPLE_VERDICT = 'over: 108.0 V, 6.71 %';
-/** Behind each point: nominal less what is not counted, less 5 %. */
+/** At the lug itself, and of feeder and branch. */
+export const EXAMPLE_VOLTS = 107.1;
+export const EXAMPLE_PERCENT = 6.79;
+export const EXAMPLE_VERDICT = `over: ${EXAMPLE_VOLTS.toFixed(1)} V, ${EXAMPLE_PERCENT.toFixed(2)} %`;
+/** At each point: what is left of 120 V after what the limit does not count, less 5 %. */
 export const EXAMPLE_LIMIT: readonly { volts: number; voltsBehind?: number }[] = [
-  { volts: 113.04 },
-  { volts: 112.74 },
-  { volts: 112.74, voltsBehind: 109.94 },
-  { volts: 109.94 },
-  { volts: 109.94 },
-  { volts: 109.94 },
+  { volts: 112.67 },
+  { volts: 112.25 },
+  { volts: 112.25, voltsBehind: 109.17 },
+  { volts: 109.17 },
+  { volts: 109.17 },
+  { volts: 109.17 },
 ];

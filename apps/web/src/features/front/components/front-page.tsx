@@ -30,7 +30,7 @@ export function FrontPage({ home, signIn, local, cautions }: FrontPageProps) {
       <FrontHeader />
       <main
         id="main"
-        className="grid flex-1 content-start items-start gap-x-14 gap-y-6 px-4 pt-5 pb-5 desk:px-12 desk:pt-7 wide:grid-cols-[432px_minmax(0,1fr)]"
+        className="grid flex-1 content-start items-start gap-x-14 gap-y-6 px-4 pt-5 pb-4 desk:px-12 desk:pt-7 wide:grid-cols-[432px_minmax(0,1fr)]"
       >
         <div>
           <h1

@@ -44,7 +44,7 @@ const WIDE: Layout = {
 const NARROW: Layout = {
   width: 374,
   height: 430,
-  xs: [59, 125.6, 175.5, 205, 270.3, 340],
+  xs: [66, 127, 175.5, 205, 270.3, 340],
   lineY: 80,
   top: 182.5,
   bottom: 339.1,
@@ -270,7 +270,7 @@ function Volts({ layout: { xs, lineY, top, bottom, width }, narrow }: { layout: 
         />
       ))}
       <polyline points={line(EXAMPLE_LIMIT)} className="fill-none stroke-ink" strokeWidth="1.5" />
-      <Text x={xs[2]! + 10} y={y(109.94) - 7} halo>
+      <Text x={xs[2]! + 10} y={y(EXAMPLE_LIMIT.at(-1)!.volts) - 7} halo>
         {narrow ? 'limit, 5 %' : 'limit, 5 % of feeder and branch'}
       </Text>
       <polyline
@@ -307,8 +307,8 @@ function Volts({ layout: { xs, lineY, top, bottom, width }, narrow }: { layout: 
           );
         })}
       <text
-        x={xs.at(-1)! - 18}
-        y={y(last.volts) - (narrow ? 14 : 2)}
+        x={xs.at(-1)! - (narrow ? 14 : 18)}
+        y={y(last.volts) + (narrow ? 7 : -2)}
         fontSize="15"
         fontWeight={600}
         textAnchor="end"
