@@ -38,10 +38,6 @@ export function treeOf(contents: Record<string, string>): Tree {
   };
 }
 
-export function isCode(file: string): boolean {
-  return /\.(ts|tsx|mjs|css|sh)$/.test(file) || file === '.ci/run';
-}
-
 export function isTest(file: string): boolean {
   return /\.test\.tsx?$/.test(file) || file.startsWith('apps/web/e2e/');
 }

@@ -12,7 +12,7 @@ it.each([
   glued('https://registry.n', 'pmjs.org/zod'),
   glued('// TO', 'DO later'),
   glued('closes iss', 'ue #4'),
-  glued('throw new Error("not im', 'plemented")'),
+  glued('throw new Error("not yet im', 'plemented")'),
 ])('finds %s', (text) => {
   expect(find(`fine\n${text}`)).toEqual([expect.stringMatching(/^README\.md:2: /)]);
 });

@@ -17,7 +17,7 @@ const unwanted: { pattern: RegExp; why: string }[] = [
     why: 'how the work was organised, not what it does',
   },
   {
-    pattern: /(?:placeholder|dummy) [d]ata|[l]orem ipsum|coming [s]oon|not [i]mplemented/i,
+    pattern: /(?:placeholder|dummy) [d]ata|[l]orem ipsum|coming [s]oon|not yet [i]mplemented/i,
     why: 'unfinished work',
   },
   {

@@ -12,7 +12,7 @@ beforeEach(() => {
 afterEach(() => rmSync(directory, { recursive: true, force: true }));
 
 /** A project in which each file imports what stands beside it; files that are only imported are made too. */
-async function failing(imports: Record<string, string[]>): Promise<string[]> {
+async function failing(imports: Record<string, string[]>, kind: '' | 'type ' = ''): Promise<string[]> {
   const files = new Map<string, string>([
     [
       'package.json',
@@ -28,7 +28,7 @@ async function failing(imports: Record<string, string[]>): Promise<string[]> {
   for (const [file, targets] of Object.entries(imports)) {
     files.set(
       file,
-      `${targets.map((target, n) => statement(file, target, n)).join('\n')}\nexport const a = 1;`,
+      `${targets.map((target, n) => statement(file, target, n, kind)).join('\n')}\nexport const a = 1;`,
     );
   }
   for (const folder of ['packages', 'apps', 'scripts']) mkdirSync(path.join(directory, folder));
@@ -40,14 +40,15 @@ async function failing(imports: Record<string, string[]>): Promise<string[]> {
   return checks.filter(({ failed }) => failed > 0).map(({ name }) => name);
 }
 
-function statement(from: string, target: string, n: number): string {
+function statement(from: string, target: string, n: number, kind: string): string {
   const relative = path.relative(path.dirname(from), target);
   const specifier = /^(packages|apps)\//.test(target)
     ? relative.startsWith('.')
       ? relative
       : `./${relative}`
     : target;
-  return `import { a as a${n} } from '${specifier}';\nexport const b${n} = a${n};`;
+  const use = kind === '' ? `export const b${n} = a${n};` : `export type B${n} = typeof a${n};`;
+  return `import ${kind}{ a as a${n} } from '${specifier}';\n${use}`;
 }
 
 const sample = 'packages/solver/src/judge/verdict.ts';
@@ -108,6 +109,11 @@ it('a way around through other files still reaches', async () => {
   expect(await failing({ [main]: [between], [between]: ['mathjs'] })).toEqual([
     'first-page-never-loads-mathjs',
   ]);
+});
+
+it('a type is not loaded, and so does not reach', async () => {
+  const [main, between] = ['apps/web/src/main.tsx', 'packages/solver/src/units/format.ts'];
+  expect(await failing({ [main]: [between], [between]: ['mathjs'] }, 'type ')).toEqual([]);
 });
 
 it('nothing is broken by the arrows as they are meant', async () => {

@@ -1,3 +1,5 @@
+import { readFileSync } from 'node:fs';
+import path from 'node:path';
 import { cruise, type ICruiseResult, type IModule } from 'dependency-cruiser';
 import config, { unreachable } from '../../.dependency-cruiser.mjs';
 import { type Check, root, type Stage, verdict } from './stage.ts';
@@ -26,7 +28,7 @@ export async function checkBoundaries(baseDir: string, folders: readonly string[
   return [
     seen(output),
     ...(config.forbidden ?? []).map((rule) => obeyed(rule, output)),
-    ...unreachable.map((rule) => unreached(rule, output.modules)),
+    ...unreachable.map((rule) => unreached(rule, output.modules, baseDir)),
   ];
 }
 
@@ -47,26 +49,30 @@ function obeyed(rule: { name?: string; comment?: string }, result: ICruiseResult
   return verdict(`${rule.name}`, problems.length > 0 ? [...problems, `(${rule.comment})`] : []);
 }
 
-function unreached(rule: Reach, modules: readonly IModule[]): Check {
+function unreached(rule: Reach, modules: readonly IModule[], baseDir: string): Check {
   const bySource = new Map(modules.map((module) => [module.source, module]));
   const from = new RegExp(rule.from);
   const entries = modules
     .map(({ source }) => source)
     .filter((source) => from.test(source) && !/\.test\.tsx?$/.test(source));
-  const path = findPath(entries, new RegExp(rule.to), bySource);
-  return verdict(rule.name, path ? [path.join(' → '), `(${rule.comment})`] : []);
+  const found = findPath(entries, new RegExp(rule.to), bySource, baseDir);
+  return verdict(rule.name, found ? [found.join(' → '), `(${rule.comment})`] : []);
 }
 
-/** Breadth first over what is loaded at once: neither imports on demand nor types. */
+/**
+ * Breadth first over what is loaded at once: neither imports on demand nor types. The parser does not tell types apart,
+ * so the statement itself is read.
+ */
 function findPath(
   entries: readonly string[],
   to: RegExp,
   modules: Map<string, IModule>,
+  baseDir: string,
 ): string[] | undefined {
   const cameFrom = new Map<string, string | undefined>(entries.map((entry) => [entry, undefined]));
   for (const source of cameFrom.keys()) {
     for (const dependency of modules.get(source)?.dependencies ?? []) {
-      if (dependency.dynamic || dependency.typeOnly || dependency.preCompilationOnly) continue;
+      if (dependency.dynamic || isErased(source, dependency.module, baseDir)) continue;
       if (!cameFrom.has(dependency.resolved)) cameFrom.set(dependency.resolved, source);
       if (to.test(dependency.resolved)) return trail(dependency.resolved, cameFrom);
     }
@@ -74,8 +80,18 @@ function findPath(
   return undefined;
 }
 
+function isErased(source: string, module: string, baseDir: string): boolean {
+  const name = module.replace(/[.*+?^${}()|[\]\\]/g, '\\$&');
+  const statements = new RegExp(
+    `(?:import|export)\\b[^;]*?\\bfrom\\s*['"]${name}['"]|import\\s*['"]${name}['"]`,
+    'g',
+  );
+  const found = readFileSync(path.join(baseDir, source), 'utf8').match(statements) ?? [];
+  return found.length > 0 && found.every((statement) => /^(?:import|export)\s+type\b/.test(statement));
+}
+
 function trail(end: string, cameFrom: Map<string, string | undefined>): string[] {
-  const path: string[] = [];
-  for (let at: string | undefined = end; at !== undefined; at = cameFrom.get(at)) path.unshift(at);
-  return path;
+  const steps: string[] = [];
+  for (let at: string | undefined = end; at !== undefined; at = cameFrom.get(at)) steps.unshift(at);
+  return steps;
 }
