@@ -17,6 +17,14 @@ const settings = {
 
 let taken = 0;
 
+/** @type {Set<() => Promise<void>>} */
+const held = new Set();
+
+/** For whoever is told to stop in the middle of its work. */
+export async function releaseClusters() {
+  await Promise.all([...held].map((release) => release()));
+}
+
 /** @param {'work' | 'test'} kind */
 function environment(kind) {
   const env = { ...process.env, ...settings[kind] };
@@ -100,13 +108,13 @@ export async function useCluster(kind) {
   const lease = path.join(leases, `${process.pid}-${taken++}`);
   if (!startedByHand) writeFileSync(lease, '');
   const url = await pg(kind, 'start');
-  return {
-    url,
-    release: async () => {
-      rmSync(lease, { force: true });
-      if (!startedByHand && holders(leases).living === 0) await pg(kind, 'stop');
-    },
+  const release = async () => {
+    held.delete(release);
+    rmSync(lease, { force: true });
+    if (!startedByHand && holders(leases).living === 0) await pg(kind, 'stop');
   };
+  held.add(release);
+  return { url, release };
 }
 
 /**

@@ -1,9 +1,10 @@
 // The gate of `npm test` and `npm run check`: every stage, its seconds, and one line at the end with the sum.
+import { releaseClusters } from './cluster.mjs';
 import { audits } from './gate/audits.ts';
 import { boundaries } from './gate/boundaries.ts';
 import { format } from './gate/format.ts';
 import { journeys } from './gate/journeys.ts';
-import type { Check, Stage } from './gate/stage.ts';
+import { type Check, type Stage, stopCommands } from './gate/stage.ts';
 import { tests } from './gate/tests.ts';
 import { types } from './gate/types.ts';
 import { unused } from './gate/unused.ts';
@@ -11,6 +12,14 @@ import { unused } from './gate/unused.ts';
 const quick = process.argv.includes('--quick');
 if (process.argv.includes('--deep')) process.env.FARLUG_DEEP = '1';
 process.env.TZ = 'UTC';
+
+for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const) {
+  process.once(signal, () => {
+    process.stdout.write(`\nstopped by ${signal}: nothing is proved\n`);
+    stopCommands();
+    void releaseClusters().finally(() => process.exit(1));
+  });
+}
 
 const totals = { passed: 0, failed: 0 };
 const failures: string[] = [];

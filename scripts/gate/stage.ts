@@ -1,4 +1,4 @@
-import { spawn } from 'node:child_process';
+import { type ChildProcess, spawn } from 'node:child_process';
 import { fileURLToPath } from 'node:url';
 
 export const root = fileURLToPath(new URL('../..', import.meta.url)).replace(/\/$/, '');
@@ -26,6 +26,13 @@ export function verdict(name: string, problems: readonly string[]): Check {
   return { name, passed: failed ? 0 : 1, failed: failed ? 1 : 0, detail: problems.join('\n') };
 }
 
+const running = new Set<ChildProcess>();
+
+/** For whoever is told to stop in the middle of its work. */
+export function stopCommands(): void {
+  for (const child of running) child.kill('SIGTERM');
+}
+
 /** Runs a program to its end and keeps what it said. */
 export function command(
   program: string,
@@ -38,11 +45,15 @@ export function command(
       env: { ...process.env, ...env },
       stdio: ['ignore', 'pipe', 'pipe'],
     });
+    running.add(child);
     const chunks: Buffer[] = [];
     child.stdout.on('data', (chunk: Buffer) => chunks.push(chunk));
     child.stderr.on('data', (chunk: Buffer) => chunks.push(chunk));
     child.once('error', reject);
-    child.once('close', (code) => resolve({ code: code ?? 1, output: Buffer.concat(chunks).toString() }));
+    child.once('close', (code) => {
+      running.delete(child);
+      resolve({ code: code ?? 1, output: Buffer.concat(chunks).toString() });
+    });
   });
 }
 
