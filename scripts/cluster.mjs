@@ -107,14 +107,15 @@ export async function useCluster(kind) {
   const startedByHand = running && holders(leases).ever === 0;
   const lease = path.join(leases, `${process.pid}-${taken++}`);
   if (!startedByHand) writeFileSync(lease, '');
-  const url = await pg(kind, 'start');
+  const starting = pg(kind, 'start');
   const release = async () => {
     held.delete(release);
+    await starting.catch(() => {});
     rmSync(lease, { force: true });
     if (!startedByHand && holders(leases).living === 0) await pg(kind, 'stop');
   };
   held.add(release);
-  return { url, release };
+  return { url: await starting, release };
 }
 
 /**

@@ -13,8 +13,10 @@ const quick = process.argv.includes('--quick');
 if (process.argv.includes('--deep')) process.env.FARLUG_DEEP = '1';
 process.env.TZ = 'UTC';
 
+let stopped = false;
 for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const) {
   process.once(signal, () => {
+    stopped = true;
     process.stdout.write(`\nstopped by ${signal}: nothing is proved\n`);
     stopCommands();
     void releaseClusters().finally(() => process.exit(1));
@@ -29,6 +31,7 @@ const installed = process.env.FARLUG_INSTALL_SECONDS;
 if (installed) process.stdout.write(`installed${' '.repeat(46)}${installed} s\n`);
 
 async function runStage(stage: Stage): Promise<void> {
+  if (stopped) return;
   const start = performance.now();
   const checks = await stage.run().catch((error: unknown): Check[] => [
     {
@@ -38,6 +41,7 @@ async function runStage(stage: Stage): Promise<void> {
       detail: error instanceof Error ? error.stack : String(error),
     },
   ]);
+  if (stopped) return;
   const passed = checks.reduce((sum, check) => sum + check.passed, 0);
   // A stage that checked nothing has proved nothing.
   const failed = passed + checks.reduce((sum, check) => sum + check.failed, 0) === 0 ? 1 : sumFailed(checks);
