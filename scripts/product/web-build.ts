@@ -9,6 +9,7 @@ const sources = [
   'apps/web',
   'packages/contract/src',
   'packages/solver/src',
+  'fixtures/jobs',
   'pnpm-lock.yaml',
   'tsconfig.base.json',
 ];
