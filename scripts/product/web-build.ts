@@ -23,7 +23,9 @@ export async function buildWeb(): Promise<boolean> {
   if (existsSync(stamp) && readFileSync(stamp, 'utf8') === hash) return false;
   rmSync(stamp, { force: true });
   const vite = path.join(web, 'node_modules/vite/bin/vite.js');
-  const { code, output } = await command(process.execPath, [vite, 'build', web, '--logLevel', 'warn']);
+  const { code, output } = await command(process.execPath, [vite, 'build', web, '--logLevel', 'warn'], {
+    NO_COLOR: '1',
+  });
   if (code !== 0) throw new Error(`the pages could not be built:\n${output}`);
   writeFileSync(stamp, hash);
   return true;
