@@ -1,0 +1,168 @@
+import type { JobFile, Solution } from '@farlug/solver/job';
+import { SCENARIOS, SYSTEMS } from '@farlug/solver/job';
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { solveDense } from './dense/solve-dense.ts';
+import { differences } from './support/compare.ts';
+import { randomFrom } from './support/random.ts';
+import { randomJob, type Wanted } from './support/random-job.ts';
+import { SOLVERS } from './support/solvers.ts';
+import { doubled, inOtherUnit, relabelled, reordered } from './support/variants.ts';
+
+/** `FARLUG_DEEP=1` runs thousands of jobs; a plain run a few dozen, from a fixed seed so that it is the same each time. */
+const DEEP = process.env.FARLUG_DEEP === '1';
+const runs = (few: number): fc.Parameters<unknown> =>
+  DEEP ? { numRuns: few * 40 } : { numRuns: few, seed: 20_261_201 };
+const seeds = fc.noShrink(fc.nat());
+const [, solve] = SOLVERS[0]!;
+
+/**
+ * 1e-9 of nominal volts where one solve is exact (both sides err by some 1e-13); where a solution is iterated, the product
+ * stops at a step of 1e-10 (amps of operating temperatures: 1e-8), which leaves several steps' worth of error.
+ */
+const epsilonOf = (job: JobFile): number => {
+  if (job.runs?.some((run) => run.temperature === 'operating')) return 2e-8;
+  const iterated = job.angle === 'local' || job.loads?.some((load) => load.behaviour === 'power');
+  return iterated ? 2e-9 : 1e-9;
+};
+const LINEAR: Wanted = { iterated: false };
+
+const busesOf = (solution: Solution) => new Map(solution.buses.map((bus) => [bus.id, bus]));
+const sameVolts = (a: Solution, b: Solution, epsilon: number, rename = (id: string) => id) => {
+  const others = busesOf(b);
+  for (const bus of a.buses) {
+    const other = others.get(rename(bus.id))!;
+    for (const [c, [re, im]] of Object.entries(bus.phasors ?? {})) {
+      const [re2, im2] = other.phasors![c as 'L1']!;
+      expect(Math.hypot(re - re2, im - im2), `${bus.id} ${c}`).toBeLessThan(epsilon);
+    }
+    expect(bus.phasors === null).toBe(other.phasors === null);
+  }
+};
+const scaleOf = (job: JobFile) => Math.max(...job.sources.map((s) => s.volts));
+
+describe('random jobs against the dense solver', () => {
+  it.each(SYSTEMS)('%s: every number that is printed', (system) => {
+    fc.assert(
+      fc.property(seeds, fc.constantFrom(...SCENARIOS), (seed, scenario) => {
+        const job = randomJob(seed, { system });
+        const ours = outcome(() => solve(job, scenario));
+        const theirs = outcome(() => solveDense(job, scenario));
+        if (ours === null || theirs === null) return;
+        expect(differences(job, ours, theirs, epsilonOf(job))).toEqual([]);
+      }),
+      runs(8),
+    );
+  });
+});
+
+/** A solution, or null where the network cannot be solved. */
+const outcome = (act: () => Solution): Solution | null => {
+  try {
+    return act();
+  } catch (error) {
+    if (error instanceof Error && /no solution|do not settle/.test(error.message)) return null;
+    throw error;
+  }
+};
+
+describe('laws of the solution', () => {
+  it('source power equals loads plus losses, and Kirchhoff’s current law closes', () => {
+    fc.assert(
+      fc.property(seeds, fc.constantFrom('design', 'everything-on', 'light'), (seed, scenario) => {
+        const solution = outcome(() => solve(randomJob(seed), scenario as 'design'));
+        if (!solution) return;
+        const { sourceWatts, loadWatts, lossWatts, kclResidual } = solution.totals;
+        const scale = Math.max(1, Math.abs(sourceWatts), Math.abs(loadWatts));
+        expect(Math.abs(sourceWatts - loadWatts - lossWatts)).toBeLessThan(1e-8 * scale);
+        expect(kclResidual).toBeLessThan(1e-9);
+      }),
+      runs(40),
+    );
+  });
+
+  it('drops of current sinks add up (superposition)', () => {
+    fc.assert(
+      fc.property(seeds, (seed) => {
+        const job = randomJob(seed, { ...LINEAR, diversity: false });
+        const fixed = job.loads!.map((load) => ({ ...load, behaviour: 'current' as const }));
+        const part = (keep: (index: number) => boolean) =>
+          busesOf(
+            solve(
+              {
+                ...job,
+                loads: fixed.map((load, k) => (keep(k) ? load : { ...load, demand: 0, demandVa: null })),
+              },
+              'design',
+            ),
+          );
+        const none = part(() => false);
+        const odd = part((k) => k % 2 === 1);
+        const even = part((k) => k % 2 === 0);
+        for (const [id, bus] of part(() => true))
+          for (const [c, [re, im]] of Object.entries(bus.phasors ?? {})) {
+            const at = (list: typeof none) => list.get(id)!.phasors![c as 'L1']!;
+            expect(Math.abs(re - (at(odd)[0] + at(even)[0] - at(none)[0]))).toBeLessThan(1e-9 * scaleOf(job));
+            expect(Math.abs(im - (at(odd)[1] + at(even)[1] - at(none)[1]))).toBeLessThan(1e-9 * scaleOf(job));
+          }
+      }),
+      runs(20),
+    );
+  });
+
+  it('the order of rows and the names of buses and runs change nothing', () => {
+    fc.assert(
+      fc.property(seeds, (seed) => {
+        const job = randomJob(seed, { ...LINEAR, meshed: false });
+        const random = randomFrom(seed);
+        const plain = solve(job, 'everything-on');
+        const { job: other, bus } = relabelled(random, job);
+        sameVolts(plain, solve(reordered(random, other), 'everything-on'), 1e-9 * scaleOf(job), bus);
+        const full = solve(job, 'each-circuit');
+        const moved = new Map(solve(reordered(random, other), 'each-circuit').loads.map((l) => [l.id, l]));
+        for (const load of full.loads) {
+          const twin = moved.get(load.id)!;
+          expect(twin.verdict).toBe(load.verdict);
+          expect(twin.totalPercent ?? 0).toBeCloseTo(load.totalPercent ?? 0, 7);
+        }
+      }),
+      runs(20),
+    );
+  });
+
+  it('feet and metres give the same volts', () => {
+    fc.assert(
+      fc.property(seeds, fc.constantFrom(...SCENARIOS), (seed, scenario) => {
+        const job = randomJob(seed, LINEAR);
+        sameVolts(solve(job, scenario), solve(inOtherUnit(job), scenario), 1e-9 * scaleOf(job));
+      }),
+      runs(20),
+    );
+  });
+
+  it('a radial job solved as a mesh: every run laid twice at twice the length', () => {
+    fc.assert(
+      fc.property(seeds, (seed) => {
+        const job = randomJob(seed, { ...LINEAR, meshed: false, diversity: false });
+        job.loads = job.loads!.filter((load) => load.along == null);
+        sameVolts(solve(job, 'design'), solve(doubled(job), 'design'), 1e-9 * scaleOf(job));
+      }),
+      runs(20),
+    );
+  });
+
+  it('generation never lowers a drop outside the scenario light', () => {
+    fc.assert(
+      fc.property(seeds, (seed) => {
+        const job = randomJob(seed, LINEAR);
+        const without = {
+          ...job,
+          loads: job.loads!.filter((l) => (l.amps ?? l.va ?? l.watts ?? l.kw ?? 1) >= 0),
+        };
+        for (const scenario of ['design', 'everything-on'] as const)
+          sameVolts(solve(without, scenario), solve(job, scenario), 1e-9 * scaleOf(job));
+      }),
+      runs(15),
+    );
+  });
+});
