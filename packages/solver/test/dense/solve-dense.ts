@@ -38,15 +38,18 @@ interface Figures {
   turn: LoadResult['turn'];
 }
 
-/** Solves a job file densely and prints `farlug-solution/1`, written from the model's definitions alone. */
-export const solveDense = (file: JobFile, scenario: Scenario): Solution => {
+/**
+ * Solves a job file densely and prints `farlug-solution/1`, written from the model's definitions alone.
+ * `withHeadroom: false` leaves the headroom `null`: on iterated jobs it costs most of the time.
+ */
+export const solveDense = (file: JobFile, scenario: Scenario, withHeadroom = true): Solution => {
   const job = jobSchema.parse(file);
   const topology = topologyOf(job);
   const loads = servedLoads(job, topology);
   const scenarios = scenariosOf(job, topology, loads);
   const shown =
     scenario === 'everything-on' || scenario === 'light' ? scenarios.whole(scenario) : scenarios.design;
-  const results = loadResults(job, topology, loads, scenarios, scenario, shown);
+  const results = loadResults(job, topology, loads, scenarios, scenario, shown, withHeadroom);
   return {
     format: 'farlug-solution/1',
     scenario,
@@ -65,6 +68,7 @@ const loadResults = (
   scenarios: Scenarios,
   scenario: Scenario,
   shown: Solved,
+  withHeadroom: boolean,
 ): LoadResult[] => {
   const circuits = circuitsOf(job);
   const statesImpedance = job.sources.some((s) => !s.off && (s.impedance !== null || s.fault !== null));
@@ -96,7 +100,7 @@ const loadResults = (
       scenario === 'each-circuit' ? full : figures(scenario === 'starting' && start ? start : shown);
     const over = full.judgement.verdict === 'over';
     const headroomAmps =
-      full.judgement.excess === null
+      full.judgement.excess === null || !withHeadroom
         ? null
         : over
           ? 0

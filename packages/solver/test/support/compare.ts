@@ -5,7 +5,13 @@ import type { JobFile, Solution } from '@farlug/solver/job';
  * Volts are compared to `epsilon` of the highest volts of the job, percents to the same share of 100, amps, watts and
  * ohms to the same share of the largest in the job; words exactly, reasons by the limit that they name.
  */
-export const differences = (job: JobFile, ours: Solution, theirs: Solution, epsilon: number): string[] => {
+export const differences = (
+  job: JobFile,
+  ours: Solution,
+  theirs: Solution,
+  epsilon: number,
+  withHeadroom = true,
+): string[] => {
   const found: string[] = [];
   const report = (path: string, a: unknown, b: unknown) =>
     found.push(`${path}: ${JSON.stringify(a)} against ${JSON.stringify(b)}`);
@@ -100,7 +106,8 @@ export const differences = (job: JobFile, ours: Solution, theirs: Solution, epsi
     same(`${path} turn`, a.turn, b.turn);
     close(`${path} thevenin re`, a.thevenin?.[0], b.thevenin?.[0], ohms);
     close(`${path} thevenin im`, a.thevenin?.[1], b.thevenin?.[1], ohms);
-    close(`${path} headroomAmps`, a.headroomAmps, b.headroomAmps, headroomScale(b.headroomAmps, amps));
+    if (withHeadroom)
+      close(`${path} headroomAmps`, a.headroomAmps, b.headroomAmps, headroomScale(b.headroomAmps, amps));
   });
   for (const key of ['sourceWatts', 'loadWatts', 'lossWatts'] as const)
     close(`totals.${key}`, ours.totals[key], theirs.totals[key], watts);

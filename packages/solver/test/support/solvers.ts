@@ -3,5 +3,5 @@ import { solveDense } from '../dense/solve-dense.ts';
 
 /** The two implementations of the model: the product's, and the slow one written from its definitions. */
 export const SOLVERS: [name: string, solve: (job: JobFile, scenario: Scenario) => Solution][] = [
-  ['dense', solveDense],
+  ['dense', (job, scenario) => solveDense(job, scenario, false)],
 ];
