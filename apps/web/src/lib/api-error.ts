@@ -45,9 +45,3 @@ export function errorOf(status: number, body: unknown): ApiError {
   const { code, message, requestId, details } = parsed.data.error;
   return new ApiError(code, message, status, requestId, details);
 }
-
-/** Whatever was thrown, as an `ApiError`; programmer errors are not hidden. */
-export function asApiError(error: unknown): ApiError {
-  if (error instanceof ApiError) return error;
-  throw error;
-}

@@ -1,5 +1,3 @@
-import type { ReactNode } from 'react';
-
 /** The cautions, wherever a verdict stands. */
 export function Cautions({
   texts,
@@ -21,8 +19,4 @@ export function Cautions({
       {firmWording && <p className="mt-2 whitespace-pre-line">{firmWording}</p>}
     </section>
   );
-}
-
-export function SmallPrint({ children }: { children: ReactNode }) {
-  return <p className="text-label text-ink-soft">{children}</p>;
 }

@@ -64,19 +64,6 @@ export function RowHead({ className, ...rest }: ComponentProps<'th'>) {
   );
 }
 
-export function Tr({ chosen = false, className, ...rest }: ComponentProps<'tr'> & { chosen?: boolean }) {
-  return (
-    <tr
-      aria-selected={chosen || undefined}
-      className={cx(
-        chosen && 'bg-wash font-bold [&>:first-child]:border-l-3 [&>:first-child]:border-l-copper',
-        className,
-      )}
-      {...rest}
-    />
-  );
-}
-
 interface TdProps extends ComponentProps<'td'> {
   numeric?: boolean;
   /** The word of its column, shown beside it where rows are stacked. */

@@ -1,7 +1,6 @@
 import { useSyncExternalStore } from 'react';
 
 export const DESK = '(min-width: 50rem)';
-export const WIDE = '(min-width: 75rem)';
 
 export function useMedia(query: string): boolean {
   return useSyncExternalStore(

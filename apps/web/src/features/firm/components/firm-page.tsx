@@ -6,7 +6,7 @@ import { ErrorState } from '../../../ui/error-state.tsx';
 import { PageHeading } from '../../../ui/page-heading.tsx';
 import { Scroller } from '../../../ui/scroller.tsx';
 import { Skeleton } from '../../../ui/skeleton.tsx';
-import { TabLinks } from '../../../ui/tabs.tsx';
+import { TabLinks } from '../../../ui/tab-links.tsx';
 import type { EditPreset } from '../firm-part.ts';
 import { useFirm } from '../hooks/use-firm.ts';
 import { useFirmActions } from '../hooks/use-firm-actions.ts';

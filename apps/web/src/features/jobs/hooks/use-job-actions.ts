@@ -3,7 +3,7 @@ import { archiveJob, createJob, deleteJob, duplicateJob } from '@farlug/contract
 import type { JobRowLists } from '@farlug/contract/rows';
 import { useQueryClient } from '@tanstack/react-query';
 import { useMemo } from 'react';
-import { type Answer, call, type Outcome } from '../../../lib/call.ts';
+import { call, type Outcome } from '../../../lib/call.ts';
 import { jobsKey } from './use-jobs.ts';
 
 interface JobActions {
@@ -12,7 +12,6 @@ interface JobActions {
   archive: (job: string, archived: boolean) => Promise<Outcome<typeof archiveJob>>;
   remove: (job: string) => Promise<Outcome<typeof deleteJob>>;
 }
-export type CreatedJob = Answer<typeof createJob>;
 
 /** What can be done to whole jobs; the list is fetched anew after each. */
 export function useJobActions(firm: string): JobActions {
