@@ -1,30 +1,15 @@
 import type { JobFile, Solution } from '@farlug/solver/job';
-import { SCENARIOS, SYSTEMS } from '@farlug/solver/job';
+import { SCENARIOS } from '@farlug/solver/job';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { solveDense } from './dense/solve-dense.ts';
-import { differences } from './support/compare.ts';
+import { epsilonOf, outcomeOf, runs, seeds } from './support/against-dense.ts';
 import { randomFrom } from './support/random.ts';
 import { randomJob, type Wanted } from './support/random-job.ts';
 import { SOLVERS } from './support/solvers.ts';
 import { doubled, inOtherUnit, relabelled, reordered } from './support/variants.ts';
 
-/** `FARLUG_DEEP=1` runs thousands of jobs; a plain run a few dozen, from a fixed seed so that it is the same each time. */
-const DEEP = process.env.FARLUG_DEEP === '1';
-const runs = (few: number): fc.Parameters<unknown> =>
-  DEEP ? { numRuns: few * 40 } : { numRuns: few, seed: 20_261_201 };
-const seeds = fc.noShrink(fc.nat());
 const [, solve] = SOLVERS[0]!;
 
-/**
- * 1e-9 of nominal volts where one solve is exact (both sides err by some 1e-13); where a solution is iterated, the product
- * stops at a step of 1e-10 (amps of operating temperatures: 1e-8), which leaves several steps' worth of error.
- */
-const epsilonOf = (job: JobFile): number => {
-  if (job.runs?.some((run) => run.temperature === 'operating')) return 2e-8;
-  const iterated = job.angle === 'local' || job.loads?.some((load) => load.behaviour === 'power');
-  return iterated ? 2e-9 : 1e-9;
-};
 const LINEAR: Wanted = { iterated: false };
 
 const busesOf = (solution: Solution) => new Map(solution.buses.map((bus) => [bus.id, bus]));
@@ -41,38 +26,12 @@ const sameVolts = (a: Solution, b: Solution, epsilon: number, rename = (id: stri
 };
 const scaleOf = (job: JobFile) => Math.max(...job.sources.map((s) => s.volts));
 
-describe('random jobs against the dense solver', () => {
-  it.each(SYSTEMS)('%s: every number that is printed', (system) => {
-    fc.assert(
-      fc.property(seeds, fc.constantFrom(...SCENARIOS), (seed, scenario) => {
-        const job = randomJob(seed, { system });
-        const withHeadroom = DEEP || epsilonOf(job) === 1e-9;
-        const ours = outcome(() => solve(job, scenario));
-        const theirs = outcome(() => solveDense(job, scenario, withHeadroom));
-        if (ours === null || theirs === null) return;
-        expect(differences(job, ours, theirs, epsilonOf(job), withHeadroom)).toEqual([]);
-      }),
-      runs(8),
-    );
-  });
-});
-
-/** A solution, or null where the network cannot be solved. */
-const outcome = (act: () => Solution): Solution | null => {
-  try {
-    return act();
-  } catch (error) {
-    if (error instanceof Error && /no solution|do not settle/.test(error.message)) return null;
-    throw error;
-  }
-};
-
 describe('laws of the solution', () => {
   it('source power equals loads plus losses, and Kirchhoff’s current law closes', () => {
     fc.assert(
       fc.property(seeds, fc.constantFrom('design', 'everything-on', 'light'), (seed, scenario) => {
         const job = randomJob(seed);
-        const solution = outcome(() => solve(job, scenario as 'design'));
+        const solution = outcomeOf(() => solve(job, scenario as 'design'));
         if (!solution) return;
         const { sourceWatts, loadWatts, lossWatts, kclResidual } = solution.totals;
         // The largest power that flows anywhere: between unequal sources it is more than what is consumed.
