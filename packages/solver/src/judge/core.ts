@@ -1,0 +1,65 @@
+import type { Job } from '../job/index.ts';
+import {
+  buildLoads,
+  buildNetwork,
+  type Circuits,
+  disjointSets,
+  findCircuits,
+  type Layout,
+  layOut,
+  type LoadModel,
+  type Network,
+  pathFinder,
+  type Refusal,
+  type Step,
+} from '../network/index.ts';
+
+/** Everything about a job that no scenario changes. */
+export interface Core {
+  job: Job;
+  network: Network;
+  loads: LoadModel[];
+  circuits: Circuits;
+  layout: Layout;
+  /** Buses with one label are joined by closed runs: they are in the same system. */
+  systemLabel: Int32Array;
+  /** From the source bus of `bus`'s system to it; `null` where it is not reached. */
+  pathTo: (bus: number) => Step[] | null;
+  /** Runs whose resistance follows their current. */
+  operating: number[];
+  /** Some current or admittance depends on the solution: a turn must be solved anew. */
+  iterates: boolean;
+}
+
+export function buildCore(job: Job): Core | Refusal {
+  const network = buildNetwork(job);
+  if ('kind' in network) return network;
+  const loads = buildLoads(network);
+  const impedanceSinks = loads.flatMap((load, i) => (job.loads[i]!.behaviour === 'impedance' ? load.sinks : []));
+  const { buses, feeding } = network;
+  const { find, join } = disjointSets(buses.ids.length);
+  for (const [i, run] of job.runs.entries())
+    if (feeding.runLive[i]) join(buses.index.get(run.from)!, buses.index.get(run.to)!);
+  const find1 = pathFinder(network);
+  const operating = job.runs.flatMap((run, i) =>
+    run.temperature === 'operating' && !run.ohms && run.length > 0 && feeding.runLive[i] ? [i] : [],
+  );
+  const follows = job.loads.some(
+    (load, i) =>
+      loads[i]!.served && (load.behaviour === 'power' || (load.behaviour === 'current' && job.angle === 'local')),
+  );
+  return {
+    job,
+    network,
+    loads,
+    circuits: findCircuits(job, buses, loads),
+    layout: layOut(network, impedanceSinks),
+    systemLabel: Int32Array.from(buses.ids, (_, i) => find(i)),
+    pathTo: (bus) => {
+      const system = buses.system[bus];
+      return system ? find1(buses.index.get(system.origin.sourceBus)!, bus) : null;
+    },
+    operating,
+    iterates: follows || operating.length > 0,
+  };
+}
