@@ -18,7 +18,9 @@ type Part<Name extends string, S extends z.ZodType> =
       ? { [K in Name]?: z.input<S> }
       : { [K in Name]: z.input<S> };
 
-type BodyPart<R extends Route> = R['kind'] extends 'upload' ? { body: FormData } : Part<'body', R['body']>;
+/** A body of `unknown` is an upload's: a form with a file. */
+type BodyPart<R extends Route> =
+  unknown extends z.input<R['body']> ? { body: FormData } : Part<'body', R['body']>;
 export type CallArgs<R extends Route> = Part<'params', R['params']> &
   Part<'query', R['query']> &
   BodyPart<R> & { signal?: AbortSignal };

@@ -23,10 +23,13 @@ export interface ColumnMapping {
 const ROWS_SEARCHED = 60;
 const CELLS_JUDGED = 200;
 
-/** Reads headings wherever they stand, and judges each column by its cells as well. */
-export function recogniseColumns(cells: Cells): ColumnMapping {
-  const width = Math.min(COLUMNS_MAX, Math.max(0, ...cells.map((row) => row.length)));
-  const headingRow = findHeadings(cells, width);
+/**
+ * Reads headings wherever they stand, or in the row that the person named (from 0; null for a sheet without any), and
+ * judges each column by its cells as well.
+ */
+export function recogniseColumns(cells: Cells, named?: number | null): ColumnMapping {
+  const width = cells.reduce((most, row) => Math.max(most, Math.min(COLUMNS_MAX, row.length)), 0);
+  const headingRow = named === undefined ? findHeadings(cells, width) : named;
   const start = headingRow === null ? 0 : headingRow + 1;
   const columns = Array.from({ length: width }, (_, column) => {
     const heading = headingRow === null ? '' : headingText(cells, headingRow, column);
