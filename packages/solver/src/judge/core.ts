@@ -6,8 +6,8 @@ import {
   disjointSets,
   findCircuits,
   type Layout,
-  layOut,
   type LoadModel,
+  layOut,
   type Network,
   pathFinder,
   type Refusal,
@@ -31,11 +31,24 @@ export interface Core {
   iterates: boolean;
 }
 
+const known = new WeakMap<Job, Core | Refusal>();
+
+/** The core of a job, built once for each job object: jobs are never changed after they are made. */
 export function buildCore(job: Job): Core | Refusal {
+  const found = known.get(job);
+  if (found) return found;
+  const core = newCore(job);
+  known.set(job, core);
+  return core;
+}
+
+function newCore(job: Job): Core | Refusal {
   const network = buildNetwork(job);
   if ('kind' in network) return network;
   const loads = buildLoads(network);
-  const impedanceSinks = loads.flatMap((load, i) => (job.loads[i]!.behaviour === 'impedance' ? load.sinks : []));
+  const impedanceSinks = loads.flatMap((load, i) =>
+    job.loads[i]!.behaviour === 'impedance' ? load.sinks : [],
+  );
   const { buses, feeding } = network;
   const { find, join } = disjointSets(buses.ids.length);
   for (const [i, run] of job.runs.entries())
@@ -46,7 +59,8 @@ export function buildCore(job: Job): Core | Refusal {
   );
   const follows = job.loads.some(
     (load, i) =>
-      loads[i]!.served && (load.behaviour === 'power' || (load.behaviour === 'current' && job.angle === 'local')),
+      loads[i]!.served &&
+      (load.behaviour === 'power' || (load.behaviour === 'current' && job.angle === 'local')),
   );
   return {
     job,

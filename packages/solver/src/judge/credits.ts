@@ -4,7 +4,7 @@ import { type Refusal, refusal, SLOT, stamp } from '../network/index.ts';
 import type { Core } from './core.ts';
 import { ampsOf, sinkCurrent } from './sink-current.ts';
 
-/** Fixed current sources that diversity gives back, by unknown, amperes into the node. */
+/** Fixed current sources that diversity gives back, by node, amperes into it. */
 export interface Credits {
   re: Float64Array;
   im: Float64Array;
@@ -26,7 +26,10 @@ export function diversityCredits(core: Core): Credits | null | Refusal {
   for (const index of wanted) {
     const beyond = beyondOf(index);
     if (!beyond)
-      return refusal(`run ${job.runs[index]!.id}`, 'has a demand below 1 and must be the only way to its far side');
+      return refusal(
+        `run ${job.runs[index]!.id}`,
+        'has a demand below 1 and must be the only way to its far side',
+      );
     runs.push({ index, beyond, depth: core.pathTo(buses.index.get(beyond.farBus)!)?.length ?? 0 });
   }
   runs.sort((a, b) => b.depth - a.depth || a.index - b.index);
@@ -37,9 +40,10 @@ export function diversityCredits(core: Core): Credits | null | Refusal {
   const sinksRe = new Float64Array(nodes.count);
   const sinksIm = new Float64Array(nodes.count);
   const current = new Float64Array(2);
-  const creditRe = new Float64Array(n);
-  const creditIm = new Float64Array(n);
+  const creditRe = new Float64Array(nodes.count);
+  const creditIm = new Float64Array(nodes.count);
   const volts = { re: new Float64Array(nodes.count), im: new Float64Array(nodes.count) };
+  const given: { bus: string; node: number; re: number; im: number }[] = [];
   const work = { re: new Float64Array(n), im: new Float64Array(n) };
 
   for (const load of core.loads)
@@ -53,8 +57,8 @@ export function diversityCredits(core: Core): Credits | null | Refusal {
   const solveAgain = () => {
     for (let u = 0; u < n; u++) {
       const node = layout.nodeOf[u]!;
-      work.re[u] = creditRe[u]! - sinksRe[node]!;
-      work.im[u] = creditIm[u]! - sinksIm[node]!;
+      work.re[u] = creditRe[node]! - sinksRe[node]!;
+      work.im[u] = creditIm[node]! - sinksIm[node]!;
     }
     solve(stamped.factor, work.re, work.im);
     for (let u = 0; u < n; u++) {
@@ -70,10 +74,15 @@ export function diversityCredits(core: Core): Credits | null | Refusal {
     const beyondLoads = new Set(beyond.loads);
     for (const c of job.runs[index]!.conductors) {
       const node = nodes.at[far + SLOT[c]]!;
-      const unknown = node < 0 ? -1 : layout.unknownOf[node]!;
-      if (unknown < 0) continue;
-      let re = -creditRe[unknown]!;
-      let im = -creditIm[unknown]!;
+      if (node < 0) continue;
+      let re = 0;
+      let im = 0;
+      // Other credits may sit at this node without lying beyond: runs of no impedance merge it with others.
+      for (const credit of given)
+        if (credit.node === node && beyond.buses.has(credit.bus)) {
+          re -= credit.re;
+          im -= credit.im;
+        }
       for (const e of network.elements) {
         const isBeyond =
           e.kind === 'run'
@@ -101,9 +110,10 @@ export function diversityCredits(core: Core): Credits | null | Refusal {
           im += weight * current[1]!;
         }
       }
-      const given = 1 - job.runs[index]!.demand;
-      creditRe[unknown]! += given * re;
-      creditIm[unknown]! += given * im;
+      const share = 1 - job.runs[index]!.demand;
+      given.push({ bus: beyond.farBus, node, re: share * re, im: share * im });
+      creditRe[node]! += share * re;
+      creditIm[node]! += share * im;
     }
   }
   return { re: creditRe, im: creditIm };

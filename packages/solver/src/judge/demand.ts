@@ -1,5 +1,13 @@
 import type { Scenario } from '../job/index.ts';
+import type { Sink } from '../network/index.ts';
 import type { Core } from './core.ts';
+import type { Drawn } from './sink-current.ts';
+
+/** A current through given paths, in amperes of one path. */
+export interface Extra {
+  sinks: readonly Sink[];
+  drawn: Drawn;
+}
 
 /** What every load draws in one state of the network. */
 export interface Demand {
@@ -9,9 +17,15 @@ export interface Demand {
   starting: number;
   /** Credits of diversity count. */
   credits: boolean;
-  /** A further fixed sink at nominal angle, beside a load: amperes of one path, at its power factor. */
-  extra: { load: number; amps: number } | null;
+  /** A further current at nominal angle beside a load. */
+  extra: Extra | null;
 }
+
+/** `design` with one load starting. */
+export const startingDemand = (core: Core, load: number): Demand => ({
+  ...designDemand(core),
+  starting: load,
+});
 
 export const designDemand = (core: Core): Demand => ({
   amps: Float64Array.from(core.loads, (load) => load.design),
@@ -23,7 +37,11 @@ export const designDemand = (core: Core): Demand => ({
 /** Demand of a scenario as a whole; the turns of `each-circuit` and `starting` are changes of `design`. */
 export function scenarioDemand(core: Core, scenario: Scenario): Demand {
   if (scenario === 'everything-on')
-    return { ...designDemand(core), amps: Float64Array.from(core.loads, (l) => (l.generates ? 0 : l.full)), credits: false };
+    return {
+      ...designDemand(core),
+      amps: Float64Array.from(core.loads, (l) => (l.generates ? 0 : l.full)),
+      credits: false,
+    };
   if (scenario === 'light')
     return { ...designDemand(core), amps: Float64Array.from(core.loads, (l) => l.minimum), credits: false };
   return designDemand(core);

@@ -4,6 +4,9 @@ import { type PairDrop, worstPair } from './drop.ts';
 import { type Begin, type Split, splitDrop } from './split.ts';
 import type { Volts } from './volts.ts';
 
+/** An end takes over from the other only by more than rounding, percent. */
+const SAME_PERCENT = 1e-11;
+
 /** Buses at whose terminals a load is judged: its own, or both ends of the run that it is spread along. */
 export function judgedBuses(core: Core, load: number): number[] {
   const { along, bus } = core.loads[load]!;
@@ -18,13 +21,18 @@ export const judgedPairs = (core: Core, load: number): readonly number[] => {
 };
 
 /** Figures of a load in some state: of the worst of its pairs, and of the worse end of the run it is spread along. */
-export function splitLoad(core: Core, volts: Volts, load: number, begins: readonly Begin[]): Split & { bus: number } {
+export function splitLoad(
+  core: Core,
+  volts: Volts,
+  load: number,
+  begins: readonly Begin[],
+): Split & { bus: number } {
   const pairs = judgedPairs(core, load);
   let worst: PairDrop | null = null;
   let at = -1;
   for (const bus of judgedBuses(core, load)) {
     const drop = worstPair(core, volts, bus, pairs);
-    if (drop && (worst === null || drop.dropPercent > worst.dropPercent)) {
+    if (drop && (worst === null || drop.dropPercent > worst.dropPercent + SAME_PERCENT)) {
       worst = drop;
       at = bus;
     }

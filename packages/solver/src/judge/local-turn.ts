@@ -1,7 +1,8 @@
 import { type PathSolver, pathSolver, solveSmall } from '../linear/index.ts';
 import type { Sink } from '../network/index.ts';
 import type { Core } from './core.ts';
-import { ampsOf, type Drawn, sinkAdmittance, sinkCurrent } from './sink-current.ts';
+import type { Extra } from './demand.ts';
+import { type Drawn, sinkAdmittance, sinkCurrent } from './sink-current.ts';
 import type { State } from './solve-state.ts';
 import type { Volts } from './volts.ts';
 
@@ -66,17 +67,8 @@ export class LocalTurns {
     }
   }
 
-  /** Volts per ampere of a load's own current at nominal angle: the response of the watched nodes, into `out`. */
-  unit(load: number, out: Volts): void {
-    this.solver.clear();
-    const model = this.core.loads[load]!;
-    for (const sink of model.sinks) this.putDrawn(sink, ampsOf(model, 1), 1);
-    this.solver.solve();
-    this.collect(out);
-  }
-
   /** Writes the watched nodes' volts after the changes into `out`, which holds anything elsewhere. */
-  solve(changes: readonly Change[], out: Volts): boolean {
+  solve(changes: readonly Change[], extra: Extra | null, out: Volts): boolean {
     const { volts } = this.state;
     this.solver.clear();
     const admittances: { sink: Sink; re: number; im: number }[] = [];
@@ -92,6 +84,7 @@ export class LocalTurns {
         if (re1 !== re0 || im1 !== im0) admittances.push({ sink, re: re1 - re0, im: im1 - im0 });
         if (after && afterCurrent) this.putDrawn(sink, after, 1);
       }
+    if (extra) for (const sink of extra.sinks) this.putDrawn(sink, extra.drawn, 1);
     this.solver.solve();
     this.collect(out);
     for (const node of this.watched) {

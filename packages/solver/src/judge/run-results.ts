@@ -1,10 +1,10 @@
 import type { Conductor, Pair, Phasor } from '../job/index.ts';
 import { CONDUCTORS, PAIRS } from '../job/index.ts';
+import type { Element } from '../network/index.ts';
 import { LINE_LINE, LINE_NEUTRAL, SLOT } from '../network/index.ts';
 import type { Core } from './core.ts';
 import { dropAt } from './drop.ts';
 import type { Volts } from './volts.ts';
-import type { Element } from '../network/index.ts';
 
 /** What flows in a run, and what it loses. Amps of all sets together, from its `from` to its `to`. */
 export interface RunFlow {

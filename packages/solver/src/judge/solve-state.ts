@@ -38,12 +38,12 @@ export function flowsOf(core: Core, demand: Demand): Flow[] {
       for (const sink of load.sinks) flows.push({ sink, drawn: load.starting!, rule: angle });
     } else if (behaviour !== 'impedance' && demand.amps[i] !== 0) {
       const drawn = ampsOf(load, demand.amps[i]!);
-      for (const sink of load.sinks) flows.push({ sink, drawn, rule: behaviour === 'power' ? 'power' : angle });
-    }
-    if (demand.extra?.load === i)
       for (const sink of load.sinks)
-        flows.push({ sink, drawn: ampsOf(load, demand.extra.amps), rule: 'nominal' });
+        flows.push({ sink, drawn, rule: behaviour === 'power' ? 'power' : angle });
+    }
   }
+  if (demand.extra)
+    for (const sink of demand.extra.sinks) flows.push({ sink, drawn: demand.extra.drawn, rule: 'nominal' });
   return flows;
 }
 
@@ -72,8 +72,8 @@ export function solveState(
   const fixedIm = stamped.baseIm.slice();
   if (demand.credits && credits)
     for (let u = 0; u < n; u++) {
-      fixedRe[u]! += credits.re[u]!;
-      fixedIm[u]! += credits.im[u]!;
+      fixedRe[u]! += credits.re[layout.nodeOf[u]!]!;
+      fixedIm[u]! += credits.im[layout.nodeOf[u]!]!;
     }
   const current = new Float64Array(2);
   const draw = (flow: Flow, volts: Volts, re: Float64Array, im: Float64Array) => {
@@ -122,7 +122,10 @@ export function solveState(
   let moved = round();
   if (following.length === 0) {
     if (!Number.isFinite(moved) && n > 0 && Number.isNaN(volts.re[layout.nodeOf[0]!]!))
-      return refusal('network', 'its voltages are not finite: an impedance or a load is out of all proportion');
+      return refusal(
+        'network',
+        'its voltages are not finite: an impedance or a load is out of all proportion',
+      );
     return { demand, volts, stamped, iterations: 1 };
   }
   let iterations = 1;

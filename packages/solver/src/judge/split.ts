@@ -39,7 +39,13 @@ export function beginsOf(core: Core, buses: readonly number[]): Begin[] {
  * Splits the drop of a pair at a bus. `branch` is what is lost since the bus where the circuit begins: the lowest
  * percent where it begins at several that have the pair.
  */
-export function splitDrop(core: Core, volts: Volts, drop: PairDrop, bus: number, begins: readonly Begin[]): Split {
+export function splitDrop(
+  core: Core,
+  volts: Volts,
+  drop: PairDrop,
+  bus: number,
+  begins: readonly Begin[],
+): Split {
   const label = core.systemLabel[bus]!;
   const at = (other: number): number => {
     if (core.systemLabel[other] === label) {
@@ -51,7 +57,8 @@ export function splitDrop(core: Core, volts: Volts, drop: PairDrop, bus: number,
   let begin: Begin | null = null;
   let lowest = 0;
   for (const candidate of begins) {
-    const there = core.systemLabel[candidate.bus] === label ? dropAt(core, volts, candidate.bus, drop.pair) : null;
+    const there =
+      core.systemLabel[candidate.bus] === label ? dropAt(core, volts, candidate.bus, drop.pair) : null;
     if (there && (begin === null || there.dropPercent < lowest)) {
       begin = candidate;
       lowest = there.dropPercent;

@@ -1,8 +1,8 @@
-import { residual } from '../linear/index.ts';
 import type { Totals } from '../job/index.ts';
+import { residual } from '../linear/index.ts';
 import type { Core } from './core.ts';
 import type { Credits } from './credits.ts';
-import { sinkCurrent, sinkAdmittance, ampsOf } from './sink-current.ts';
+import { ampsOf, sinkAdmittance, sinkCurrent } from './sink-current.ts';
 import { flowsOf, type State } from './solve-state.ts';
 
 /**
@@ -84,14 +84,17 @@ export function totalsOf(core: Core, state: State, credits: Credits | null): Tot
     take(sink, re * xRe - im * xIm, re * xIm + im * xRe, xRe, xIm);
   }
   if (demand.credits && credits)
-    for (let u = 0; u < n; u++) {
-      const node = layout.nodeOf[u]!;
-      loadWatts -= vRe(node) * credits.re[u]! + vIm(node) * credits.im[u]!;
-      rightRe[u]! += credits.re[u]!;
-      rightIm[u]! += credits.im[u]!;
+    for (let node = 0; node < nodes.count; node++) {
+      const re = credits.re[node]!;
+      const im = credits.im[node]!;
+      loadWatts -= vRe(node) * re + vIm(node) * im;
+      intoRe[node]! -= re;
+      intoIm[node]! -= im;
+      const u = layout.unknownOf[node]!;
+      if (u < 0) continue;
+      rightRe[u]! += re;
+      rightIm[u]! += im;
     }
-  loadWatts += alongWatts(core, state);
-  lossWatts -= alongWatts(core, state);
   for (let node = 0; node < nodes.count; node++)
     if (nodes.fixed[node])
       sourceWatts += nodes.referenceRe[node]! * intoRe[node]! + nodes.referenceIm[node]! * intoIm[node]!;
@@ -104,7 +107,8 @@ export function totalsOf(core: Core, state: State, credits: Credits | null): Tot
   }
   residual(stamped.factor, xRe, xIm, rightRe, rightIm, rightRe, rightIm);
   let worst = 0;
-  for (let u = 0; u < n; u++) worst = Math.max(worst, Math.sqrt(rightRe[u]! * rightRe[u]! + rightIm[u]! * rightIm[u]!));
+  for (let u = 0; u < n; u++)
+    worst = Math.max(worst, Math.sqrt(rightRe[u]! * rightRe[u]! + rightIm[u]! * rightIm[u]!));
   return {
     sourceWatts,
     loadWatts,
@@ -112,12 +116,4 @@ export function totalsOf(core: Core, state: State, credits: Credits | null): Tot
     kclResidual: largest === 0 ? 0 : worst / largest,
     iterations: state.iterations,
   };
-}
-
-/**
- * What an evenly spread current changes against a half of it at each end: the loads get r·|I|²/12 less and the
- * conductors lose as much more, summed over conductors (integral of the quadratic voltage profile).
- */
-function alongWatts(_core: Core, _state: State): number {
-  return 0;
 }

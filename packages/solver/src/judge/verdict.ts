@@ -37,7 +37,13 @@ export interface Terminals {
 export function judge(at: Terminals, limits: LoadLimits): Judged[] {
   const { split } = at;
   const list: Judged[] = [];
-  const put = (name: Judged['name'], value: number | null, limit: number | null, unit: Judged['unit'], sign: 1 | -1) => {
+  const put = (
+    name: Judged['name'],
+    value: number | null,
+    limit: number | null,
+    unit: Judged['unit'],
+    sign: 1 | -1,
+  ) => {
     if (value !== null && limit !== null) list.push({ name, value, limit, unit, sign });
   };
   put('feeder', split.feederPercent, limits.feeder, '%', 1);
@@ -85,18 +91,6 @@ const shown = (value: number, limit: number): string => {
 export const reasonsOf = (list: readonly Judged[]): string[] =>
   list
     .filter(trips)
-    .map((j) => `${j.name} ${shown(j.value, j.limit)} ${j.unit} ${j.sign > 0 ? '>' : '<'} ${j.limit} ${j.unit}`);
-
-/** Verdicts as pages show them: `near` is within, but at a stated share of a limit or beyond. */
-export type ShownVerdict = Verdict | 'near';
-export const NEAR_SHARE = 0.9;
-
-/**
- * The verdict to show: `near` where something within is at least `share` of a limit. A lower bound is near where the
- * value uses up that share of the way from nominal down to it, so bounds in volts need `nominal`.
- */
-export function nearVerdict(verdict: Verdict, list: readonly Judged[], share = NEAR_SHARE): ShownVerdict {
-  if (verdict !== 'within') return verdict;
-  const near = list.some((j) => j.sign > 0 && j.unit === '%' && j.name !== 'rating' && j.value >= share * j.limit && j.value > 0);
-  return near ? 'near' : 'within';
-}
+    .map(
+      (j) => `${j.name} ${shown(j.value, j.limit)} ${j.unit} ${j.sign > 0 ? '>' : '<'} ${j.limit} ${j.unit}`,
+    );

@@ -63,10 +63,24 @@ export function analyse(pattern: Pattern, order: Int32Array = leafFirstOrder(pat
   }
   const rows = new Int32Array(columns[n]!);
   for (let k = 0; k < n; k++) rows.set(structure[k]!, columns[k]!);
-  return { pattern, n, order, position, parent, columns, rows, place: edgePlaces(pattern, position, columns, rows) };
+  return {
+    pattern,
+    n,
+    order,
+    position,
+    parent,
+    columns,
+    rows,
+    place: edgePlaces(pattern, position, columns, rows),
+  };
 }
 
-function edgePlaces(pattern: Pattern, position: Int32Array, columns: Int32Array, rows: Int32Array): Int32Array {
+function edgePlaces(
+  pattern: Pattern,
+  position: Int32Array,
+  columns: Int32Array,
+  rows: Int32Array,
+): Int32Array {
   const place = new Int32Array(pattern.edgeCount);
   for (let e = 0; e < pattern.edgeCount; e++) {
     const a = position[pattern.edgeA[e]!]!;

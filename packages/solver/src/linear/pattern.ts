@@ -69,5 +69,14 @@ export function patternOf(n: number, a: ArrayLike<number>, b: ArrayLike<number>)
     neighbour[q] = i;
     edge[q] = e;
   }
-  return { n, edgeCount, edgeA: edgeA.slice(0, edgeCount), edgeB: edgeB.slice(0, edgeCount), slot, start, neighbour, edge };
+  return {
+    n,
+    edgeCount,
+    edgeA: edgeA.slice(0, edgeCount),
+    edgeB: edgeB.slice(0, edgeCount),
+    slot,
+    start,
+    neighbour,
+    edge,
+  };
 }

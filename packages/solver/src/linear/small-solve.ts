@@ -56,7 +56,14 @@ function swapRows(m: Float64Array, r: number, s: number, width: number): void {
   }
 }
 
-function subtractRow(m: Float64Array, r: number, from: number, width: number, fRe: number, fIm: number): void {
+function subtractRow(
+  m: Float64Array,
+  r: number,
+  from: number,
+  width: number,
+  fRe: number,
+  fIm: number,
+): void {
   for (let c = 0; c < width; c++) {
     const at = 2 * (r * width + c);
     const by = 2 * (from * width + c);

@@ -1,5 +1,5 @@
-import { busSystems, type Origin } from '../job/systems.ts';
 import type { Job } from '../job/index.ts';
+import { busSystems, type Origin } from '../job/systems.ts';
 import { busIds } from './bus-list.ts';
 import { type PairEmf, pairTable } from './pair-table.ts';
 import { type Refusal, refusal } from './refusal.ts';

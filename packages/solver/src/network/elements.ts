@@ -52,7 +52,12 @@ export function buildElements(
       terminal === STAR ? star : nodes.at[bus(t.from) + SLOT[terminal]]!;
     const secondary = (c: Conductor) => nodes.at[bus(t.to) + SLOT[c]]!;
     for (const w of windings[i]!) {
-      const at = [primary(w.primary[0]), primary(w.primary[1]), secondary(w.secondary[0]), secondary(w.secondary[1])];
+      const at = [
+        primary(w.primary[0]),
+        primary(w.primary[1]),
+        secondary(w.secondary[0]),
+        secondary(w.secondary[1]),
+      ];
       const turns = 1 / w.ratio;
       elements.push(element('winding', i, -1, at, [turns, -turns, -1, 1], w.ohms[0], w.ohms[1]));
     }

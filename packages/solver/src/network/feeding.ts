@@ -44,7 +44,8 @@ export function followFeeding(job: Job, buses: Buses, ohms: JobOhms, windings: W
         feed(4 * at(job.runs[r]!.to) + (slot & 3));
       }
   };
-  for (const source of job.sources) if (!source.off) feedBus(at(source.bus), SYSTEM_CONDUCTORS[source.system]);
+  for (const source of job.sources)
+    if (!source.off) feedBus(at(source.bus), SYSTEM_CONDUCTORS[source.system]);
   drain();
 
   const transformerLive = new Uint8Array(job.transformers.length);

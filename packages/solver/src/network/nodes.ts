@@ -67,20 +67,17 @@ export function buildNodes(job: Job, buses: Buses, ohms: JobOhms, feeding: Feedi
 const SAME = 1e-9;
 
 /** Ideal sources and bonded neutrals. Refused: ideal sources of different EMF joined by zero ohms. */
-function fixVoltages(
-  job: Job,
-  buses: Buses,
-  ohms: JobOhms,
-  feeding: Feeding,
-  nodes: Nodes,
-): Refusal | null {
+function fixVoltages(job: Job, buses: Buses, ohms: JobOhms, feeding: Feeding, nodes: Nodes): Refusal | null {
   const fixedBy = new Map<number, string>();
   const fix = (node: number, re: number, im: number, by: string): Refusal | null => {
     const other = fixedBy.get(node);
     if (other !== undefined) {
       const apart = Math.abs(re - nodes.referenceRe[node]!) + Math.abs(im - nodes.referenceIm[node]!);
       if (apart <= SAME * (Math.abs(re) + Math.abs(im))) return null;
-      return refusal(by, `is joined by zero ohms to ${other}, whose voltage differs: give one of them an impedance`);
+      return refusal(
+        by,
+        `is joined by zero ohms to ${other}, whose voltage differs: give one of them an impedance`,
+      );
     }
     fixedBy.set(node, by);
     nodes.fixed[node] = 1;

@@ -1,5 +1,5 @@
-import { type Emfs, magnitude, pairConductors } from '../job/systems.ts';
 import { type Conductor, PAIRS, type Pair, type Phasor } from '../job/index.ts';
+import { type Emfs, magnitude, pairConductors } from '../job/systems.ts';
 
 /** Position of a conductor in a bus's four slots. */
 export const SLOT: Record<Conductor, number> = { L1: 0, L2: 1, L3: 2, N: 3 };

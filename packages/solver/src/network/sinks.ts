@@ -74,7 +74,9 @@ export function buildLoads(network: Network): LoadModel[] {
     const served =
       live &&
       ends.every((bus) =>
-        paths.every(([s, t], k) => nodes.at[4 * bus + s]! >= 0 && nodes.at[4 * bus + t]! >= 0 && pairs[k] !== null),
+        paths.every(
+          ([s, t], k) => nodes.at[4 * bus + s]! >= 0 && nodes.at[4 * bus + t]! >= 0 && pairs[k] !== null,
+        ),
       );
     if (!served) return absent(along, run ? -1 : ends[0]!);
     const sinks = ends.flatMap((bus) =>

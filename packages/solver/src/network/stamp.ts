@@ -1,4 +1,11 @@
-import { analyse, type BranchValues, type Factor, factor, patternOf, type Symbolic } from '../linear/index.ts';
+import {
+  analyse,
+  type BranchValues,
+  type Factor,
+  factor,
+  patternOf,
+  type Symbolic,
+} from '../linear/index.ts';
 import type { Element } from './element.ts';
 import type { Network } from './network.ts';
 import { type Refusal, refusal } from './refusal.ts';
@@ -73,7 +80,14 @@ class Stamper {
   }
 
   /** y·u·uᵀ on `nodes`, and minus the current that the references drive through it. */
-  add(nodes: readonly number[], u: readonly number[], yRe: number, yIm: number, emfRe: number, emfIm: number): void {
+  add(
+    nodes: readonly number[],
+    u: readonly number[],
+    yRe: number,
+    yIm: number,
+    emfRe: number,
+    emfIm: number,
+  ): void {
     const { unknownOf, network, symbolic } = this.layout;
     const { referenceRe, referenceIm } = network.nodes;
     const { branchRe, branchIm, shuntRe, shuntIm } = this.values;
@@ -135,7 +149,10 @@ export function stamp(
   if (!outcome.ok) {
     const { nodes, buses } = layout.network;
     const bus = buses.ids[nodes.busOf[layout.nodeOf[outcome.unknown]!]!]!;
-    return refusal(`bus ${bus}`, 'its voltage is not determined: nothing ties one of its conductors to a source');
+    return refusal(
+      `bus ${bus}`,
+      'its voltage is not determined: nothing ties one of its conductors to a source',
+    );
   }
   return { layout, factor: outcome.factor, elements, baseRe: stamper.baseRe, baseIm: stamper.baseIm };
 }

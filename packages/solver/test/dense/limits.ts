@@ -62,10 +62,10 @@ export const judge = (
     ['total', total, totalLimit],
     ['starting', starting, limits.starting],
     ['rise', -total, limits.rise],
-    ['lowestVolts', lowest === null ? null : -reading.volts, lowest === null ? null : -lowest],
-    ['highestVolts', reading.volts, highest],
-    ['rating low', low === null ? null : -reading.volts, low === null ? null : -low],
-    ['rating high', reading.volts, high],
+    ['lowest volts', lowest === null ? null : -reading.volts, lowest === null ? null : -lowest],
+    ['highest volts', reading.volts, highest],
+    ['rating', low === null ? null : -reading.volts, low === null ? null : -low],
+    ['rating', reading.volts, high],
   ];
   const applied = checks.filter(([, value, limit]) => value !== null && limit !== null);
   const broken = applied.filter(([, value, limit]) => exceeds(value!, limit!)).map(([name]) => name);

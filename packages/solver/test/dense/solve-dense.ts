@@ -26,6 +26,7 @@ import {
   type Reading,
   readLoad,
   readPair,
+  SAME_PERCENT,
   type Split,
   splitOf,
 } from './split.ts';
@@ -93,7 +94,9 @@ const loadResults = (
         const sinks = extra(base);
         return sinks.length === 0 ? base : figures(turn.solved.again(sinks), turn.label);
       });
-      return list.reduce((worst, f) => (f.reading.dropPercent > worst.reading.dropPercent ? f : worst));
+      return list.reduce((worst, f) =>
+        f.reading.dropPercent > worst.reading.dropPercent + SAME_PERCENT ? f : worst,
+      );
     };
     const full = worstTurn(() => []);
     const own =

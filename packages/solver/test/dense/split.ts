@@ -25,11 +25,14 @@ export const readPair = (topology: Topology, solved: Solved, bus: string, ends: 
   return { ends, bus, volts, dropVolts, dropPercent: (100 * dropVolts) / nominalVolts, nominalVolts };
 };
 
+/** Of two ends or turns whose percents differ by rounding alone, the first counts. */
+export const SAME_PERCENT = 1e-11;
+
 /** The reading that supplies a load's figures: of its sides and places the one with the largest percent. */
 export const readLoad = (topology: Topology, solved: Solved, load: Load, places: string[]): Reading =>
   places
     .flatMap((bus) => sidesOf(load).map((ends) => readPair(topology, solved, bus, ends)))
-    .reduce((worst, reading) => (reading.dropPercent > worst.dropPercent ? reading : worst));
+    .reduce((worst, reading) => (reading.dropPercent > worst.dropPercent + SAME_PERCENT ? reading : worst));
 
 /** The pairs of a bus that are live, line-neutral first. */
 export const livePairs = (topology: Topology, bus: string): Ends[] =>

@@ -41,7 +41,7 @@ export const differences = (
     ...(job.transformers ?? []).map((t) => t.secondaryVolts),
   );
   const amps = Math.max(1, ...theirs.runs.flatMap((run) => Object.values(run.amps ?? {})));
-  const watts = Math.max(1, Math.abs(theirs.totals.sourceWatts), Math.abs(theirs.totals.loadWatts));
+  const watts = Math.max(volts, Math.abs(theirs.totals.sourceWatts), Math.abs(theirs.totals.loadWatts));
   const ohms = Math.max(
     1e-3,
     ...theirs.loads.flatMap((load) => (load.thevenin ? [Math.hypot(...load.thevenin)] : [])),
