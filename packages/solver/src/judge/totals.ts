@@ -5,6 +5,9 @@ import type { Credits } from './credits.ts';
 import { ampsOf, sinkAdmittance, sinkCurrent } from './sink-current.ts';
 import { flowsOf, type State } from './solve-state.ts';
 
+/** Below this nothing flows but rounding, amperes. */
+const NO_CURRENT_AMPS = 1e-12;
+
 /**
  * Power of the whole network in watts: what the sources' EMFs deliver, what the loads take (less what diversity
  * gives back), what runs, transformers and source impedances lose; and the largest current that Kirchhoff's law is
@@ -113,7 +116,7 @@ export function totalsOf(core: Core, state: State, credits: Credits | null): Tot
     sourceWatts,
     loadWatts,
     lossWatts,
-    kclResidual: largest === 0 ? 0 : worst / largest,
+    kclResidual: worst / Math.max(largest, NO_CURRENT_AMPS),
     iterations: state.iterations,
   };
 }
