@@ -1,4 +1,4 @@
-import type { Conductor, Pair, Phasor } from '../job/index.ts';
+import type { Conductor, Phasor } from '../job/index.ts';
 import { CONDUCTORS, PAIRS } from '../job/index.ts';
 import type { Element } from '../network/index.ts';
 import { LINE_LINE, LINE_NEUTRAL, SLOT } from '../network/index.ts';
@@ -9,8 +9,6 @@ import type { Volts } from './volts.ts';
 /** What flows in a run, and what it loses. Amps of all sets together, from its `from` to its `to`. */
 export interface RunFlow {
   amps: Partial<Record<Conductor, number>>;
-  currents: Partial<Record<Conductor, Phasor>>;
-  pair: Pair | null;
   dropVolts: number | null;
   dropPercent: number | null;
   lossWatts: number;
@@ -32,19 +30,15 @@ export function runFlow(core: Core, volts: Volts, run: number, elements: readonl
   const { buses, nodes } = core.network;
   const { from, to, conductors } = core.job.runs[run]!;
   const amps: RunFlow['amps'] = {};
-  const currents: RunFlow['currents'] = {};
   let lossWatts = 0;
   for (const e of elements) {
     const [a, b] = e.nodes as [number, number];
     const dRe = nodes.referenceRe[a]! - nodes.referenceRe[b]! + (volts.re[a]! - volts.re[b]!);
     const dIm = nodes.referenceIm[a]! - nodes.referenceIm[b]! + (volts.im[a]! - volts.im[b]!);
     const square = (dRe * dRe + dIm * dIm) / (e.zRe * e.zRe + e.zIm * e.zIm);
-    const conductor = CONDUCTORS[e.conductor]!;
-    amps[conductor] = Math.sqrt(square);
-    currents[conductor] = [e.yRe * dRe - e.yIm * dIm, e.yRe * dIm + e.yIm * dRe];
+    amps[CONDUCTORS[e.conductor]!] = Math.sqrt(square);
     lossWatts += square * e.zRe;
   }
-  let pair: number | null = null;
   let dropVolts: number | null = null;
   let dropPercent: number | null = null;
   const near = buses.index.get(from)!;
@@ -59,11 +53,10 @@ export function runFlow(core: Core, volts: Volts, run: number, elements: readonl
     const lost = other.dropVolts - one.dropVolts + openApart(core, near, far, p);
     const percent = (100 * lost) / emf.nominal;
     if (dropPercent !== null && Math.abs(percent) <= Math.abs(dropPercent)) continue;
-    pair = p;
     dropVolts = lost;
     dropPercent = percent;
   }
-  return { amps, currents, pair: pair === null ? null : PAIRS[pair]!, dropVolts, dropPercent, lossWatts };
+  return { amps, dropVolts, dropPercent, lossWatts };
 }
 
 /** |V_from| − |V_to| is the difference of the drops, but for a run between sources of different open volts. */

@@ -9,6 +9,7 @@ import { designDemand, scenarioDemand } from './demand.ts';
 import { type Judge, judgeOf, type LoadFigures } from './load-figures.ts';
 import { solveDemand, solveFrom } from './operating.ts';
 import { runElements, runFlow } from './run-results.ts';
+import { runsInTurns } from './run-turns.ts';
 import type { State } from './solve-state.ts';
 import { totalsOf } from './totals.ts';
 import { type TurnFigures, turnFigures } from './turn-figures.ts';
@@ -20,6 +21,8 @@ export interface Prepared {
   kind: 'prepared';
   job: Job;
   solve: (scenario: Scenario) => SolveOutcome;
+  /** Runs as pages show them: in `each-circuit` a branch run is shown in the turn of its circuit that drops it most. */
+  shownRuns: (solution: Solution) => RunResult[];
 }
 
 /**
@@ -34,12 +37,15 @@ export function prepareJob(job: Job): Prepared | Refusal {
   const design = solveDemand(core, designDemand(core), credits);
   if ('kind' in design) return design;
   const judge = judgeOf(core);
-  const turns = turnFigures(core, design, judge, turnSolver(core, design, credits));
+  const solver = turnSolver(core, design, credits);
+  const turns = turnFigures(core, design, judge, solver);
   if ('kind' in turns) return turns;
   return {
     kind: 'prepared',
     job,
     solve: (scenario) => solveScenario(core, credits, design, judge, turns, scenario),
+    shownRuns: (solution) =>
+      solution.scenario === 'each-circuit' ? runsInTurns(core, solver, solution.runs) : solution.runs,
   };
 }
 

@@ -1,4 +1,4 @@
-import type { Refusal, Sink } from '../network/index.ts';
+import type { Element, Refusal, Sink } from '../network/index.ts';
 import type { Core } from './core.ts';
 import type { Credits } from './credits.ts';
 import { type Demand, type Extra, startingDemand, type Turn, turnAmps, turnDemand } from './demand.ts';
@@ -11,6 +11,8 @@ import { type Volts, zeroVolts } from './volts.ts';
 /** Volts of one turn, and of the same turn with more current; good at the circuit's nodes until the next circuit. */
 export interface SolvedTurn {
   volts: Volts;
+  /** The admittances that it was solved on: at operating temperatures they are its own. */
+  elements: readonly Element[];
   /** The turn with `amps` of one path more through the given paths, at the load's power factor; `null` unserved. */
   with: (load: number, sinks: readonly Sink[], amps: number) => Volts | null;
 }
@@ -34,25 +36,26 @@ const extraOf = (core: Core, load: number, sinks: readonly Sink[], amps: number)
 });
 
 function fullTurns(core: Core, design: State, credits: Credits | null): TurnSolver {
-  const solved = (demand: Demand): Volts | Refusal => {
-    const state = solveFrom(core, design, demand, credits);
-    return 'kind' in state ? state : state.volts;
-  };
+  const solved = (demand: Demand) => solveFrom(core, design, demand, credits);
   return {
     open: () => {},
     turn: (circuit, turn) => {
       const demand = turnDemand(core, circuit, turn);
-      const volts = solved(demand);
-      if ('kind' in volts) return volts;
+      const state = solved(demand);
+      if ('kind' in state) return state;
       return {
-        volts,
+        volts: state.volts,
+        elements: state.stamped.elements,
         with: (load, sinks, amps) => {
           const more = solved({ ...demand, extra: extraOf(core, load, sinks, amps) });
-          return 'kind' in more ? null : more;
+          return 'kind' in more ? null : more.volts;
         },
       };
     },
-    starting: (load) => solved(startingDemand(core, load)),
+    starting: (load) => {
+      const state = solved(startingDemand(core, load));
+      return 'kind' in state ? state : state.volts;
+    },
   };
 }
 
@@ -96,6 +99,7 @@ function linearTurns(core: Core, design: State, full: TurnSolver): TurnSolver {
       let unitOf: readonly Sink[] | null = null;
       return {
         volts,
+        elements: design.stamped.elements,
         with: (load, sinks, amps) => {
           if (unitOf !== sinks) {
             if (!solve(changes, extraOf(core, load, sinks, 1), unit)) return null;
