@@ -34,7 +34,7 @@ function numberError(text: string, rule: NumberRule): string | null {
 
 const percent: NumberRule = { read: readPercent, right: 'Enter a percent from 0 to 100, as 3.' };
 const share: NumberRule = { read: readShare, right: 'Enter a percent from 0 to 200, as 90.' };
-const volts: NumberRule = { read: readVolts, right: 'Enter volts above 0, as 480.' };
+const volts: NumberRule = { read: readVolts, right: 'Enter volts above 0 and at most 1,000,000, as 480.' };
 
 const TEXT_FIELDS = [
   'name',

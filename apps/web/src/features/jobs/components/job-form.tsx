@@ -12,8 +12,9 @@ import { Message } from '../../../ui/message.tsx';
 import { Segmented } from '../../../ui/segmented.tsx';
 import { draftErrors } from '../check-draft.ts';
 import type { JobDraft } from '../job-draft.ts';
+import type { Preset } from '../limits-of-preset.ts';
 import { DraftText } from './draft-fields.tsx';
-import { LimitsSection, type Preset } from './limits-section.tsx';
+import { LimitsSection } from './limits-section.tsx';
 import { SourceSection } from './source-section.tsx';
 
 const LENGTH_WORDS: Record<LengthUnit, string> = { ft: 'Feet', m: 'Metres' };

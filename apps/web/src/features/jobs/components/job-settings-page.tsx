@@ -7,9 +7,9 @@ import { Message } from '../../../ui/message.tsx';
 import { PageHeading } from '../../../ui/page-heading.tsx';
 import { Scroller } from '../../../ui/scroller.tsx';
 import { draftFromRows } from '../job-draft.ts';
+import type { Preset } from '../limits-of-preset.ts';
 import { editOfDraft } from '../rows-of-draft.ts';
 import { JobForm } from './job-form.tsx';
-import type { Preset } from './limits-section.tsx';
 
 interface JobSettingsPageProps {
   rows: JobRows;

@@ -1,20 +1,14 @@
-import type { LimitPreset } from '@farlug/contract/presets';
-import type { presetBody } from '@farlug/contract/routes';
 import { FORCES, type Force } from '@farlug/solver/job';
-import type { z } from 'zod';
 import { FORCE_WORDS, LIMIT_WORDS } from '../../../lib/job-words.ts';
 import { Checkbox } from '../../../ui/checkbox.tsx';
 import { Field } from '../../../ui/field.tsx';
 import { FormSection } from '../../../ui/form-section.tsx';
 import { Select } from '../../../ui/select.tsx';
-import { limitDrafts, PLAIN_LIMITS } from '../job-draft.ts';
+import { type LimitsDraft, PLAIN_LIMITS } from '../job-draft.ts';
+import { isOwn, limitsOfPreset, type Preset } from '../limits-of-preset.ts';
 import { ClassLimits } from './class-limits.tsx';
 import { type DraftForm, DraftText, type LimitsForm, NumberField } from './draft-fields.tsx';
 import { VoltsLimits } from './volts-limits.tsx';
-
-/** A firm’s own, or one of a code or standard that says how far it was seen. */
-export type Preset = z.output<typeof presetBody> &
-  Partial<Pick<LimitPreset, 'edition' | 'standing' | 'verified'>>;
 
 const OWN = 'Your firm';
 const CODES = 'Codes and standards';
@@ -38,14 +32,8 @@ export function LimitsSection({ form, presets }: { form: DraftForm; presets: rea
     form.set('preset', name);
     const preset = presets.find((entry) => entry.name === name);
     if (!preset) return;
-    const { limits, byClass, atVolts } = limitDrafts(preset.limits);
-    form.set('limits', limits);
-    form.set('byClass', byClass);
-    form.set('atVolts', atVolts);
-    form.set('limitBasis', preset.clause);
-    form.set('limitForce', preset.force);
-    for (const [field] of INCLUDES) form.set(field, preset[field]);
-    form.set('longRun', preset.longRun);
+    const taken = limitsOfPreset(preset);
+    for (const field of Object.keys(taken) as (keyof LimitsDraft)[]) form.set(field, taken[field]);
   };
   return (
     <>
@@ -62,7 +50,7 @@ export function LimitsSection({ form, presets }: { form: DraftForm; presets: rea
               ...presets.map((preset) => ({
                 value: preset.name,
                 label: preset.name,
-                group: preset.edition === undefined ? OWN : CODES,
+                group: isOwn(preset) ? OWN : CODES,
               })),
             ]}
           />

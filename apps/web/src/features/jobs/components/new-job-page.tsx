@@ -8,9 +8,9 @@ import { Scroller } from '../../../ui/scroller.tsx';
 import { useJobActions } from '../hooks/use-job-actions.ts';
 import { blankDraft, type JobDraft } from '../job-draft.ts';
 import { keepDraft, keptDraft } from '../kept-draft.ts';
+import { limitsOfPreset, type Preset, startingPreset } from '../limits-of-preset.ts';
 import { rowsOfDraft } from '../rows-of-draft.ts';
 import { JobForm } from './job-form.tsx';
-import type { Preset } from './limits-section.tsx';
 
 interface NewJobPageProps {
   firm: string;
@@ -18,11 +18,17 @@ interface NewJobPageProps {
   presets: readonly Preset[];
 }
 
+function startingDraft(units: NewJobPageProps['units'], presets: readonly Preset[]): JobDraft {
+  const draft = blankDraft(units);
+  const preset = startingPreset(presets, units.wireUnit);
+  return preset ? { ...draft, preset: preset.name, ...limitsOfPreset(preset) } : draft;
+}
+
 export function NewJobPage({ firm, units, presets }: NewJobPageProps) {
   usePageTitle('New job');
   const navigate = useNavigate();
   const { create } = useJobActions(firm);
-  const [initial] = useState(() => keptDraft(firm) ?? blankDraft(units));
+  const [initial] = useState(() => keptDraft(firm) ?? startingDraft(units, presets));
   const keep = useCallback((draft: JobDraft) => keepDraft(firm, draft), [firm]);
   return (
     <>

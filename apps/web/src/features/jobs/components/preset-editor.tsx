@@ -5,7 +5,8 @@ import { useForm } from '../../../lib/use-form.ts';
 import { Dialog } from '../../../ui/dialog.tsx';
 import { Form } from '../../../ui/form.tsx';
 import { presetErrors } from '../check-draft.ts';
-import { limitDrafts, noLimits, type PresetDraft } from '../job-draft.ts';
+import { noLimits, type PresetDraft } from '../job-draft.ts';
+import { limitsOfPreset } from '../limits-of-preset.ts';
 import { limitFields } from '../rows-of-draft.ts';
 import { DraftText } from './draft-fields.tsx';
 import { LimitFigures } from './limits-section.tsx';
@@ -25,16 +26,7 @@ const BLANK: PresetDraft = {
   atVolts: [],
 };
 
-const draftOf = ({ clause, force, limits, name, ...rest }: PresetBody): PresetDraft => ({
-  name,
-  limitBasis: clause,
-  limitForce: force,
-  includeService: rest.includeService,
-  includeTransformer: rest.includeTransformer,
-  includeSource: rest.includeSource,
-  longRun: rest.longRun,
-  ...limitDrafts(limits),
-});
+const draftOf = (preset: PresetBody): PresetDraft => ({ name: preset.name, ...limitsOfPreset(preset) });
 
 const bodyOf = (draft: PresetDraft): PresetBody => ({
   name: draft.name.trim(),
