@@ -1,6 +1,6 @@
 import type { Edit } from '@farlug/contract/edit';
 import type { JobRows } from '@farlug/contract/rows';
-import { useMemo } from 'react';
+import { useMemo, useState } from 'react';
 import { ApiError } from '../../../lib/api-error.ts';
 import { usePageTitle } from '../../../lib/use-page-title.ts';
 import { Message } from '../../../ui/message.tsx';
@@ -21,6 +21,7 @@ interface JobSettingsPageProps {
 /** The same form as for a new job; saving is one edit, which can be undone in the schedule. */
 export function JobSettingsPage({ rows, presets, archived, apply }: JobSettingsPageProps) {
   const stored = useMemo(() => draftFromRows(rows), [rows]);
+  const [saved, setSaved] = useState(false);
   usePageTitle('Job settings', stored.name);
   return (
     <>
@@ -40,10 +41,11 @@ export function JobSettingsPage({ rows, presets, archived, apply }: JobSettingsP
           systemLocked={rows.run.size > 0 || rows.load.size > 0}
           readOnly={archived}
           action="Save the settings"
-          done={<Message kind="note">Nothing to save.</Message>}
+          done={<Message kind={saved ? 'done' : 'note'}>{saved ? 'Saved.' : 'Nothing to save.'}</Message>}
           submit={async (draft) => {
             const edit = editOfDraft(rows, draft);
             const done = edit ? apply(edit) : { ok: true as const };
+            setSaved(edit !== null && done.ok);
             return done.ok ? null : new ApiError('conflict', done.message);
           }}
         />
