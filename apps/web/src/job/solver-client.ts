@@ -37,7 +37,10 @@ export class SolverClient {
   };
 
   follow(change: RowsChange): void {
-    if (change.kind === 'rows') return this.open(change.rows);
+    if (change.kind === 'rows') {
+      this.open(change.rows);
+      return;
+    }
     this.generation += 1;
     this.send({ kind: 'apply', generation: this.generation, edit: change.edit });
     this.update({ solving: true });

@@ -43,7 +43,6 @@ export function useAnswer<Q extends Question>(question: Q | null): AnswerTo<Q> |
   const { result } = useResult();
   const key = question === null ? null : JSON.stringify(question);
   const [kept, setKept] = useState<{ key: string; answer: AnswerTo<Q> } | null>(null);
-  // biome-ignore lint/correctness/useExhaustiveDependencies: a new result is what makes the answer stale
   useEffect(() => {
     if (key === null) return;
     let wanted = true;
