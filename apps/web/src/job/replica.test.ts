@@ -1,10 +1,10 @@
-import { applyEdit, type Edit, editOf, updateOp } from '@farlug/contract/edit';
+import { applyEdit, type Edit, editOf, newId, updateOp } from '@farlug/contract/edit';
 import { blankBus } from '@farlug/contract/job';
 import { JOB_TABLE_NAMES, type JobRows } from '@farlug/contract/rows';
 import { beforeEach, expect, test } from 'vitest';
 import { type LaterEdits, Replica, type Sent } from './replica.ts';
 
-const bus = blankBus({ id: crypto.randomUUID(), code: 'LP-1', orderKey: 'a' });
+const bus = blankBus({ id: newId(), code: 'LP-1', orderKey: 'a' });
 const start = (): JobRows => {
   const tables = Object.fromEntries(JOB_TABLE_NAMES.map((name) => [name, new Map()]));
   tables.bus = new Map([[bus.id, bus]]);
@@ -16,6 +16,8 @@ class FakeServer {
   rows = start();
   log: LaterEdits['edits'] = [];
   down = false;
+  /** Edits in one answer, as the server bounds them. */
+  most = 500;
   kept: readonly Edit[] = [];
   waits: (() => void)[] = [];
 
@@ -27,7 +29,7 @@ class FakeServer {
       },
       editsSince: async (seq: number) => ({
         headSeq: this.log.length,
-        edits: this.log.filter((one) => one.seq > seq),
+        edits: this.log.filter((one) => one.seq > seq).slice(0, this.most),
       }),
       keep: (pending: readonly Edit[]) => {
         this.kept = pending;
@@ -128,6 +130,15 @@ test('what others saved comes in before one’s own, and is told', async () => {
   expect(told).toEqual(['Odile: kind']);
 });
 
+test('a long absence is caught up answer by answer', async () => {
+  server.most = 2;
+  const replica = open();
+  for (const name of ['one', 'two', 'three', 'four', 'five']) server.take(rename(server.rows, name), 'Odile');
+  await replica.refresh();
+  expect(replica.getSnapshot().headSeq).toBe(5);
+  expect(nameOf(replica.getSnapshot().rows)).toBe('five');
+});
+
 test.each([
   ['mine', 'mine'],
   ['theirs', 'theirs'],
@@ -150,9 +161,9 @@ test.each([
 
 test('an edit that the server will not take is shown and can be let go', async () => {
   const replica = open();
-  const gone = { ...bus, id: crypto.randomUUID() };
+  const gone = { ...bus, id: newId() };
   const bad: Edit = {
-    editId: crypto.randomUUID(),
+    editId: newId(),
     label: 'bad',
     ops: [{ table: 'bus', row: gone.id, was: null, set: { ...gone, code: '' } }],
   };

@@ -1,4 +1,4 @@
-import { applyEdit, type Edit, type EditConflict, invertEdit } from '@farlug/contract/edit';
+import { applyEdit, type Edit, type EditConflict, invertEdit, newId } from '@farlug/contract/edit';
 import type { JobRows } from '@farlug/contract/rows';
 import { mineOver, theirsOver } from './resolve-conflict.ts';
 
@@ -117,7 +117,7 @@ export class Replica {
   redo(): { ok: true } | { ok: false; message: string } {
     const edit = this.redoable.at(-1);
     if (!edit) return { ok: false, message: 'There is nothing to redo.' };
-    const again = { ...edit, editId: crypto.randomUUID(), label: `Redo: ${edit.label}`.slice(0, 200) };
+    const again = { ...edit, editId: newId(), label: `Redo: ${edit.label}`.slice(0, 200) };
     const done = this.perform(again);
     if (done.ok) {
       this.redoable = this.redoable.slice(0, -1);
@@ -230,21 +230,28 @@ export class Replica {
     );
   }
 
+  /** Takes in what was saved since, in as many answers as it takes. */
   private async catchUp(): Promise<void> {
-    const { edits } = await this.port.editsSince(this.headSeq);
-    if (edits.length === 0) return;
-    for (const { seq, edit, person } of edits) {
-      if (seq <= this.headSeq) continue;
-      const outcome = applyEdit(this.confirmed, edit);
-      if (!outcome.ok)
-        throw new Error('This page has lost track of the job: reload it. What is not saved is kept.');
-      this.confirmed = outcome.rows;
-      this.headSeq = seq;
-      const own = this.pending.some((mine) => mine.editId === edit.editId);
-      if (own) this.drop(edit.editId);
-      else for (const listener of this.othersListeners) listener(person, edit.label);
+    const before = this.headSeq;
+    for (;;) {
+      const { headSeq, edits } = await this.port.editsSince(this.headSeq);
+      const began = this.headSeq;
+      for (const later of edits) this.takeIn(later);
+      if (this.headSeq >= headSeq || this.headSeq === began) break;
     }
-    this.replaceRows();
+    if (this.headSeq !== before) this.replaceRows();
+  }
+
+  private takeIn({ seq, edit, person }: LaterEdits['edits'][number]): void {
+    if (seq <= this.headSeq) return;
+    const outcome = applyEdit(this.confirmed, edit);
+    if (!outcome.ok)
+      throw new Error('This page has lost track of the job: reload it. What is not saved is kept.');
+    this.confirmed = outcome.rows;
+    this.headSeq = seq;
+    const own = this.pending.some((mine) => mine.editId === edit.editId);
+    if (own) this.drop(edit.editId);
+    else for (const listener of this.othersListeners) listener(person, edit.label);
   }
 
   private drop(editId: string): void {

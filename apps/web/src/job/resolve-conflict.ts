@@ -1,4 +1,4 @@
-import type { Edit, EditConflict, EditOp } from '@farlug/contract/edit';
+import { type Edit, type EditConflict, type EditOp, newId } from '@farlug/contract/edit';
 
 /** The edit made anew upon the values that stand now; null where a row it changes is gone or already there. */
 export function mineOver(edit: Edit, conflicts: readonly EditConflict[]): Edit | null {
@@ -10,7 +10,7 @@ export function mineOver(edit: Edit, conflicts: readonly EditConflict[]): Edit |
     for (const { field, is } of here) was[field!] = is;
     return { ...op, was };
   });
-  return { ...edit, editId: crypto.randomUUID(), ops };
+  return { ...edit, editId: newId(), ops };
 }
 
 /** What is left of the edit without the fields that others changed; null where nothing is. */
@@ -25,5 +25,5 @@ export function theirsOver(edit: Edit, conflicts: readonly EditConflict[]): Edit
     const set = rest(op.set);
     return Object.keys(set).length === 0 ? [] : [{ ...op, was: rest(op.was), set }];
   });
-  return ops.length === 0 ? null : { ...edit, editId: crypto.randomUUID(), ops };
+  return ops.length === 0 ? null : { ...edit, editId: newId(), ops };
 }

@@ -8,7 +8,9 @@ export function cellContexts(panel: PanelView, result: JobResult | null): CellCo
   for (const { circuitId, reason } of result?.leftOut ?? [])
     if (circuitId !== null && !leftOut.has(circuitId)) leftOut.set(circuitId, reason);
   const raceways = new Set(
-    (result?.assumed ?? []).flatMap((one) => (one.field === 'raceway' && one.circuitId ? [one.circuitId] : [])),
+    (result?.assumed ?? []).flatMap((one) =>
+      one.field === 'raceway' && one.circuitId ? [one.circuitId] : [],
+    ),
   );
   return panel.circuits.map((circuit) => ({
     circuit,

@@ -12,14 +12,25 @@ export interface GridColumn {
   choices?: readonly string[];
 }
 
-const typed = (field: CircuitField, label: string, width: string, more: Partial<GridColumn> = {}): GridColumn => ({
+const typed = (
+  field: CircuitField,
+  label: string,
+  width: string,
+  more: Partial<GridColumn> = {},
+): GridColumn => ({
   key: field,
   label,
   field,
   width,
   ...more,
 });
-const computed = (key: string, label: string, width: string): GridColumn => ({ key, label, field: null, width, numeric: true });
+const computed = (key: string, label: string, width: string): GridColumn => ({
+  key,
+  label,
+  field: null,
+  width,
+  numeric: true,
+});
 
 /** What decides, beside its verdict. */
 export const RESULT_COLUMNS: readonly GridColumn[] = [

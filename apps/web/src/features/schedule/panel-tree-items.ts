@@ -1,12 +1,15 @@
 import type { PanelView } from '@farlug/contract/schedule';
-import type { TreeItem } from '../../ui/rail.tsx';
 import type { VerdictKind } from '../../ui/glyph.tsx';
+import type { TreeItem } from '../../ui/rail.tsx';
 import type { JobResult } from '../../workers/results.ts';
 
 const RANK: readonly VerdictKind[] = ['over', 'rise', 'unserved', 'near', 'within', 'unjudged'];
 
 /** The worst of a panel's own circuits and its feeder part, and how many share it. */
-export function panelVerdict(panel: PanelView, result: JobResult | null): { verdict: VerdictKind | null; count: number } {
+export function panelVerdict(
+  panel: PanelView,
+  result: JobResult | null,
+): { verdict: VerdictKind | null; count: number } {
   if (!result) return { verdict: null, count: 0 };
   const kinds = panel.circuits.flatMap((circuit) => {
     const figures = result.circuits.get(circuit.id);
@@ -40,6 +43,14 @@ export function panelTreeItems(
       return ends ? 'none' : 'through';
     });
     const { verdict, count } = panelVerdict(panel, result);
-    return { id: panel.id, to: to(panel.id), label: panel.code, lines, verdict, count, current: panel.id === current };
+    return {
+      id: panel.id,
+      to: to(panel.id),
+      label: panel.code,
+      lines,
+      verdict,
+      count,
+      current: panel.id === current,
+    };
   });
 }

@@ -19,7 +19,8 @@ export function verdictSentence(
 ): { lead: string; rest: string } {
   const lead = LEADS[shown];
   if (reasons.length > 0) return { lead, rest: `${capital(reasons.map(spoken).join(', '))}.` };
-  if (shown === 'unserved') return { lead, rest: 'An open run or a source that is off cuts it from every source.' };
+  if (shown === 'unserved')
+    return { lead, rest: 'An open run or a source that is off cuts it from every source.' };
   if (shown === 'unjudged') return { lead, rest: 'No limit is set for it.' };
   return { lead, rest: limitText ? `Total ${totalText} against ${limitText}.` : `Total ${totalText}.` };
 }

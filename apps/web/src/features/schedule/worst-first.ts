@@ -6,8 +6,7 @@ const RANK: Record<VerdictKind, number> = { over: 0, rise: 0, unserved: 1, near:
 /** The worst verdict first; among equals the largest total, then the order of the job. */
 export const loadsWorstFirst = (result: JobResult): LoadFigures[] =>
   [...result.loads.values()].sort(
-    (a, b) =>
-      RANK[a.shown] - RANK[b.shown] || Math.abs(b.totalPercent ?? 0) - Math.abs(a.totalPercent ?? 0),
+    (a, b) => RANK[a.shown] - RANK[b.shown] || Math.abs(b.totalPercent ?? 0) - Math.abs(a.totalPercent ?? 0),
   );
 
 export const runsWorstFirst = (result: JobResult): RunFigures[] =>

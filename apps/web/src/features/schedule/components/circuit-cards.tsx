@@ -1,6 +1,6 @@
 import { formatPercent } from '@farlug/solver/units';
-import { MissingBox } from '../../../ui/missing-box.tsx';
 import { DropBar } from '../../../ui/drop-bar.tsx';
+import { MissingBox } from '../../../ui/missing-box.tsx';
 import { Scroller } from '../../../ui/scroller.tsx';
 import { Verdict } from '../../../ui/verdict.tsx';
 import { lineText, wireText } from '../columns.ts';
@@ -15,11 +15,18 @@ interface CircuitCardsProps {
 /** On a phone: a card for each circuit; choosing one opens its fields. */
 export function CircuitCards({ label, rows, onChoose }: CircuitCardsProps) {
   return (
-    <Scroller label={`${label}, scrolls`} className="min-h-0 flex-1 overflow-auto border-t border-ink bg-sheet">
+    <Scroller
+      label={`${label}, scrolls`}
+      className="min-h-0 flex-1 overflow-auto border-t border-ink bg-sheet"
+    >
       <ul aria-label={label}>
         {rows.map(({ circuit, figures, leftOut }) => (
           <li key={circuit.id} className="border-b border-rule">
-            <button type="button" onClick={() => onChoose(circuit.id)} className="block w-full px-4 py-2.5 text-left">
+            <button
+              type="button"
+              onClick={() => onChoose(circuit.id)}
+              className="block w-full px-4 py-2.5 text-left"
+            >
               <span className="flex items-baseline justify-between gap-3">
                 <span className="min-w-0 truncate font-bold">
                   {circuit.spaces.join(', ') || circuit.code}{' '}

@@ -19,7 +19,11 @@ export interface CellContext {
 
 /** What a cell shows: text as typed, figures as computed, a box where something is missing. */
 export function CircuitCell({ column, ...cell }: CellContext & { column: GridColumn }) {
-  return column.field === null ? <Computed column={column} {...cell} /> : <TypedCell column={column} {...cell} />;
+  return column.field === null ? (
+    <Computed column={column} {...cell} />
+  ) : (
+    <TypedCell column={column} {...cell} />
+  );
 }
 
 function TypedCell({ column, circuit, racewayAssumed }: CellContext & { column: GridColumn }) {
@@ -32,7 +36,8 @@ function TypedCell({ column, circuit, racewayAssumed }: CellContext & { column: 
         <span className="sr-only"> not understood</span>
       </span>
     );
-  if (view.text === '' && circuit.next?.field === field) return <MissingBox what={column.label.toLowerCase()} />;
+  if (view.text === '' && circuit.next?.field === field)
+    return <MissingBox what={column.label.toLowerCase()} />;
   if (field === 'description')
     return (
       <>
@@ -63,7 +68,8 @@ function TypedCell({ column, circuit, racewayAssumed }: CellContext & { column: 
 
 function Computed({ column, circuit, figures, amps, leftOut }: CellContext & { column: GridColumn }) {
   if (column.key === 'line') return <span className="text-ink-soft">{lineText(circuit)}</span>;
-  if (column.key === 'amps') return amps === null ? null : <span className="text-ink-soft">{formatFixed(amps, 1)}</span>;
+  if (column.key === 'amps')
+    return amps === null ? null : <span className="text-ink-soft">{formatFixed(amps, 1)}</span>;
   if (column.key === 'verdict') {
     if (leftOut !== null) return <Verdict kind="unjudged" word="left out" />;
     if (figures) return <Verdict kind={figures.shown} />;

@@ -1,15 +1,15 @@
-import { LOAD_CLASSES } from '@farlug/solver/job';
 import type { CircuitField, CircuitView } from '@farlug/contract/schedule';
+import { LOAD_CLASSES } from '@farlug/solver/job';
 import { useEffect, useRef, useState } from 'react';
+import { CLASS_WORDS } from '../../../lib/job-words.ts';
 import { Field } from '../../../ui/field.tsx';
 import { Select } from '../../../ui/select.tsx';
 import { TextInput } from '../../../ui/text-input.tsx';
-import { CLASS_WORDS } from '../../../lib/job-words.ts';
 
 const FIELDS: readonly (readonly [CircuitField, string, string | null])[] = [
   ['description', 'Serves', null],
   ['room', 'Room', null],
-  ['length', 'Length', '120 ft, 36 m, 120\''],
+  ['length', 'Length', "120 ft, 36 m, 120'"],
   ['load', 'Load', '16 A, 1.5 kW, 180 VA, 3/4 hp'],
   ['size', 'Size', '12, 3/0, 250 kcmil, 16 mm2, 2 sets 3/0'],
   ['material', 'Material', 'copper or aluminum'],
@@ -114,4 +114,3 @@ function TypedField({ label, hint, wide, text, missing, readOnly, onTake }: Type
     </Field>
   );
 }
-

@@ -38,7 +38,8 @@ export function CircuitSheet(props: CircuitSheetProps) {
   const about = [
     circuit.spaces.length > 0 ? `Space ${circuit.spaces.join(', ')} on ${lineText(circuit)}` : null,
     breaker.text && `breaker ${breaker.text}`,
-    wireText(circuit) && `${wireText(circuit)}${circuit.fields.raceway.text ? ` in ${circuit.fields.raceway.text}` : ''}`,
+    wireText(circuit) &&
+      `${wireText(circuit)}${circuit.fields.raceway.text ? ` in ${circuit.fields.raceway.text}` : ''}`,
     length.text && `${length.text}${length.assumed ? ', assumed' : ''}`,
     load.text && `${load.text}${load.assumed ? ', assumed' : ''}`,
   ].filter(Boolean);
@@ -125,7 +126,10 @@ function Figures({ figures, job, counted }: FiguresProps) {
             columns={2}
             items={[
               ['At the far lug', `${formatFixed(worst.volts, 1)} V`],
-              ['Headroom', worst.headroomAmps === null ? 'no limit' : `${formatFixed(worst.headroomAmps, 1)} A`],
+              [
+                'Headroom',
+                worst.headroomAmps === null ? 'no limit' : `${formatFixed(worst.headroomAmps, 1)} A`,
+              ],
               ['Between', worst.terminals],
               [
                 'While starting',

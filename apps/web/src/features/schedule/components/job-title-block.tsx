@@ -3,8 +3,8 @@ import type { Scenario } from '@farlug/solver/job';
 import type { ReactNode } from 'react';
 import { useOpenJob } from '../../../job/open-job.tsx';
 import { useResult, useScenario } from '../../../job/use-result.ts';
-import { BASIS_WORDS, SCENARIO_WORDS } from '../../../lib/job-words.ts';
 import { formatPercent } from '../../../lib/format.ts';
+import { BASIS_WORDS, SCENARIO_WORDS } from '../../../lib/job-words.ts';
 import { Select } from '../../../ui/select.tsx';
 import { TitleBlock, TitleCell } from '../../../ui/title-block.tsx';
 import { Tally, VerdictFigure } from '../../../ui/verdict.tsx';
@@ -16,17 +16,32 @@ const SCENARIO_CHOICES = (Object.keys(SCENARIO_WORDS) as Scenario[]).map((value)
 }));
 
 /** Job, service, basis, limits, scenario, worst load, counts: what every result of the page stands on. */
-export function JobTitleBlock({ rows, worstName, action }: { rows: JobRows; worstName: string | null; action?: ReactNode }) {
+export function JobTitleBlock({
+  rows,
+  worstName,
+  action,
+}: {
+  rows: JobRows;
+  worstName: string | null;
+  action?: ReactNode;
+}) {
   const { archived } = useOpenJob();
   const { result, solving } = useResult();
   const [scenario, setScenario] = useScenario();
   const job = [...rows.job.values()][0]!;
   const service = serviceText(rows);
   const limits = limitsText(rows);
-  const judged = result ? [...result.circuits.values()].filter((circuit) => circuit.shown !== 'unjudged').length : 0;
+  const judged = result
+    ? [...result.circuits.values()].filter((circuit) => circuit.shown !== 'unjudged').length
+    : 0;
   return (
     <TitleBlock action={action}>
-      <TitleCell label="Job" strong sub={archived ? 'archived: read only' : (job.address ?? 'no address')} shrink>
+      <TitleCell
+        label="Job"
+        strong
+        sub={archived ? 'archived: read only' : (job.address ?? 'no address')}
+        shrink
+      >
         {job.name}
       </TitleCell>
       <TitleCell label="Service" sub={service.detail}>
@@ -39,11 +54,19 @@ export function JobTitleBlock({ rows, worstName, action }: { rows: JobRows; wors
         {limits.values}
       </TitleCell>
       <TitleCell label="Scenario" sub={SCENARIO_WORDS[scenario].others} phone>
-        <Select bare aria-label="Scenario" value={scenario} onValue={setScenario} choices={SCENARIO_CHOICES} />
+        <Select
+          bare
+          aria-label="Scenario"
+          value={scenario}
+          onValue={setScenario}
+          choices={SCENARIO_CHOICES}
+        />
       </TitleCell>
       <TitleCell label="Worst load" sub={worstName ?? ''} phone>
         {result?.worst ? (
-          <VerdictFigure kind={result.worst.shown}>{formatPercent(result.worst.worst.totalPercent)}</VerdictFigure>
+          <VerdictFigure kind={result.worst.shown}>
+            {formatPercent(result.worst.worst.totalPercent)}
+          </VerdictFigure>
         ) : (
           <span className="text-ink-soft">{result?.state === 'stopped' ? 'not computed' : ''}</span>
         )}
@@ -57,7 +80,10 @@ export function JobTitleBlock({ rows, worstName, action }: { rows: JobRows; wors
         }
       >
         <Tally
-          counts={{ ...result?.counts, unjudged: (result?.counts.unjudged ?? 0) + (result?.leftOutCount ?? 0) }}
+          counts={{
+            ...result?.counts,
+            unjudged: (result?.counts.unjudged ?? 0) + (result?.leftOutCount ?? 0),
+          }}
           words={{ unjudged: 'left out or not judged' }}
         />
       </TitleCell>

@@ -73,7 +73,15 @@ export function PanelFootRow({ panel, result }: PanelFootProps) {
   );
 }
 
-function FootLine({ word, figures, strong = false }: { word: string; figures: readonly string[]; strong?: boolean }) {
+function FootLine({
+  word,
+  figures,
+  strong = false,
+}: {
+  word: string;
+  figures: readonly string[];
+  strong?: boolean;
+}) {
   return (
     <tr>
       <th scope="row" className="pr-4 text-left font-normal text-ink-soft">

@@ -42,7 +42,15 @@ function words(sync: Sync, headSeq: number): string {
   }
 }
 
-function SettleDialog({ sync, open, onOpenChange }: { sync: Sync; open: boolean; onOpenChange: (open: boolean) => void }) {
+function SettleDialog({
+  sync,
+  open,
+  onOpenChange,
+}: {
+  sync: Sync;
+  open: boolean;
+  onOpenChange: (open: boolean) => void;
+}) {
   const { replica } = useOpenJob();
   if (sync.kind === 'refused')
     return (
@@ -78,7 +86,9 @@ function SettleDialog({ sync, open, onOpenChange }: { sync: Sync; open: boolean;
               Keep mine
             </Button>
           )}
-          <Button onClick={() => replica.resolve('theirs')}>{whole ? 'Go on without it' : 'Keep what was saved'}</Button>
+          <Button onClick={() => replica.resolve('theirs')}>
+            {whole ? 'Go on without it' : 'Keep what was saved'}
+          </Button>
         </>
       }
     >

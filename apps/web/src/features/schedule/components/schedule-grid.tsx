@@ -80,11 +80,17 @@ export function ScheduleGrid(props: ScheduleGridProps) {
     if (moved) go(moved);
     else if (command && event.key.toLowerCase() === 'z') (event.shiftKey ? props.onRedo : props.onUndo)();
     else if (command && event.key.toLowerCase() === 'y') props.onRedo();
-    else if (command && event.key.toLowerCase() === 'd' && circuit && !readOnly) props.onDuplicate(circuit.id);
+    else if (command && event.key.toLowerCase() === 'd' && circuit && !readOnly)
+      props.onDuplicate(circuit.id);
     else if (event.key === 'Enter' || event.key === 'F2') open(null);
     else if (event.key === ' ' && circuit) onChoose(circuit.id);
     else if (event.key === 'Delete' && event.shiftKey && circuit && !readOnly) props.onRemove(circuit.id);
-    else if ((event.key === 'Delete' || event.key === 'Backspace') && columns[column]!.field && circuit && !readOnly)
+    else if (
+      (event.key === 'Delete' || event.key === 'Backspace') &&
+      columns[column]!.field &&
+      circuit &&
+      !readOnly
+    )
       take('', { row, column });
     else if (event.key.length === 1 && !command && !event.altKey && event.key !== '?') open(event.key);
     else return;
@@ -92,7 +98,10 @@ export function ScheduleGrid(props: ScheduleGridProps) {
   };
 
   return (
-    <Scroller label={`${label}, scrolls`} className="min-h-0 flex-1 overflow-auto border-t border-ink bg-sheet">
+    <Scroller
+      label={`${label}, scrolls`}
+      className="min-h-0 flex-1 overflow-auto border-t border-ink bg-sheet"
+    >
       <table
         ref={table}
         role="grid"
@@ -125,12 +134,14 @@ export function ScheduleGrid(props: ScheduleGridProps) {
               aria-selected={cell.circuit.id === chosenId}
               className={cx(
                 'h-7',
-                cell.circuit.id === chosenId && 'bg-wash [&>:first-child]:border-l-3 [&>:first-child]:border-l-copper',
+                cell.circuit.id === chosenId &&
+                  'bg-wash [&>:first-child]:border-l-3 [&>:first-child]:border-l-copper',
               )}
             >
               {columns.map((one, c) => {
                 const here = r === row && c === column;
-                const wrong = problem?.id === cell.circuit.id && problem.key === one.key ? problem.text : null;
+                const wrong =
+                  problem?.id === cell.circuit.id && problem.key === one.key ? problem.text : null;
                 return (
                   <GridCell
                     key={one.key}
@@ -153,7 +164,10 @@ export function ScheduleGrid(props: ScheduleGridProps) {
                         caret={editing.caret}
                         numeric={one.numeric ?? false}
                         onTake={(text, step) =>
-                          take(text, { row: clamp(r + step.rows, rows.length), column: clamp(c + step.columns, columns.length) })
+                          take(text, {
+                            row: clamp(r + step.rows, rows.length),
+                            column: clamp(c + step.columns, columns.length),
+                          })
                         }
                         onLeave={leave}
                       />

@@ -20,7 +20,9 @@ export function VoltsPath({ load, counted }: VoltsPathProps) {
     { key: 'Feeder', percent: load.feederPercent!, part: 'feeder' },
     { key: 'Branch', percent: load.branchPercent!, part: 'branch' },
   ] as const;
-  const shown = split.filter(({ key, percent }) => key === 'Feeder' || key === 'Branch' || Math.abs(percent) > 1e-9);
+  const shown = split.filter(
+    ({ key, percent }) => key === 'Feeder' || key === 'Branch' || Math.abs(percent) > 1e-9,
+  );
   const order = { aside: 0, feeder: 1, branch: 2 };
   const parts: DropPart[] = [...shown]
     .sort((a, b) => order[a.part] - order[b.part])
@@ -31,7 +33,9 @@ export function VoltsPath({ load, counted }: VoltsPathProps) {
       <DropStrip
         parts={parts}
         limitVolts={limitVolts}
-        limitLabel={limitVolts === null ? 'no limit set' : `limit ${limitPercent} %: ${formatFixed(limitVolts, 2)} V`}
+        limitLabel={
+          limitVolts === null ? 'no limit set' : `limit ${limitPercent} %: ${formatFixed(limitVolts, 2)} V`
+        }
       />
       <Table caption="Where the volts go">
         <thead className="sr-only">

@@ -20,9 +20,14 @@ interface WorstFirstProps {
 /** Every load, or every run, of the job with its figures and reasons, the worst at the top. */
 export function WorstFirst({ what, result, schedule, to }: WorstFirstProps) {
   if (!result || (result.loads.size === 0 && result.runs.size === 0))
-    return <EmptyState title="Nothing computed yet">Rows with a length, a size and a load appear here.</EmptyState>;
+    return (
+      <EmptyState title="Nothing computed yet">Rows with a length, a size and a load appear here.</EmptyState>
+    );
   return (
-    <Scroller label="Worst first, scrolls" className="min-h-0 flex-1 overflow-auto border-t border-ink bg-sheet">
+    <Scroller
+      label="Worst first, scrolls"
+      className="min-h-0 flex-1 overflow-auto border-t border-ink bg-sheet"
+    >
       {what === 'loads' ? (
         <Loads loads={loadsWorstFirst(result)} schedule={schedule} to={to} />
       ) : (
@@ -37,7 +42,13 @@ interface PartProps {
   to: (circuitId: string) => string;
 }
 
-function Name({ circuitId, row, id, schedule, to }: PartProps & { circuitId: string | null; row: string; id: string }) {
+function Name({
+  circuitId,
+  row,
+  id,
+  schedule,
+  to,
+}: PartProps & { circuitId: string | null; row: string; id: string }) {
   if (circuitId === null) return schedule.nameOf(row) === row ? id : schedule.nameOf(row);
   return <Link to={to(circuitId)}>{schedule.nameOf(circuitId)}</Link>;
 }
@@ -120,7 +131,11 @@ function Runs({ runs, schedule, to }: PartProps & { runs: readonly RunFigures[] 
             <Td numeric>{percent(run.dropPercent)}</Td>
             <Td numeric>{run.dropVolts === null ? '' : formatFixed(run.dropVolts, 2)}</Td>
             <Td numeric>
-              {run.amps === null ? '' : Object.values(run.amps).map((amps) => formatFixed(amps, 1)).join('  ')}
+              {run.amps === null
+                ? ''
+                : Object.values(run.amps)
+                    .map((amps) => formatFixed(amps, 1))
+                    .join('  ')}
             </Td>
             <Td numeric>{run.lossWatts === null ? '' : formatFixed(run.lossWatts, 1)}</Td>
           </tr>

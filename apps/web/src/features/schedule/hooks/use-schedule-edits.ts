@@ -35,7 +35,9 @@ export function useScheduleEdits(): ScheduleEdits {
       const done = replica.apply(edit);
       return { problem: done.ok ? problem : done.message };
     };
-    const said = (done: ReturnType<typeof replica.undo>): Typed => ({ problem: done.ok ? null : done.message });
+    const said = (done: ReturnType<typeof replica.undo>): Typed => ({
+      problem: done.ok ? null : done.message,
+    });
     return {
       apply,
       type(circuitId, field, text) {

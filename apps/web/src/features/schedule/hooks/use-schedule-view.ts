@@ -14,7 +14,9 @@ export function useScheduleView(): JobSchedule {
   const { rows } = useReplica();
   return useMemo(() => {
     const view = scheduleView(rows);
-    const circuits = new Map(view.panels.flatMap((panel) => panel.circuits.map((one) => [one.id, { one, panel }] as const)));
+    const circuits = new Map(
+      view.panels.flatMap((panel) => panel.circuits.map((one) => [one.id, { one, panel }] as const)),
+    );
     return {
       ...view,
       circuit: (id) => circuits.get(id)?.one ?? null,
