@@ -7,8 +7,8 @@ import {
 } from '@farlug/contract/import';
 import type { JobRows, Row } from '@farlug/contract/rows';
 import { codeProblem, ROW_FIELDS } from '@farlug/contract/schedule';
-import { SYSTEM_CONDUCTORS } from '@farlug/solver/job';
 import { type FeedValue, feedOf } from '../dialogs/feed-choices.ts';
+import { usualLines } from '../dialogs/usual-lines.ts';
 
 /** Where the circuits go: a panel of the job, or a new one as it is typed. */
 export interface TargetDraft {
@@ -115,10 +115,4 @@ export function readTarget(rows: JobRows, draft: TargetDraft): TargetReading {
       ...(main.ok ? {} : { mainAmps: `Main breaker ${main.message}.` }),
     },
   };
-}
-
-/** Lines of the first source: what an unfed panel most likely has. */
-export function usualLines(rows: JobRows): Row<'panel'>['lines'] {
-  const source = [...rows.source.values()][0];
-  return SYSTEM_CONDUCTORS[source?.system ?? '3ph-4w'].filter((one) => one !== 'N');
 }

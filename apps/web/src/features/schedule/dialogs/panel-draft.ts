@@ -1,0 +1,183 @@
+import type { Edit } from '@farlug/contract/edit';
+import type { JobRows, Row } from '@farlug/contract/rows';
+import {
+  addPanelEdit,
+  changeCircuitFieldEdit,
+  circuitParts,
+  fieldText,
+  panelTree,
+  type RowField,
+  refeedPanelEdit,
+  renamePointEdit,
+  scheduleView,
+} from '@farlug/contract/schedule';
+import { parseBreaker } from '@farlug/solver/units';
+import type { FieldErrors } from '../../../lib/form-errors.ts';
+import { EditChain } from './edit-chain.ts';
+import { busOfFeed, type FeedValue, feedOf } from './feed-choices.ts';
+import { rowTexts } from './row-texts.ts';
+import { NEW_RUN, type RunTexts, runTexts, typeRun } from './run-draft.ts';
+import { usualLines } from './usual-lines.ts';
+
+const PANEL_FIELDS = [
+  'layout',
+  'spaces',
+  'lines',
+  'mainAmps',
+  'building',
+  'area',
+  'mounting',
+  'notes',
+] as const satisfies readonly RowField<'panel'>[];
+
+export type PanelDraft = Record<(typeof PANEL_FIELDS)[number] | 'code' | 'name', string> & {
+  feed: FeedValue;
+  /** In the panel that feeds it. */
+  breaker: string;
+  breakerSpaces: string;
+  run: RunTexts;
+};
+
+const PANEL_WORDS = { spaces: 'Spaces', lines: 'Lines', mainAmps: 'Main breaker' };
+
+export const newPanelDraft = (rows: JobRows, feed: FeedValue): PanelDraft => ({
+  code: '',
+  name: '',
+  layout: 'two-column',
+  spaces: '42',
+  lines: usualLines(rows).join(', '),
+  mainAmps: '',
+  building: '',
+  area: '',
+  mounting: '',
+  notes: '',
+  feed,
+  breaker: '',
+  breakerSpaces: '',
+  run: NEW_RUN,
+});
+
+export function panelDraft(rows: JobRows, panel: Row<'panel'>): PanelDraft {
+  const bus = rows.bus.get(panel.busId)!;
+  const circuit = feedingCircuit(rows, panel.id);
+  const run = feederOf(rows, panel.id);
+  return {
+    ...(rowTexts(rows, 'panel', panel, PANEL_FIELDS) as Pick<PanelDraft, (typeof PANEL_FIELDS)[number]>),
+    code: bus.code,
+    name: bus.name ?? '',
+    feed: feedValue(rows, panel.id),
+    breaker: circuit ? fieldText(circuit, 'breaker') : '',
+    breakerSpaces: circuit ? fieldText(circuit, 'spaces') : '',
+    run: run ? runTexts(rows, run) : NEW_RUN,
+  };
+}
+
+/** What feeds a panel now, as it stands in the list. */
+export function feedValue(rows: JobRows, panelId: string): FeedValue {
+  const fed = panelTree(rows).find((node) => node.panel.id === panelId)?.fedFrom;
+  if (!fed) return '';
+  if (fed.panelId !== null) return `panel:${fed.panelId}`;
+  const source = rows.source.get(fed.sourceId ?? '');
+  return source ? `bus:${source.busId}` : '';
+}
+
+/** The run that ends at the panel. */
+export function feederOf(rows: JobRows, panelId: string): Row<'run'> | null {
+  const fed = panelTree(rows).find((node) => node.panel.id === panelId)?.fedFrom;
+  return rows.run.get(fed?.runIds.at(-1) ?? '') ?? null;
+}
+
+function feedingCircuit(rows: JobRows, panelId: string) {
+  const fed = panelTree(rows).find((node) => node.panel.id === panelId)?.fedFrom;
+  return fed?.circuitId ? circuitParts(rows, fed.circuitId) : null;
+}
+
+export interface Settled {
+  edit: Edit | null;
+  errors: FieldErrors;
+  /** Of what was added or changed. */
+  id: string | null;
+}
+
+/** A panel as typed, new or changed, as one edit. */
+export function settlePanel(rows: JobRows, panelId: string | null, draft: PanelDraft): Settled {
+  const chain = new EditChain(rows);
+  const id = panelId ?? addPanel(chain, draft);
+  const panel = chain.rows.panel.get(id ?? '');
+  if (!id || !panel) return { edit: null, errors: chain.errors, id: null };
+  if (panelId) {
+    if (draft.code.trim() !== rows.bus.get(panel.busId)!.code)
+      chain.take('code', renamePointEdit(chain.rows, panel.busId, draft.code));
+    refeed(chain, id, draft);
+  }
+  chain.type('bus', panel.busId, { name: draft.name }, ['name'], { words: { name: 'Name' } });
+  // Lines follow from the feed of a new panel, unless they were typed.
+  const follows = !panelId && draft.feed !== '' && draft.lines === usualLines(rows).join(', ');
+  const fields = follows ? PANEL_FIELDS.filter((one) => one !== 'lines') : PANEL_FIELDS;
+  chain.type('panel', id, draft, fields, { words: PANEL_WORDS });
+  refuseHiddenSpaces(chain, id);
+  const old = panelId ? feedingCircuit(rows, panelId) : null;
+  const moved = panelId !== null && busOfFeed(rows, feedValue(rows, panelId)) !== busOfFeed(rows, draft.feed);
+  const stays = moved && old !== null && draft.breakerSpaces === fieldText(old, 'spaces');
+  typeBreaker(chain, id, stays ? { ...draft, breakerSpaces: '' } : draft);
+  const feeder = feederOf(chain.rows, id);
+  if (feeder && draft.feed !== '') typeRun(chain, feeder.id, draft.run, feederOf(rows, id) === null);
+  const code = draft.code.trim();
+  return {
+    edit: chain.edit(panelId ? `Change panel ${code}` : `Add panel ${code}`),
+    errors: chain.errors,
+    id,
+  };
+}
+
+function addPanel(chain: EditChain, draft: PanelDraft): string | null {
+  const breaker = breakerOf(draft);
+  if (breaker === 'refused') chain.refuse('breaker', 'Breaker must be amps and poles, such as 200/3.');
+  const feed = feedOf(draft.feed);
+  const given =
+    feed && 'panelId' in feed && breaker && breaker !== 'refused' ? { ...feed, ...breaker } : feed;
+  const added = addPanelEdit(chain.rows, { code: draft.code, feed: given });
+  const field = added.problem?.includes('open spaces') ? 'feed' : 'code';
+  return chain.take(field, added) ? added.id : null;
+}
+
+function refeed(chain: EditChain, panelId: string, draft: PanelDraft): void {
+  const now = feedValue(chain.rows, panelId);
+  const same = busOfFeed(chain.rows, now) === busOfFeed(chain.rows, draft.feed);
+  const feed = feedOf(draft.feed);
+  if (same || !feed) return;
+  const breaker = breakerOf(draft);
+  const place = 'panelId' in feed && breaker && breaker !== 'refused' ? { ...feed, ...breaker } : feed;
+  chain.take('feed', refeedPanelEdit(chain.rows, panelId, place));
+}
+
+function breakerOf({ breaker }: PanelDraft): { poles: 1 | 2 | 3; amps: string } | 'refused' | null {
+  if (breaker.trim() === '') return null;
+  const read = parseBreaker(breaker, 3);
+  return read.ok ? { poles: read.poles, amps: String(read.amps) } : 'refused';
+}
+
+function typeBreaker(chain: EditChain, panelId: string, draft: PanelDraft): void {
+  const circuit = draft.feed.startsWith('panel:') ? feedingCircuit(chain.rows, panelId) : null;
+  if (circuit?.circuit.kind !== 'feeder') return;
+  const { id } = circuit.circuit;
+  const said = (word: string, change: ReturnType<typeof changeCircuitFieldEdit>) => ({
+    ...change,
+    problem: change.problem && `${word} ${change.problem}.`,
+  });
+  if (draft.breaker.trim() !== '')
+    chain.take('breaker', said('Breaker', changeCircuitFieldEdit(chain.rows, id, 'breaker', draft.breaker)));
+  if (draft.breakerSpaces.trim() !== '')
+    chain.take(
+      'breakerSpaces',
+      said('Spaces', changeCircuitFieldEdit(chain.rows, id, 'spaces', draft.breakerSpaces)),
+    );
+}
+
+/** A panel cannot be smaller than the spaces that its circuits take. */
+function refuseHiddenSpaces(chain: EditChain, panelId: string): void {
+  const view = scheduleView(chain.rows).panels.find((one) => one.id === panelId);
+  const most = Math.max(0, ...(view?.circuits ?? []).flatMap((circuit) => circuit.spaces));
+  if (view && most > view.panel.spaces)
+    chain.refuse('spaces', `Spaces must be at least ${most}: a circuit stands in space ${most}.`);
+}
