@@ -13,13 +13,13 @@ interface JobTroubleProps {
 export function JobTrouble({ snapshot, to }: JobTroubleProps) {
   if (snapshot.fault)
     return (
-      <Message kind="error">
+      <Message kind="wrong">
         The solver stopped: {snapshot.fault}. Nothing that was typed is lost; reload the page to go on.
       </Message>
     );
   if (snapshot.result?.state !== 'stopped') return null;
   return (
-    <Message kind="error">
+    <Message kind="wrong">
       <p>No figures can be computed.</p>
       <ul>
         {snapshot.result.trouble.map((trouble) => {

@@ -33,8 +33,7 @@ export function PanelHead({ panel, result, feederLimit, actions }: PanelHeadProp
           {figures && figures.feederPercent !== null && (
             <>
               {'. Feeder part '}
-              {formatPercentAgainst(figures.feederPercent, feederLimit)}{' '}
-              <Verdict kind={figures.shown} />
+              {formatPercentAgainst(figures.feederPercent, feederLimit)} <Verdict kind={figures.shown} />
             </>
           )}
         </p>

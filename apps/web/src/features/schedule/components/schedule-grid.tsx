@@ -104,6 +104,7 @@ export function ScheduleGrid(props: ScheduleGridProps) {
     >
       <table
         ref={table}
+        // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: the ARIA grid pattern on a table
         role="grid"
         aria-label={label}
         aria-rowcount={rows.length + 1}
@@ -202,6 +203,7 @@ function GridCell({ column, place, here, wrong, onClick, onDoubleClick, children
   return (
     // biome-ignore lint/a11y/useKeyWithClickEvents: the grid handles the keys of its cells
     <td
+      // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: a cell of a table that is an ARIA grid
       role="gridcell"
       data-cell={place}
       tabIndex={here ? 0 : -1}

@@ -33,7 +33,8 @@ export function ScheduleLegend({ result, missing, next, onNext }: LegendProps) {
       <span className="hidden desk:inline">Bar: feeder, then branch; tick at the limit</span>
       {next && (
         <button type="button" onClick={onNext} className="tap text-copper underline desk:ml-auto">
-          {formatCount(missing.length, 'row')} to finish, next {next.circuit.code}: {next.circuit.next?.reason}
+          {formatCount(missing.length, 'row')} to finish, next {next.circuit.code}:{' '}
+          {next.circuit.next?.reason}
         </button>
       )}
     </p>
