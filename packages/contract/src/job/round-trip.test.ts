@@ -1,5 +1,6 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { type Job, jobSchema } from '@farlug/solver/job';
+import { circuitsOf } from '@farlug/solver/judge';
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { randomJob } from '../../test/random-job.ts';
@@ -65,12 +66,35 @@ describe('job → rows → job', () => {
                 .map((load) => `load ${load.code}`),
             ].sort(),
           );
-        const inOrder = (lists: string[][]) => lists.map((list) => list.join()).sort();
         expect(inOrder(circuits)).toEqual(inOrder(pieces));
       }),
     );
   });
 });
+
+describe('pieces of branch runs', () => {
+  test('are the circuits that the solver judges', () => {
+    fc.assert(
+      fc.property(randomJob, (job) => {
+        const circuits = circuitsOf(job);
+        if ('kind' in circuits) return;
+        const pieces = branchPieces(job).map(({ runs, loads, starts }) => ({
+          runs: runs.map((i) => job.runs[i]!.id),
+          loads: loads.map((i) => job.loads[i]!.id),
+          begins: starts,
+        }));
+        expect(inOrder(pieces.map(sorted))).toEqual(inOrder(circuits.map(sorted)));
+      }),
+    );
+  });
+});
+
+const inOrder = (lists: string[][]) => lists.map((list) => list.join()).sort();
+const sorted = ({ runs, loads, begins }: { runs: string[]; loads: string[]; begins: string[] }) => [
+  `runs ${[...runs].sort().join(' ')}`,
+  `loads ${[...loads].sort().join(' ')}`,
+  `begins ${[...new Set(begins)].sort().join(' ')}`,
+];
 
 describe('fixtures', () => {
   const folder = new URL('../../../../fixtures/jobs/', import.meta.url);

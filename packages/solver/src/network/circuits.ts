@@ -16,7 +16,7 @@ export interface Circuit {
 export interface Circuits {
   list: Circuit[];
   ofLoad: Int32Array;
-  /** −1 for runs that are in none: feeders, services, open branch runs. */
+  /** −1 for runs that are in none: feeders and services. */
   ofRun: Int32Array;
 }
 
@@ -44,7 +44,8 @@ export function findCircuits(job: Job, buses: Buses, loads: readonly LoadModel[]
   const cut = cutBuses(job, buses);
   const { find, join } = disjointSets(job.runs.length);
   const firstAt = new Int32Array(buses.ids.length).fill(-1);
-  const inCircuit = (run: Job['runs'][number]) => run.kind === 'branch' && !run.open;
+  // An open run still shapes its circuit: closing it makes no new one.
+  const inCircuit = (run: Job['runs'][number]) => run.kind === 'branch';
   for (const [i, run] of job.runs.entries()) {
     if (!inCircuit(run)) continue;
     for (const id of [run.from, run.to]) {
