@@ -13,7 +13,7 @@ import { DialogPart, Further } from './further.tsx';
 import { type JobDialogProps, taken } from './job-dialog.ts';
 import { OnTheWay } from './on-the-way.tsx';
 import { feederOf, newPanelDraft, type PanelDraft, panelDraft, settlePanel } from './panel-draft.ts';
-import { RunFields, RunFurtherFields } from './run-fields.tsx';
+import { furtherWrong, RunFields, RunFurtherFields } from './run-fields.tsx';
 import { TypedInput } from './typed-input.tsx';
 
 interface PanelDialogProps extends JobDialogProps {
@@ -135,7 +135,7 @@ export function PanelDialog({ rows, apply, onClose, onAsk, panelId, feed, onDone
               />
             </DialogPart>
             {panel && <OnTheWay rows={rows} panelId={panel.id} onAsk={onAsk} />}
-            <Further title="More of the feeder" wrong={hasErrorIn(errors, 'run.')}>
+            <Further title="More of the feeder" wrong={furtherWrong(errors)}>
               <RunFurtherFields
                 texts={values.run}
                 errors={errors}
@@ -168,6 +168,3 @@ export function PanelDialog({ rows, apply, onClose, onAsk, panelId, feed, onDone
     </Dialog>
   );
 }
-
-const hasErrorIn = (errors: Readonly<Record<string, string>>, at: string): boolean =>
-  Object.keys(errors).some((field) => field.startsWith(at));

@@ -2,7 +2,6 @@ import type { Edit } from '@farlug/contract/edit';
 import type { JobRows, Row } from '@farlug/contract/rows';
 import {
   addPanelEdit,
-  changeCircuitFieldEdit,
   circuitParts,
   fieldText,
   panelTree,
@@ -13,6 +12,7 @@ import {
 } from '@farlug/contract/schedule';
 import { parseBreaker } from '@farlug/solver/units';
 import type { FieldErrors } from '../../../lib/form-errors.ts';
+import { typeBreaker } from './breaker-draft.ts';
 import { EditChain } from './edit-chain.ts';
 import { busOfFeed, type FeedValue, feedOf } from './feed-choices.ts';
 import { rowTexts } from './row-texts.ts';
@@ -119,7 +119,8 @@ export function settlePanel(rows: JobRows, panelId: string | null, draft: PanelD
   const old = panelId ? feedingCircuit(rows, panelId) : null;
   const moved = panelId !== null && busOfFeed(rows, feedValue(rows, panelId)) !== busOfFeed(rows, draft.feed);
   const stays = moved && old !== null && draft.breakerSpaces === fieldText(old, 'spaces');
-  typeBreaker(chain, id, stays ? { ...draft, breakerSpaces: '' } : draft);
+  const feeding = draft.feed.startsWith('panel:') ? feedingCircuit(chain.rows, id) : null;
+  if (feeding) typeBreaker(chain, feeding.circuit.id, stays ? { ...draft, breakerSpaces: '' } : draft);
   const feeder = feederOf(chain.rows, id);
   if (feeder && draft.feed !== '') typeRun(chain, feeder.id, draft.run, feederOf(rows, id) === null);
   const code = draft.code.trim();
@@ -155,23 +156,6 @@ function breakerOf({ breaker }: PanelDraft): { poles: 1 | 2 | 3; amps: string } 
   if (breaker.trim() === '') return null;
   const read = parseBreaker(breaker, 3);
   return read.ok ? { poles: read.poles, amps: String(read.amps) } : 'refused';
-}
-
-function typeBreaker(chain: EditChain, panelId: string, draft: PanelDraft): void {
-  const circuit = draft.feed.startsWith('panel:') ? feedingCircuit(chain.rows, panelId) : null;
-  if (circuit?.circuit.kind !== 'feeder') return;
-  const { id } = circuit.circuit;
-  const said = (word: string, change: ReturnType<typeof changeCircuitFieldEdit>) => ({
-    ...change,
-    problem: change.problem && `${word} ${change.problem}.`,
-  });
-  if (draft.breaker.trim() !== '')
-    chain.take('breaker', said('Breaker', changeCircuitFieldEdit(chain.rows, id, 'breaker', draft.breaker)));
-  if (draft.breakerSpaces.trim() !== '')
-    chain.take(
-      'breakerSpaces',
-      said('Spaces', changeCircuitFieldEdit(chain.rows, id, 'spaces', draft.breakerSpaces)),
-    );
 }
 
 /** A panel cannot be smaller than the spaces that its circuits take. */

@@ -182,3 +182,17 @@ const rated = (values: readonly string[], own: string) => [
     .filter((value) => value !== '')
     .map((value) => ({ value, label: `${value} °C` })),
 ];
+
+const FURTHER: readonly (keyof RunTexts)[] = [
+  'name',
+  'ambient',
+  'insulation',
+  'terminals',
+  'bundled',
+  'temperature',
+  'floorOverride',
+  'notes',
+];
+/** Whether a field that stands folded is wrong. */
+export const furtherWrong = (errors: Readonly<Record<string, string>>): boolean =>
+  FURTHER.some((field) => errors[`run.${field}`]);

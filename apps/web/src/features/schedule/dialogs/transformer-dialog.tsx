@@ -13,7 +13,7 @@ import { echoVolts } from './echoes.ts';
 import { busOfFeed, type FeedValue, feedChoices } from './feed-choices.ts';
 import { DialogPart, Further } from './further.tsx';
 import { type JobDialogProps, taken } from './job-dialog.ts';
-import { RunFields, RunFurtherFields } from './run-fields.tsx';
+import { furtherWrong, RunFields, RunFurtherFields } from './run-fields.tsx';
 import {
   followFeed,
   newTransformerDraft,
@@ -26,7 +26,7 @@ import {
 } from './transformer-draft.ts';
 import { TypedInput } from './typed-input.tsx';
 
-interface TransformerDialogProps extends JobDialogProps {
+interface TransformerDialogProps extends Omit<JobDialogProps, 'onAsk'> {
   /** Null adds one. */
   transformerId: string | null;
   feed: FeedValue;
@@ -41,14 +41,7 @@ const CONNECTION_WORDS: Record<TransformerConnection, string> = {
 };
 
 /** A transformer off its nameplate, and the run to its primary. */
-export function TransformerDialog({
-  rows,
-  apply,
-  onClose,
-  onAsk,
-  transformerId,
-  feed,
-}: TransformerDialogProps) {
+export function TransformerDialog({ rows, apply, onClose, transformerId, feed }: TransformerDialogProps) {
   const job = [...rows.job.values()][0]!;
   const row = rows.transformer.get(transformerId ?? '');
   const form = useForm<TransformerDraft>({
@@ -187,7 +180,7 @@ export function TransformerDialog({
                 onTexts={(run) => set('run', run)}
               />
             </DialogPart>
-            <Further title="More of the run" wrong={false}>
+            <Further title="More of the run" wrong={furtherWrong(errors)}>
               <RunFurtherFields
                 texts={values.run}
                 errors={errors}

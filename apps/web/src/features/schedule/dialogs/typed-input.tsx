@@ -16,7 +16,6 @@ interface TypedInputProps {
   required?: boolean;
   maxLength?: number;
   className?: string;
-  autoFocus?: boolean;
 }
 
 /** Text with its units as typed, and what was understood of it. */
