@@ -8,14 +8,16 @@ import { paths } from './paths.ts';
 const newerVersion = (error: unknown) =>
   error instanceof TypeError && /dynamically imported module|module script/i.test(error.message);
 
-/** A page that failed; the frame around it goes on. */
-export function RouteError() {
+/** A page that failed; the frame around it goes on, and then holds the page's landmark already. */
+export function RouteError({ framed = false }: { framed?: boolean }) {
   const error = useRouteError();
   usePageTitle('This page failed');
   if (isRouteErrorResponse(error) && error.status === 404) return <NotFound />;
+  const Around = framed ? 'div' : 'main';
   return (
-    <main id="main">
+    <Around {...(framed ? {} : { id: 'main' })}>
       <ErrorState
+        level="h1"
         title={newerVersion(error) ? 'A newer version is out' : 'This page failed'}
         actions={
           <>
@@ -28,6 +30,6 @@ export function RouteError() {
           ? 'Part of this page could not be fetched. Reloading gets the newest version; nothing saved is lost.'
           : 'Something went wrong in this page. What was saved is safe; reloading usually helps.'}
       </ErrorState>
-    </main>
+    </Around>
   );
 }

@@ -50,7 +50,7 @@ export const router = createBrowserRouter([
       {
         path: PATTERNS.firm,
         element: <FirmFrame />,
-        children: ofFirm.map((route) => ({ ...route, errorElement: <RouteError /> })),
+        children: ofFirm.map((route) => ({ ...route, errorElement: <RouteError framed /> })),
       },
       { path: '*', element: <NotFound /> },
     ],

@@ -8,18 +8,27 @@ interface ErrorStateProps {
   requestId?: string | null;
   onRetry?: () => void;
   actions?: ReactNode;
+  /** `h1` where it stands in place of a whole page. */
+  level?: 'h1' | 'h2';
 }
 
 /** A part of the page that could not be shown; the rest goes on. */
-export function ErrorState({ title, children, requestId, onRetry, actions }: ErrorStateProps) {
+export function ErrorState({
+  title,
+  children,
+  requestId,
+  onRetry,
+  actions,
+  level: Heading = 'h2',
+}: ErrorStateProps) {
   return (
     <section role="alert" className="max-w-160 px-4 py-8">
-      <h2 className="text-title">
+      <Heading className="text-title">
         <span aria-hidden="true" className="mr-2 text-over">
           ▲
         </span>
         {title}
-      </h2>
+      </Heading>
       {children && <div className="mt-2 text-ink-soft">{children}</div>}
       {requestId && <p className="mt-2 text-label text-ink-soft">Request {requestId}</p>}
       {(onRetry || actions) && (

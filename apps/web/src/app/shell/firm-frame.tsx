@@ -19,7 +19,7 @@ export function FirmFrame() {
   if (session.isError)
     return (
       <main id="main">
-        <ErrorState title="The server does not answer" onRetry={() => void session.refetch()}>
+        <ErrorState level="h1" title="The server does not answer" onRetry={() => void session.refetch()}>
           {session.error.message}
         </ErrorState>
       </main>

@@ -27,7 +27,11 @@ export function InvitationPage() {
   if (invitation.isError)
     return (
       <main id="main">
-        <ErrorState title="The invitation cannot be read now" onRetry={() => void invitation.refetch()}>
+        <ErrorState
+          level="h1"
+          title="The invitation cannot be read now"
+          onRetry={() => void invitation.refetch()}
+        >
           {invitation.error.message}
         </ErrorState>
       </main>

@@ -31,7 +31,11 @@ export function InspectionPage() {
       <LinkEnded />
     ) : (
       <main id="main">
-        <ErrorState title="The report cannot be opened now" onRetry={() => void inspection.refetch()}>
+        <ErrorState
+          level="h1"
+          title="The report cannot be opened now"
+          onRetry={() => void inspection.refetch()}
+        >
           {inspection.error.message}
         </ErrorState>
       </main>

@@ -35,7 +35,7 @@ export function OpenLinkPage() {
     return <LinkEnded />;
   return (
     <main id="main">
-      <ErrorState title="The report cannot be opened now">
+      <ErrorState level="h1" title="The report cannot be opened now">
         {refused.message} Then open the link of the message once more.
       </ErrorState>
     </main>
