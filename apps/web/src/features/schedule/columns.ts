@@ -1,3 +1,4 @@
+import type { Row } from '@farlug/contract/rows';
 import type { CircuitField, CircuitView } from '@farlug/contract/schedule';
 
 export interface GridColumn {
@@ -75,6 +76,13 @@ export const FIELD_COLUMNS: readonly GridColumn[] = [
 ];
 
 const MATERIAL_SHORT: Record<string, string> = { copper: 'Cu', aluminum: 'Al' };
+
+/** `2 × 3/0 Cu`: the same of a run. */
+export function runText(run: Row<'run'>): string {
+  if (run.size === null) return run.ohmsR === null ? 'no size yet' : 'impedance stated';
+  const plain = run.size.replace(/ AWG$/, '').replace(/mm2$/, 'mm²');
+  return `${run.sets > 1 ? `${run.sets} × ` : ''}${plain} ${MATERIAL_SHORT[run.material] ?? ''}`.trim();
+}
 
 /** `2 × 3/0 Cu`: how a wire is written in a narrow column. */
 export function wireText(circuit: CircuitView): string {

@@ -1,10 +1,10 @@
 import type { CircuitField, CircuitView } from '@farlug/contract/schedule';
 import { LOAD_CLASSES } from '@farlug/solver/job';
-import { useEffect, useRef, useState } from 'react';
 import { CLASS_WORDS } from '../../../lib/job-words.ts';
 import { Field } from '../../../ui/field.tsx';
 import { Select } from '../../../ui/select.tsx';
-import { TextInput } from '../../../ui/text-input.tsx';
+import { problemWords } from '../problem-words.ts';
+import { TypedField } from './typed-field.tsx';
 
 const FIELDS: readonly (readonly [CircuitField, string, string | null])[] = [
   ['description', 'Serves', null],
@@ -40,12 +40,15 @@ export function CircuitFieldsForm({ circuit, readOnly, onType }: FormProps) {
         <TypedField
           key={field}
           label={label}
-          hint={hint}
-          wide={field === 'description' || field === 'notes'}
+          hint={circuit.next?.field === field ? circuit.next.reason : hint}
+          className={field === 'description' || field === 'notes' ? 'col-span-2' : ''}
           text={circuit.fields[field].text}
-          missing={circuit.next?.field === field ? circuit.next.reason : null}
+          active={circuit.next?.field === field}
           readOnly={readOnly}
-          onTake={(text) => onType(field, text)}
+          onTake={(text) => {
+            const problem = onType(field, text);
+            return problem === null ? null : problemWords(label, problem);
+          }}
         />
       ))}
       <Field label="Class">
@@ -73,44 +76,5 @@ export function CircuitFieldsForm({ circuit, readOnly, onType }: FormProps) {
         />
       </Field>
     </div>
-  );
-}
-
-interface TypedFieldProps {
-  label: string;
-  hint: string | null;
-  wide: boolean;
-  text: string;
-  missing: string | null;
-  readOnly: boolean;
-  onTake: (text: string) => string | null;
-}
-
-/** Taken when it is left or Enter is pressed; what is not understood stays, with the reason. */
-function TypedField({ label, hint, wide, text, missing, readOnly, onTake }: TypedFieldProps) {
-  const [typed, setTyped] = useState(text);
-  const [problem, setProblem] = useState<string | null>(null);
-  const shown = useRef(text);
-  useEffect(() => {
-    if (shown.current === text) return;
-    shown.current = text;
-    setTyped(text);
-  }, [text]);
-  const take = () => {
-    if (typed !== text) setProblem(onTake(typed));
-  };
-  return (
-    <Field label={label} hint={missing ?? hint} error={problem} className={wide ? 'col-span-2' : ''}>
-      <TextInput
-        value={typed}
-        maxLength={400}
-        readOnly={readOnly}
-        onChange={(event) => setTyped(event.target.value)}
-        onBlur={take}
-        onKeyDown={(event) => {
-          if (event.key === 'Enter') take();
-        }}
-      />
-    </Field>
   );
 }

@@ -1,18 +1,19 @@
 import type { JobRows } from '@farlug/contract/rows';
-import type { CircuitField, CircuitView } from '@farlug/contract/schedule';
+import type { CircuitField, CircuitView, ScheduleChange } from '@farlug/contract/schedule';
 import { formatFixed, formatPercent, formatPercentAgainst } from '@farlug/solver/units';
 import type { ReactNode } from 'react';
 import { Button } from '../../../ui/button.tsx';
 import { KeyFigures } from '../../../ui/key-values.tsx';
-import { MissingBox } from '../../../ui/missing-box.tsx';
 import { SheetSection, SideSheet } from '../../../ui/side-sheet.tsx';
+import { DESK, useMedia } from '../../../ui/use-media.ts';
 import { VerdictSentence } from '../../../ui/verdict.tsx';
 import type { CircuitFigures, JobResult } from '../../../workers/results.ts';
 import { lineText, wireText } from '../columns.ts';
 import { forceSentence, verdictSentence } from '../verdict-words.ts';
 import { CircuitFieldsForm } from './circuit-fields-form.tsx';
-import { LoadsTable } from './loads-table.tsx';
+import { PartsSection } from './parts-section.tsx';
 import { VoltsPath } from './volts-path.tsx';
+import { WiringMenu } from './wiring-menu.tsx';
 
 interface CircuitSheetProps {
   rows: JobRows;
@@ -21,28 +22,50 @@ interface CircuitSheetProps {
   readOnly: boolean;
   onClose: () => void;
   onType: (field: CircuitField, text: string) => string | null;
+  /** What was wrong; null where it was taken. */
+  onApply: (change: ScheduleChange) => string | null;
   onDuplicate: () => void;
   onRemove: () => void;
-  /** Sizes side by side and the hand check of the circuit's runs. */
-  below: ReactNode;
+  /** The way to the next row that lacks something. */
+  next: ReactNode;
+  sizesFor: ((runRowId: string) => ReactNode) | undefined;
+  handCheckFor: ((runRowId: string) => ReactNode) | undefined;
   cautions: ReactNode;
 }
 
 /** What is known of the chosen circuit: sentence, picture, numbers, sizes, hand check, fields, cautions. */
 export function CircuitSheet(props: CircuitSheetProps) {
-  const { rows, circuit, result, readOnly, onClose, onType, below, cautions } = props;
+  const { rows, circuit, result, readOnly, onClose, onType, onApply, next, cautions } = props;
+  const desk = useMedia(DESK);
   const job = [...rows.job.values()][0]!;
   const figures = result?.circuits.get(circuit.id) ?? null;
   const leftOut = result?.leftOut.find((one) => one.circuitId === circuit.id) ?? null;
-  const { breaker, length, load } = circuit.fields;
-  const about = [
-    circuit.spaces.length > 0 ? `Space ${circuit.spaces.join(', ')} on ${lineText(circuit)}` : null,
-    breaker.text && `breaker ${breaker.text}`,
-    wireText(circuit) &&
-      `${wireText(circuit)}${circuit.fields.raceway.text ? ` in ${circuit.fields.raceway.text}` : ''}`,
-    length.text && `${length.text}${length.assumed ? ', assumed' : ''}`,
-    load.text && `${load.text}${load.assumed ? ', assumed' : ''}`,
-  ].filter(Boolean);
+  const [run] = circuit.runs;
+  const below = run && (
+    <>
+      {props.sizesFor?.(run.id)}
+      {props.handCheckFor?.(run.id)}
+    </>
+  );
+  const fields = (
+    <>
+      <SheetSection title="Fields">
+        <CircuitFieldsForm circuit={circuit} readOnly={readOnly} onType={onType} />
+      </SheetSection>
+      {!readOnly && (
+        <SheetSection>
+          <div className="flex flex-wrap items-center gap-2">
+            <Button onClick={props.onDuplicate}>Duplicate</Button>
+            <WiringMenu rows={rows} circuit={circuit} onApply={onApply} />
+            <Button look="danger" onClick={props.onRemove}>
+              Delete
+            </Button>
+          </div>
+          {next && <p className="mt-2">{next}</p>}
+        </SheetSection>
+      )}
+    </>
+  );
   return (
     <SideSheet
       title={
@@ -50,7 +73,7 @@ export function CircuitSheet(props: CircuitSheetProps) {
           {circuit.code} <span className="font-normal">{circuit.fields.description.text}</span>
         </>
       }
-      subtitle={about.join('. ')}
+      subtitle={aboutCircuit(circuit)}
       onClose={onClose}
     >
       {leftOut && (
@@ -58,30 +81,34 @@ export function CircuitSheet(props: CircuitSheetProps) {
           <VerdictSentence kind="unjudged" lead="Left out of the results.">
             {leftOut.reason}
           </VerdictSentence>
-          {circuit.next && <MissingBox what={circuit.next.field ?? 'a value'} />}
         </SheetSection>
       )}
       {figures && !leftOut && <Figures figures={figures} job={job} counted={job} />}
-      {figures && figures.loads.length > 1 && (
-        <SheetSection title="Its loads, each at its worst">
-          <LoadsTable loads={figures.loads} />
-        </SheetSection>
+      {!desk && fields}
+      {(circuit.loads.length > 1 || circuit.runs.length > 1) && (
+        <PartsSection rows={rows} circuit={circuit} result={result} readOnly={readOnly} onApply={onApply} />
       )}
       {below}
-      <SheetSection title="Fields">
-        <CircuitFieldsForm circuit={circuit} readOnly={readOnly} onType={onType} />
-        {!readOnly && (
-          <div className="mt-3 flex gap-2">
-            <Button onClick={props.onDuplicate}>Duplicate</Button>
-            <Button look="danger" onClick={props.onRemove}>
-              Delete
-            </Button>
-          </div>
-        )}
-      </SheetSection>
+      {desk && fields}
       <SheetSection>{cautions}</SheetSection>
     </SideSheet>
   );
+}
+
+/** `Space 27 on L2. Breaker 20. 10 Cu in EMT. 118 ft, measured`. */
+function aboutCircuit(circuit: CircuitView): string {
+  const { breaker, length, load, raceway } = circuit.fields;
+  const wire = wireText(circuit);
+  const state = circuit.runs[0]?.lengthState ?? null;
+  return [
+    circuit.spaces.length > 0 ? `Space ${circuit.spaces.join(', ')} on ${lineText(circuit)}` : null,
+    breaker.text && `breaker ${breaker.text}`,
+    wire && `${wire}${raceway.text ? ` in ${raceway.text}` : ''}`,
+    length.text && `${length.text}${state ? `, ${state}` : ''}`,
+    load.text && `${load.text}${load.assumed ? ', assumed' : ''}`,
+  ]
+    .filter(Boolean)
+    .join('. ');
 }
 
 interface FiguresProps {

@@ -1,44 +1,77 @@
+import type { JobRows } from '@farlug/contract/rows';
 import type { PanelView } from '@farlug/contract/schedule';
-import { formatPercentAgainst } from '@farlug/solver/units';
+import { formatPercent } from '@farlug/solver/units';
 import type { ReactNode } from 'react';
-import { Verdict } from '../../../ui/verdict.tsx';
+import { Link } from 'react-router-dom';
+import { MissingBox } from '../../../ui/missing-box.tsx';
+import { PageHeading } from '../../../ui/page-heading.tsx';
+import { VerdictFigure } from '../../../ui/verdict.tsx';
 import type { JobResult } from '../../../workers/results.ts';
+import { runText } from '../columns.ts';
 
 interface PanelHeadProps {
+  rows: JobRows;
   panel: PanelView;
   result: JobResult | null;
-  feederLimit: number | null;
+  /** The address of a circuit, where the panel's feeder is one. */
+  to: (circuitId: string) => string;
+  /** On a phone: the choice of another panel, in place of the name. */
+  chooser: ReactNode;
   actions: ReactNode;
 }
 
-/** A panel's name, what feeds it, and how its feeder stands at design demand. */
-export function PanelHead({ panel, result, feederLimit, actions }: PanelHeadProps) {
-  const figures = result?.panels.get(panel.id) ?? null;
-  const main = panel.panel.mainAmps;
+/** A panel's name, its supply and feeder, and what the feeder drops. */
+export function PanelHead({ rows, panel, result, to, chooser, actions }: PanelHeadProps) {
+  const { panel: row, bus, system, fedFrom, fedFromText } = panel;
+  const place = [row.building, row.area].filter(Boolean).join(', ');
   const about = [
-    panel.system ?? 'not fed yet',
-    panel.fedFromText && `fed from ${panel.fedFromText}`,
-    main && `main ${Number(main)} A`,
-    `${panel.panel.spaces} spaces`,
-    panel.panel.area ?? panel.panel.building,
+    place,
+    system ?? 'no supply yet',
+    `${row.spaces} spaces`,
+    row.mainAmps ? `${row.mainAmps} A main` : null,
   ].filter(Boolean);
   return (
-    <header className="flex flex-none flex-wrap items-center gap-x-4 gap-y-2 px-4 py-2.5">
-      <div className="min-w-0">
-        <h1 className="text-title">
-          <b>{panel.code}</b> {panel.bus.name}
-        </h1>
-        <p className="text-grid text-ink-soft">
-          {about.join(', ')}
-          {figures && figures.feederPercent !== null && (
+    <PageHeading
+      title={chooser ?? panel.code}
+      aside={bus.name}
+      actions={actions}
+      detail={
+        <>
+          {about.join(', ')},{' '}
+          {fedFrom === null ? (
+            'fed from nothing yet'
+          ) : (
             <>
-              {'. Feeder part '}
-              {formatPercentAgainst(figures.feederPercent, feederLimit)} <Verdict kind={figures.shown} />
+              fed from{' '}
+              {fedFrom.circuitId === null ? (
+                fedFromText
+              ) : (
+                <Link to={to(fedFrom.circuitId)}>{fedFromText}</Link>
+              )}{' '}
+              <Feeder rows={rows} runIds={fedFrom.runIds} />
             </>
           )}
-        </p>
-      </div>
-      <div className="flex flex-wrap items-center gap-2 desk:ml-auto">{actions}</div>
-    </header>
+          <FeederPart panel={panel} result={result} />
+        </>
+      }
+    />
   );
+}
+
+function Feeder({ rows, runIds }: { rows: JobRows; runIds: readonly string[] }) {
+  const run = rows.run.get(runIds.at(-1) ?? '');
+  if (!run) return null;
+  return (
+    <>
+      by {run.code}: {runText(run)}, {run.length ?? <MissingBox what="length" />}
+    </>
+  );
+}
+
+function FeederPart({ panel, result }: Pick<PanelHeadProps, 'panel' | 'result'>) {
+  const figures = result?.panels.get(panel.id);
+  if (!figures || figures.feederPercent === null) return null;
+  const text = formatPercent(figures.feederPercent, 2);
+  const missed = figures.shown === 'over' || figures.shown === 'rise';
+  return <>. Feeder part {missed ? <VerdictFigure kind={figures.shown}>{text}</VerdictFigure> : text}</>;
 }

@@ -1,11 +1,13 @@
-import type { CircuitField, CircuitView } from '@farlug/contract/schedule';
-import { type KeyboardEvent, useEffect, useRef, useState } from 'react';
+import { type ClipboardEvent, type KeyboardEvent, useEffect, useRef, useState } from 'react';
 import { cx } from '../../../ui/cx.ts';
 import { Scroller } from '../../../ui/scroller.tsx';
-import { type GridColumn, rowName } from '../columns.ts';
+import type { GridColumn } from '../columns.ts';
+import { placeBlock, readBlock, type TypedCell } from '../grid-block.ts';
 import { moveBy } from '../grid-moves.ts';
+import { problemWords } from '../problem-words.ts';
 import { CellEditor } from './cell-editor.tsx';
 import { type CellContext, CircuitCell } from './circuit-cell.tsx';
+import { GridCell } from './grid-cell.tsx';
 
 interface ScheduleGridProps {
   label: string;
@@ -13,12 +15,14 @@ interface ScheduleGridProps {
   rows: readonly CellContext[];
   chosenId: string | null;
   readOnly: boolean;
+  /** A cell that takes the focus when the grid appears. */
+  initial?: { circuitId: string; field: string | null } | null;
   onChoose: (circuitId: string) => void;
-  onType: (circuitId: string, field: CircuitField, text: string) => string | null;
+  /** Takes what was typed into cells, as one step; what was not understood comes back in words. */
+  onType: (cells: readonly TypedCell[]) => string | null;
+  onAdd: () => void;
   onDuplicate: (circuitId: string) => void;
   onRemove: (circuitId: string) => void;
-  onUndo: () => void;
-  onRedo: () => void;
 }
 
 interface Place {
@@ -31,39 +35,46 @@ interface Place {
  * opens it, Esc leaves it as it was, Tab and Enter take what was typed and go on.
  */
 export function ScheduleGrid(props: ScheduleGridProps) {
-  const { label, columns, rows, chosenId, readOnly, onChoose, onType } = props;
-  const [at, setAt] = useState<Place>({ row: 0, column: 0 });
+  const { label, columns, rows, chosenId, readOnly, initial, onChoose, onType } = props;
+  const [at, setAt] = useState<Place>(() => placeOf(initial, rows, columns));
   const [editing, setEditing] = useState<{ text: string; caret: 'all' | 'end' } | null>(null);
   const [problem, setProblem] = useState<{ id: string; key: string; text: string } | null>(null);
   const table = useRef<HTMLTableElement>(null);
-  const wantsFocus = useRef(false);
+  const wantsFocus = useRef(Boolean(initial));
   const row = Math.min(at.row, Math.max(rows.length - 1, 0));
   const column = Math.min(at.column, columns.length - 1);
+  const circuit = rows[row]?.circuit;
+  const field = columns[column]!.field;
 
   // The focus follows the place only after a key or a click in the grid: a result that arrives moves nothing.
   useEffect(() => {
     if (!wantsFocus.current || editing) return;
     wantsFocus.current = false;
     const cell = table.current?.querySelector<HTMLElement>(`[data-cell="${row}:${column}"]`);
-    cell?.focus();
+    cell?.focus({ preventScroll: true });
     cell?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
   });
 
   const go = (place: Place) => {
     wantsFocus.current = true;
     setAt(place);
+    const next = rows[place.row]?.circuit.id;
+    if (chosenId !== null && next !== undefined && next !== chosenId) onChoose(next);
   };
   const open = (text: string | null) => {
-    const field = columns[column]!.field;
-    const circuit = rows[row]?.circuit;
     if (!field || !circuit || readOnly) return;
     setEditing(text === null ? { text: circuit.fields[field].text, caret: 'all' } : { text, caret: 'end' });
   };
+  const type = (cells: readonly TypedCell[]) => {
+    const [first] = cells;
+    if (!first || readOnly) return;
+    const refused = onType(cells);
+    const { key, label: word } = columns[column]!;
+    setProblem(refused === null ? null : { id: first.circuitId, key, text: problemWords(word, refused) });
+  };
+  const typeHere = (text: string) => circuit && field && type([{ circuitId: circuit.id, field, text }]);
   const take = (text: string, then: Place) => {
-    const field = columns[column]!.field!;
-    const { id } = rows[row]!.circuit;
-    const refused = onType(id, field, text);
-    setProblem(refused === null ? null : { id, key: columns[column]!.key, text: refused });
+    if (text !== circuit?.fields[field!].text) typeHere(text);
     setEditing(null);
     go(then);
   };
@@ -71,45 +82,59 @@ export function ScheduleGrid(props: ScheduleGridProps) {
     setEditing(null);
     go({ row, column });
   };
+  const fillDown = () => {
+    const above = rows[row - 1]?.circuit;
+    if (above && field) typeHere(above.fields[field].text);
+  };
 
   const onKey = (event: KeyboardEvent) => {
     if (editing) return;
-    const circuit = rows[row]?.circuit;
     const command = event.ctrlKey || event.metaKey;
+    const key = command ? event.key.toLowerCase() : event.key;
     const moved = moveBy(event, { row, column }, rows.length, columns.length);
     if (moved) go(moved);
-    else if (command && event.key.toLowerCase() === 'z') (event.shiftKey ? props.onRedo : props.onUndo)();
-    else if (command && event.key.toLowerCase() === 'y') props.onRedo();
-    else if (command && event.key.toLowerCase() === 'd' && circuit && !readOnly)
-      props.onDuplicate(circuit.id);
-    else if (event.key === 'Enter' || event.key === 'F2') open(null);
-    else if (event.key === ' ' && circuit) onChoose(circuit.id);
-    else if (event.key === 'Delete' && event.shiftKey && circuit && !readOnly) props.onRemove(circuit.id);
-    else if (
-      (event.key === 'Delete' || event.key === 'Backspace') &&
-      columns[column]!.field &&
-      circuit &&
-      !readOnly
-    )
-      take('', { row, column });
-    else if (event.key.length === 1 && !command && !event.altKey && event.key !== '?') open(event.key);
+    else if (command && key === 'd' && event.shiftKey) circuit && !readOnly && props.onDuplicate(circuit.id);
+    else if (command && key === 'd') fillDown();
+    else if (key === 'Enter' || key === 'F2') open(null);
+    else if (key === ' ') circuit && onChoose(circuit.id);
+    else if (key === 'Insert') !readOnly && props.onAdd();
+    else if (key === 'Delete' && event.shiftKey) circuit && !readOnly && props.onRemove(circuit.id);
+    else if (key === 'Delete' || key === 'Backspace') typeHere('');
+    else if (key.length === 1 && !command && !event.altKey && key !== '?') open(key);
     else return;
     event.preventDefault();
+  };
+
+  const onCopy = (event: ClipboardEvent) => {
+    if (editing || !circuit || !field) return;
+    event.clipboardData.setData('text/plain', circuit.fields[field].text);
+    event.preventDefault();
+    if (event.type === 'cut') typeHere('');
+  };
+  const onPaste = (event: ClipboardEvent) => {
+    if (editing) return;
+    event.preventDefault();
+    const block = readBlock(event.clipboardData.getData('text/plain'));
+    const ids = rows.map((one) => one.circuit.id);
+    type(placeBlock(block, { row, column }, ids, columns));
   };
 
   return (
     <Scroller
       label={`${label}, scrolls`}
-      className="min-h-0 flex-1 overflow-auto border-t border-ink bg-sheet"
+      className="min-h-0 flex-1 scroll-pt-8 overflow-auto border-t border-ink bg-sheet"
     >
       <table
         ref={table}
-        // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: the ARIA grid pattern on a table
+        // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: the grid pattern on a real table
         role="grid"
         aria-label={label}
         aria-rowcount={rows.length + 1}
         aria-readonly={readOnly || undefined}
         onKeyDown={onKey}
+        onCopy={onCopy}
+        onCut={onCopy}
+        onPaste={onPaste}
         className="w-full border-collapse text-grid"
       >
         <thead className="sticky top-0 z-10 bg-sheet">
@@ -136,23 +161,20 @@ export function ScheduleGrid(props: ScheduleGridProps) {
               className={cx(
                 'h-7',
                 cell.circuit.id === chosenId &&
-                  'bg-wash [&>:first-child]:border-l-3 [&>:first-child]:border-l-copper',
+                  'bg-wash [&>:first-child]:shadow-[inset_3px_0_0_var(--copper)]',
               )}
             >
               {columns.map((one, c) => {
                 const here = r === row && c === column;
-                const wrong =
-                  problem?.id === cell.circuit.id && problem.key === one.key ? problem.text : null;
                 return (
                   <GridCell
                     key={one.key}
                     column={one}
                     place={`${r}:${c}`}
                     here={here}
-                    wrong={wrong}
-                    name={one.key === 'description' ? undefined : `${one.label}, ${rowName(cell.circuit)}`}
+                    wrong={problem?.id === cell.circuit.id && problem.key === one.key ? problem.text : null}
                     onClick={() => {
-                      if (!here) setEditing(null);
+                      if (here && editing) return;
                       go({ row: r, column: c });
                       onChoose(cell.circuit.id);
                     }}
@@ -188,43 +210,12 @@ export function ScheduleGrid(props: ScheduleGridProps) {
 
 const clamp = (value: number, count: number) => Math.min(Math.max(value, 0), count - 1);
 
-interface GridCellProps {
-  column: GridColumn;
-  place: string;
-  here: boolean;
-  wrong: string | null;
-  name: string | undefined;
-  onClick: () => void;
-  onDoubleClick: () => void;
-  children: React.ReactNode;
+function placeOf(
+  wanted: ScheduleGridProps['initial'],
+  rows: readonly CellContext[],
+  columns: readonly GridColumn[],
+): Place {
+  const row = rows.findIndex(({ circuit }) => circuit.id === wanted?.circuitId);
+  const column = columns.findIndex((one) => one.field !== null && one.field === wanted?.field);
+  return { row: Math.max(row, 0), column: Math.max(column, 0) };
 }
-
-function GridCell({ column, place, here, wrong, onClick, onDoubleClick, children }: GridCellProps) {
-  return (
-    // biome-ignore lint/a11y/useKeyWithClickEvents: the grid handles the keys of its cells
-    <td
-      // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: a cell of a table that is an ARIA grid
-      role="gridcell"
-      data-cell={place}
-      tabIndex={here ? 0 : -1}
-      aria-readonly={column.field === null || undefined}
-      onClick={onClick}
-      onDoubleClick={onDoubleClick}
-      className={cx(
-        'relative border-b border-hair px-1.5 py-0.5 align-baseline -outline-offset-2 first:pl-4 last:pr-4',
-        column.width,
-        column.numeric && 'text-right whitespace-nowrap',
-        column.key === 'line' && 'whitespace-nowrap',
-      )}
-    >
-      {children}
-      {wrong && (
-        <span role="alert" className="block text-left text-label whitespace-normal text-over">
-          {wrong}
-        </span>
-      )}
-    </td>
-  );
-}
-
-export type { CircuitView };

@@ -1,8 +1,11 @@
 import { digitsAgainst, formatFixed } from '@farlug/solver/units';
+import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
 import { DropBar } from '../../../ui/drop-bar.tsx';
 import { EmptyState } from '../../../ui/empty-state.tsx';
+import { PageHeading } from '../../../ui/page-heading.tsx';
 import { Scroller } from '../../../ui/scroller.tsx';
+import { Segmented } from '../../../ui/segmented.tsx';
 import { RowHead, Table, Td, Th } from '../../../ui/table.tsx';
 import { Verdict } from '../../../ui/verdict.tsx';
 import type { JobResult, LoadFigures, RunFigures } from '../../../workers/results.ts';
@@ -13,27 +16,52 @@ interface WorstFirstProps {
   what: 'loads' | 'runs';
   result: JobResult | null;
   schedule: JobSchedule;
+  actions: ReactNode;
+  onWhat: (what: 'loads' | 'runs') => void;
   /** The address that shows a circuit beside its panel. */
   to: (circuitId: string) => string;
 }
 
+const CHOICES = [
+  { value: 'loads', label: 'Loads' },
+  { value: 'runs', label: 'Runs' },
+] as const;
+
 /** Every load, or every run, of the job with its figures and reasons, the worst at the top. */
-export function WorstFirst({ what, result, schedule, to }: WorstFirstProps) {
-  if (!result || (result.loads.size === 0 && result.runs.size === 0))
-    return (
-      <EmptyState title="Nothing computed yet">Rows with a length, a size and a load appear here.</EmptyState>
-    );
+export function WorstFirst({ what, result, schedule, actions, onWhat, to }: WorstFirstProps) {
+  const empty = !result || (result.loads.size === 0 && result.runs.size === 0);
   return (
-    <Scroller
-      label="Worst first, scrolls"
-      className="min-h-0 flex-1 overflow-auto border-t border-ink bg-sheet"
-    >
-      {what === 'loads' ? (
-        <Loads loads={loadsWorstFirst(result)} schedule={schedule} to={to} />
+    <>
+      <PageHeading
+        title="Worst first"
+        aside="the whole job"
+        detail="A load is judged by its own worst turn; a run by what lies beyond it."
+        actions={
+          <>
+            <Segmented label="Loads or runs" value={what} onValue={onWhat} choices={CHOICES} />
+            {actions}
+          </>
+        }
+      />
+      {empty ? (
+        <div className="min-h-0 flex-1 border-t border-ink bg-sheet">
+          <EmptyState title="Nothing computed yet">
+            Rows with a length, a size and a load appear here.
+          </EmptyState>
+        </div>
       ) : (
-        <Runs runs={runsWorstFirst(result)} schedule={schedule} to={to} />
+        <Scroller
+          label="Worst first, scrolls"
+          className="min-h-0 flex-1 overflow-auto border-t border-ink bg-sheet"
+        >
+          {what === 'loads' ? (
+            <Loads loads={loadsWorstFirst(result)} schedule={schedule} to={to} />
+          ) : (
+            <Runs runs={runsWorstFirst(result)} schedule={schedule} to={to} />
+          )}
+        </Scroller>
       )}
-    </Scroller>
+    </>
   );
 }
 
@@ -55,7 +83,7 @@ function Name({
 
 function Loads({ loads, schedule, to }: PartProps & { loads: readonly LoadFigures[] }) {
   return (
-    <Table caption="Loads, worst first">
+    <Table caption="Loads, worst first" stacked>
       <thead>
         <tr>
           <Th>Load</Th>
@@ -79,8 +107,10 @@ function Loads({ loads, schedule, to }: PartProps & { loads: readonly LoadFigure
             <Td>
               <Verdict kind={load.shown} />
             </Td>
-            <Td numeric>{percent(load.totalPercent, load.limitPercent)}</Td>
-            <Td className="w-24">
+            <Td numeric label="Total %">
+              {percent(load.totalPercent, load.limitPercent)}
+            </Td>
+            <Td className="w-24" label="Drop">
               {load.feederPercent !== null && load.branchPercent !== null && (
                 <DropBar
                   feederPercent={load.feederPercent}
@@ -89,11 +119,19 @@ function Loads({ loads, schedule, to }: PartProps & { loads: readonly LoadFigure
                 />
               )}
             </Td>
-            <Td numeric>{percent(load.feederPercent)}</Td>
-            <Td numeric>{percent(load.branchPercent)}</Td>
-            <Td numeric>{load.volts === null ? '' : formatFixed(load.volts, 1)}</Td>
-            <Td numeric>{load.dropVolts === null ? '' : formatFixed(load.dropVolts, 2)}</Td>
-            <Td>{load.reasons.join(', ')}</Td>
+            <Td numeric label="Feeder %">
+              {percent(load.feederPercent)}
+            </Td>
+            <Td numeric label="Branch %">
+              {percent(load.branchPercent)}
+            </Td>
+            <Td numeric label="Volts">
+              {load.volts === null ? '' : formatFixed(load.volts, 1)}
+            </Td>
+            <Td numeric label="Drop V">
+              {load.dropVolts === null ? '' : formatFixed(load.dropVolts, 2)}
+            </Td>
+            <Td label="Reasons">{load.reasons.join(', ')}</Td>
           </tr>
         ))}
       </tbody>
@@ -103,14 +141,14 @@ function Loads({ loads, schedule, to }: PartProps & { loads: readonly LoadFigure
 
 function Runs({ runs, schedule, to }: PartProps & { runs: readonly RunFigures[] }) {
   return (
-    <Table caption="Runs, worst first">
+    <Table caption="Runs, worst first" stacked>
       <thead>
         <tr>
           <Th>Run</Th>
           <Th>Verdict</Th>
           <Th numeric>Drop %</Th>
           <Th numeric>Drop V</Th>
-          <Th numeric>Amps, L1 L2 L3 N</Th>
+          <Th numeric>Amps</Th>
           <Th numeric>Loss W</Th>
         </tr>
       </thead>
@@ -128,16 +166,23 @@ function Runs({ runs, schedule, to }: PartProps & { runs: readonly RunFigures[] 
             <Td>
               <Verdict kind={run.shown} />
             </Td>
-            <Td numeric>{percent(run.dropPercent)}</Td>
-            <Td numeric>{run.dropVolts === null ? '' : formatFixed(run.dropVolts, 2)}</Td>
-            <Td numeric>
-              {run.amps === null
-                ? ''
-                : Object.values(run.amps)
-                    .map((amps) => formatFixed(amps, 1))
-                    .join('  ')}
+            <Td numeric label="Drop %">
+              {percent(run.dropPercent)}
             </Td>
-            <Td numeric>{run.lossWatts === null ? '' : formatFixed(run.lossWatts, 1)}</Td>
+            <Td numeric label="Drop V">
+              {run.dropVolts === null ? '' : formatFixed(run.dropVolts, 2)}
+            </Td>
+            <Td numeric label="Amps">
+              {Object.entries(run.amps ?? {}).map(([line, amps]) => (
+                <span key={line} className="ml-3 first:ml-0">
+                  <span className="text-label text-ink-soft">{line} </span>
+                  {formatFixed(amps, 1)}
+                </span>
+              ))}
+            </Td>
+            <Td numeric label="Loss W">
+              {run.lossWatts === null ? '' : formatFixed(run.lossWatts, 1)}
+            </Td>
           </tr>
         ))}
       </tbody>

@@ -1,37 +1,26 @@
 import { reportVerdict } from '@farlug/contract/routes';
-import { useQueryClient } from '@tanstack/react-query';
-import { useEffect } from 'react';
+import { useEffect, useRef } from 'react';
 import { useOpenJob, useReplica } from '../../../job/open-job.tsx';
 import { useResult } from '../../../job/use-result.ts';
-import { ask } from '../../../lib/call.ts';
+import { call } from '../../../lib/call.ts';
+import { verdictOf } from '../verdict-of-result.ts';
 
 const SETTLED_MS = 1_500;
 
 /** Tells the job list what the default scenario says of the job as it is saved, once things have come to rest. */
 export function useReportVerdict(): void {
   const { firm, job, archived } = useOpenJob();
-  const { settled, headSeq } = useReplica();
+  const { headSeq, settled } = useReplica();
   const { result, solving } = useResult();
-  const client = useQueryClient();
+  const told = useRef<string | null>(null);
+  const verdict = settled && !solving && !archived && result ? verdictOf(result, headSeq) : null;
+  const text = verdict && JSON.stringify(verdict);
   useEffect(() => {
-    if (archived || !settled || solving || result?.state !== 'solved' || result.scenario !== 'each-circuit')
-      return;
-    const { counts, worst, solverVersion, leftOutCount } = result;
-    const timer = setTimeout(() => {
-      const body = {
-        atSeq: headSeq,
-        solverVersion,
-        worstPercent: worst?.worst.totalPercent ?? null,
-        over: counts.over + counts.rise,
-        near: counts.near,
-        within: counts.within,
-        leftOut: leftOutCount,
-      };
-      ask(reportVerdict, { params: { firm, job }, body }).then(
-        () => client.invalidateQueries({ queryKey: ['jobs', firm] }),
-        () => {}, // The list shows the verdict as out of date until the next one arrives.
-      );
+    if (text === null || told.current === text) return;
+    const timer = setTimeout(async () => {
+      const sent = await call(reportVerdict, { params: { firm, job }, body: JSON.parse(text) });
+      if (sent.ok) told.current = text;
     }, SETTLED_MS);
     return () => clearTimeout(timer);
-  }, [firm, job, archived, settled, headSeq, result, solving, client]);
+  }, [firm, job, text]);
 }

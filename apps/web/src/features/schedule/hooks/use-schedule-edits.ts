@@ -9,6 +9,8 @@ import {
 } from '@farlug/contract/schedule';
 import { useMemo } from 'react';
 import { useOpenJob } from '../../../job/open-job.tsx';
+import type { TypedCell } from '../grid-block.ts';
+import { typeCellsEdit } from '../type-cells.ts';
 
 /** What was understood, or why not; text that was not understood is kept in its cell. */
 export interface Typed {
@@ -17,6 +19,8 @@ export interface Typed {
 
 export interface ScheduleEdits {
   type(circuitId: string, field: CircuitField, text: string): Typed;
+  /** Several cells as one step. */
+  typeCells(cells: readonly TypedCell[]): Typed;
   add(panelId: string, given?: NewCircuit): { id: string | null; problem: string | null };
   duplicate(circuitId: string): { id: string | null; problem: string | null };
   remove(circuitId: string): Typed;
@@ -42,6 +46,10 @@ export function useScheduleEdits(): ScheduleEdits {
       apply,
       type(circuitId, field, text) {
         const change = changeCircuitFieldEdit(rows(), circuitId, field, text);
+        return apply(change.edit, change.problem);
+      },
+      typeCells(cells) {
+        const change = typeCellsEdit(rows(), cells);
         return apply(change.edit, change.problem);
       },
       add(panelId, given) {
