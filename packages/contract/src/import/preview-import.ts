@@ -76,7 +76,7 @@ export function previewImport(
   if (defaults.receptacles > 0)
     problems.push(
       remark(
-        `${defaults.receptacles} receptacle circuits are judged at 80 % of their breaker (common practice, assumed); what the sheet states counts upstream.`,
+        `${defaults.receptacles === 1 ? '1 receptacle circuit is judged at 80 % of its' : `${defaults.receptacles} receptacle circuits are judged at 80 % of their`} breaker (common practice, assumed); what the sheet states counts upstream.`,
       ),
     );
   if (circuits.length === 0 && !problems.some((problem) => problem.severity === 'error'))

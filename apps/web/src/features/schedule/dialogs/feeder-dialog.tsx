@@ -3,13 +3,14 @@ import { useMemo } from 'react';
 import { useForm } from '../../../lib/use-form.ts';
 import { Dialog } from '../../../ui/dialog.tsx';
 import { Field } from '../../../ui/field.tsx';
-import { Form } from '../../../ui/form.tsx';
+
 import { Select } from '../../../ui/select.tsx';
 import { DeleteOrLeave } from './delete-or-leave.tsx';
+import { DialogForm } from './dialog-form.tsx';
+import { DialogPart, Further } from './dialog-part.tsx';
 import { echoBreaker } from './echoes.ts';
 import { type FeedValue, feedChoices } from './feed-choices.ts';
 import { type FeederDraft, feederDraft, newFeederDraft, settleFeeder } from './feeder-draft.ts';
-import { DialogPart, Further } from './further.tsx';
 import { type JobDialogProps, taken } from './job-dialog.ts';
 import { furtherWrong, RunFields, RunFurtherFields } from './run-fields.tsx';
 import { TypedInput } from './typed-input.tsx';
@@ -59,7 +60,7 @@ export function FeederDialog({ rows, apply, onClose, runId, feed }: FeederDialog
           : 'Between two points that stand already: a second feeder, a tie, the closing of a ring. A panel brings its own feeder.'
       }
     >
-      <Form
+      <DialogForm
         label={title}
         onSubmit={form.onSubmit}
         error={form.formError}
@@ -132,7 +133,7 @@ export function FeederDialog({ rows, apply, onClose, runId, feed }: FeederDialog
         <Further title="Insulation, ambient, protection, notes" wrong={furtherWrong(errors)}>
           <RunFurtherFields {...fields} />
         </Further>
-      </Form>
+      </DialogForm>
     </Dialog>
   );
 }

@@ -4,12 +4,13 @@ import { useForm } from '../../../lib/use-form.ts';
 import { Button } from '../../../ui/button.tsx';
 import { Dialog } from '../../../ui/dialog.tsx';
 import { Field } from '../../../ui/field.tsx';
-import { Form } from '../../../ui/form.tsx';
+
 import { Message } from '../../../ui/message.tsx';
 import { Select } from '../../../ui/select.tsx';
+import { DialogForm } from './dialog-form.tsx';
+import { DialogPart, Further } from './dialog-part.tsx';
 import { echoAmps, echoBreaker } from './echoes.ts';
 import { type FeedValue, feedChoices } from './feed-choices.ts';
-import { DialogPart, Further } from './further.tsx';
 import { type JobDialogProps, taken } from './job-dialog.ts';
 import { OnTheWay } from './on-the-way.tsx';
 import { feederOf, newPanelDraft, type PanelDraft, panelDraft, settlePanel } from './panel-draft.ts';
@@ -67,7 +68,7 @@ export function PanelDialog({ rows, apply, onClose, onAsk, panelId, feed, onDone
   const title = panel ? `Panel ${rows.bus.get(panel.busId)!.code}` : 'Add a panel';
   return (
     <Dialog open wide onOpenChange={(open) => !open && onClose()} title={title}>
-      <Form
+      <DialogForm
         label={title}
         onSubmit={form.onSubmit}
         error={form.formError}
@@ -164,7 +165,7 @@ export function PanelDialog({ rows, apply, onClose, onAsk, panelId, feed, onDone
           {text('mounting', 'Mounting', 'Surface, flush.')}
           {text('notes', 'Notes', null, { maxLength: 4000 })}
         </Further>
-      </Form>
+      </DialogForm>
     </Dialog>
   );
 }

@@ -6,12 +6,13 @@ import { Button } from '../../../ui/button.tsx';
 import { Checkbox } from '../../../ui/checkbox.tsx';
 import { Dialog } from '../../../ui/dialog.tsx';
 import { Field } from '../../../ui/field.tsx';
-import { Form } from '../../../ui/form.tsx';
+
 import { Segmented } from '../../../ui/segmented.tsx';
 import { Select } from '../../../ui/select.tsx';
+import { DialogForm } from './dialog-form.tsx';
+import { DialogPart } from './dialog-part.tsx';
 import { echoAmps, echoVolts } from './echoes.ts';
 import { feedChoices } from './feed-choices.ts';
-import { DialogPart } from './further.tsx';
 import { type JobDialogProps, taken } from './job-dialog.ts';
 import { RunFields } from './run-fields.tsx';
 import { followPoint, newSourceDraft, type SourceDraft, settleSource } from './source-draft.ts';
@@ -55,7 +56,7 @@ export function SourceDialog({ rows, apply, onClose }: Omit<JobDialogProps, 'onA
       title="Add a source"
       description="A generator, a battery, a second service. PV that follows the grid is a circuit of class Generation with a negative load."
     >
-      <Form
+      <DialogForm
         label="Add a source"
         onSubmit={form.onSubmit}
         error={form.formError}
@@ -156,7 +157,7 @@ export function SourceDialog({ rows, apply, onClose }: Omit<JobDialogProps, 'onA
             onTexts={(run) => set('run', run)}
           />
         </DialogPart>
-      </Form>
+      </DialogForm>
     </Dialog>
   );
 }

@@ -5,13 +5,14 @@ import { SYSTEM_VOLTS, SYSTEM_WORDS } from '../../../lib/job-words.ts';
 import { useForm } from '../../../lib/use-form.ts';
 import { Dialog } from '../../../ui/dialog.tsx';
 import { Field } from '../../../ui/field.tsx';
-import { Form } from '../../../ui/form.tsx';
+
 import { Segmented } from '../../../ui/segmented.tsx';
 import { Select } from '../../../ui/select.tsx';
 import { DeleteOrLeave } from './delete-or-leave.tsx';
+import { DialogForm } from './dialog-form.tsx';
+import { DialogPart, Further } from './dialog-part.tsx';
 import { echoVolts } from './echoes.ts';
 import { busOfFeed, type FeedValue, feedChoices } from './feed-choices.ts';
-import { DialogPart, Further } from './further.tsx';
 import { type JobDialogProps, taken } from './job-dialog.ts';
 import { furtherWrong, RunFields, RunFurtherFields } from './run-fields.tsx';
 import {
@@ -85,7 +86,7 @@ export function TransformerDialog({ rows, apply, onClose, transformerId, feed }:
   };
   return (
     <Dialog open wide onOpenChange={(open) => !open && onClose()} title={title}>
-      <Form
+      <DialogForm
         label={title}
         onSubmit={form.onSubmit}
         error={form.formError}
@@ -191,7 +192,7 @@ export function TransformerDialog({ rows, apply, onClose, transformerId, feed }:
             </Further>
           </>
         )}
-      </Form>
+      </DialogForm>
     </Dialog>
   );
 }

@@ -43,7 +43,13 @@ export function PreviewTable({ cells, rows, onSkip }: PreviewTableProps) {
           {rows.slice(0, shown).map(({ row, lines, problems }) => (
             <Fragment key={row}>
               {lines.map((line, i) => (
-                <tr key={line.key} className={cx(line.state === 'skipped' && 'hatch text-ink-soft')}>
+                <tr
+                  key={line.key}
+                  className={cx(
+                    line.state === 'skipped' && 'hatch text-ink-soft',
+                    problems.length > 0 && 'max-desk:border-b-0!',
+                  )}
+                >
                   <th
                     scope="row"
                     className={cx(
@@ -59,17 +65,17 @@ export function PreviewTable({ cells, rows, onSkip }: PreviewTableProps) {
                       key={field}
                       label={IMPORT_WORDS[field]}
                       className={cx(
-                        problems.length > 0 && 'border-0',
+                        problems.length > 0 && 'border-b-0!',
                         field === 'description' && 'font-bold',
                       )}
                     >
                       {line.texts[field]}
                     </Td>
                   ))}
-                  <Td label="Comes to" className={cx(problems.length > 0 && 'border-0')}>
+                  <Td label="Comes to" className={cx(problems.length > 0 && 'border-b-0!')}>
                     <State state={line.state} />
                   </Td>
-                  <Td className={cx(problems.length > 0 && 'border-0')}>
+                  <Td className={cx(problems.length > 0 && 'border-b-0!')}>
                     {i === 0 && (line.state !== 'passed' || problems.length > 0) && (
                       <Checkbox
                         checked={line.state === 'skipped'}

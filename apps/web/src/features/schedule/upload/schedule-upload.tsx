@@ -129,7 +129,7 @@ export function ScheduleUpload(props: ScheduleUploadProps) {
               aria-describedby="upload-standing"
               onClick={write}
             >
-              Write {formatCount(review.preview.circuits.length, 'row')} into {review.target.code}
+              Write {review.count > 0 ? formatCount(review.count, 'row') : ''} into {review.target.code}
             </Button>
             <Button big onClick={() => setChoosing(true)}>
               Another file
@@ -161,6 +161,7 @@ export function ScheduleUpload(props: ScheduleUploadProps) {
             </Field>
           )}
           <SheetReview
+            key={`${opened.file.fileName} ${opened.sheet}`}
             rows={rows}
             cells={opened.file.sheets[opened.sheet]!.cells}
             plan={opened.plans[opened.sheet]!}
@@ -201,6 +202,7 @@ function reviewOf(rows: JobRows, { file, sheet, plans }: OpenFile) {
     preview,
     read,
     edit: wrongTarget ? null : preview.edit,
+    count: read.counts.new + read.counts.idle,
     standing: standingOf(read, wrongTarget),
   };
 }

@@ -7,6 +7,7 @@ import { Field } from '../../../ui/field.tsx';
 import { Message } from '../../../ui/message.tsx';
 import { Segmented } from '../../../ui/segmented.tsx';
 import { Select } from '../../../ui/select.tsx';
+import { samplesOf } from './column-mapping.ts';
 import { ColumnsTable } from './columns-table.tsx';
 import type { ReadPreview } from './preview-rows.ts';
 import { PreviewTable } from './preview-table.tsx';
@@ -37,6 +38,11 @@ export function SheetReview({ rows, cells, plan, target, preview, read, onPlan }
     const text = row.filter((cell) => cell.trim() !== '').join(', ');
     return text === '' ? [] : [{ value: String(i), label: `Row ${i + 1}: ${text.slice(0, 60)}` }];
   });
+  const filled = mapping.columns.filter(
+    (use, column) => use.heading || samplesOf(cells, mapping, column).length > 0,
+  ).length;
+  const readCount = mapping.columns.filter((use) => use.field !== null).length;
+  const [unsure] = useState(readCount < 4 || read.columns.size > 0);
   const elsewhere = plan.titled !== null && plan.target.panelId !== '' && target.code !== plan.titled;
   return (
     <div className="space-y-5">
@@ -51,8 +57,15 @@ export function SheetReview({ rows, cells, plan, target, preview, read, onPlan }
           </Message>
         )}
       </Part>
-      <Part title="What the columns hold">
-        <Field label="Headings stand in" className="mb-2 desk:max-w-120">
+      <details open={unsure} className="border-y border-rule py-2">
+        <summary className="tap content-center text-grid">
+          <b>What the columns hold.</b>{' '}
+          <span className="text-ink-soft">
+            {readCount} of {filled} read, headings in{' '}
+            {mapping.headingRow === null ? 'no row' : `row ${mapping.headingRow + 1}`}
+          </span>
+        </summary>
+        <Field label="Headings stand in" className="mt-2 mb-2 desk:max-w-120">
           <Select
             value={mapping.headingRow === null ? '' : String(mapping.headingRow)}
             onValue={(row) => onPlan({ mapping: recogniseColumns(cells, row === '' ? null : Number(row)) })}
@@ -82,7 +95,7 @@ export function SheetReview({ rows, cells, plan, target, preview, read, onPlan }
             hint="Common practice: the fixtures hang along the way, not at its end."
           />
         </div>
-      </Part>
+      </details>
       <Part title="What its rows come to">
         {read.sheet.map((problem) => (
           <Message
