@@ -178,7 +178,7 @@ test('rows that are pasted are read at once', async () => {
   const user = userEvent.setup();
   await user.click(screen.getByLabelText(/Or paste rows/));
   await user.paste('Ckt\tDescription\n1\tReception lighting');
-  expect(await screen.findByText('What the columns hold')).toBeDefined();
+  expect(await screen.findByText('What its rows come to')).toBeDefined();
   expect(sent.map((one) => one.method)).toContain('POST');
 });
 
