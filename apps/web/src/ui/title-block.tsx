@@ -51,9 +51,9 @@ export function TitleCell({
   return (
     <div
       className={cx(
-        'min-w-0 flex-col justify-center border-l border-l-rule px-3 whitespace-nowrap first:w-full first:border-l-0 first:pl-4 desk:first:w-auto',
+        'flex-col justify-center border-l border-l-rule px-3 whitespace-nowrap first:w-full first:border-l-0 first:pl-4 desk:first:w-auto',
         shown,
-        shrink ? 'shrink' : 'flex-none',
+        shrink ? 'min-w-26 shrink' : 'max-w-64 flex-none',
       )}
     >
       <span className="truncate text-label text-ink-soft">{label}</span>

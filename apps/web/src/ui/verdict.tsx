@@ -76,7 +76,7 @@ export function Tally({
           key={kind}
           className={cx(
             'whitespace-nowrap',
-            VERDICT_COLOURS[kind],
+            counts[kind] ? VERDICT_COLOURS[kind] : 'text-ink-soft',
             kind === 'over' && counts.over && 'font-bold',
           )}
         >

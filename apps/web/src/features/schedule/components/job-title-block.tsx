@@ -36,15 +36,10 @@ export function JobTitleBlock({
     : 0;
   return (
     <TitleBlock action={action}>
-      <TitleCell
-        label="Job"
-        strong
-        sub={archived ? 'archived: read only' : (job.address ?? 'no address')}
-        shrink
-      >
+      <TitleCell label="Job" strong sub={archived ? 'archived: read only' : (job.address ?? 'no address')}>
         {job.name}
       </TitleCell>
-      <TitleCell label="Service" sub={service.detail}>
+      <TitleCell label="Service" sub={service.detail} shrink>
         {service.name}
       </TitleCell>
       <TitleCell label="Basis" sub={job.frequency === '0' ? 'direct current' : `${job.frequency} Hz`}>
@@ -62,7 +57,7 @@ export function JobTitleBlock({
           choices={SCENARIO_CHOICES}
         />
       </TitleCell>
-      <TitleCell label="Worst load" sub={worstName ?? ''} phone>
+      <TitleCell label="Worst load" sub={worstName ?? ''} phone shrink>
         {result?.worst ? (
           <VerdictFigure kind={result.worst.shown}>
             {formatPercent(result.worst.worst.totalPercent)}
@@ -84,7 +79,7 @@ export function JobTitleBlock({
             ...result?.counts,
             unjudged: (result?.counts.unjudged ?? 0) + (result?.leftOutCount ?? 0),
           }}
-          words={{ unjudged: 'left out or not judged' }}
+          words={{ unjudged: result?.counts.unjudged ? 'left out or not judged' : 'left out' }}
         />
       </TitleCell>
     </TitleBlock>
