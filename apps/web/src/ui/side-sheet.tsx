@@ -34,7 +34,7 @@ function Column({ title, subtitle, onClose, children }: SideSheetProps) {
       aria-labelledby={id}
       // biome-ignore lint/a11y/noNoninteractiveTabindex: a region that scrolls has to be reachable by keyboard
       tabIndex={0}
-      className="fixed top-19 right-0 bottom-0 z-20 w-95 overflow-auto border-l border-rule bg-sheet -outline-offset-2 wide:static wide:row-span-full"
+      className="fixed top-19 right-0 bottom-0 z-20 w-95 overflow-auto border-l border-rule bg-sheet -outline-offset-2 wide:static"
     >
       <header className="flex items-baseline gap-2 px-4 pt-3">
         <h2 id={id} className="min-w-0 text-title">
