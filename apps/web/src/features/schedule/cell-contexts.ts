@@ -18,6 +18,7 @@ export function cellContexts(panel: PanelView, result: JobResult | null): CellCo
     amps: firstAmps(circuit.runs[0]?.id, result),
     leftOut: leftOut.get(circuit.id) ?? null,
     racewayAssumed: raceways.has(circuit.id),
+    feeds: result?.panels.get(circuit.feedsPanelId ?? '') ?? null,
   }));
 }
 

@@ -9,8 +9,8 @@ export interface GridColumn {
   /** Tailwind width of the column. */
   width: string;
   numeric?: boolean;
-  /** Choices, where only some words are understood. */
-  choices?: readonly string[];
+  /** Shows its field alone; what belongs to it has columns of its own. */
+  plain?: boolean;
 }
 
 const typed = (
@@ -37,7 +37,7 @@ const computed = (key: string, label: string, width: string): GridColumn => ({
 export const RESULT_COLUMNS: readonly GridColumn[] = [
   typed('spaces', 'Space', 'w-16'),
   { key: 'line', label: 'Line', field: null, width: 'w-12' },
-  typed('description', 'Serves', 'min-w-44'),
+  typed('description', 'Serves', 'min-w-48'),
   typed('breaker', 'Breaker', 'w-16'),
   typed('size', 'Wire', 'w-28'),
   typed('length', 'Length', 'w-20', { numeric: true }),
@@ -54,7 +54,7 @@ export const RESULT_COLUMNS: readonly GridColumn[] = [
 export const FIELD_COLUMNS: readonly GridColumn[] = [
   typed('spaces', 'Space', 'w-16'),
   { key: 'line', label: 'Line', field: null, width: 'w-12' },
-  typed('description', 'Serves', 'min-w-44'),
+  typed('description', 'Serves', 'min-w-64', { plain: true }),
   typed('room', 'Room', 'w-20'),
   typed('loadType', 'Load type', 'w-24'),
   typed('breaker', 'Breaker', 'w-16'),
@@ -91,6 +91,20 @@ export function wireText(circuit: CircuitView): string {
   const plain = size.text.replace(/ AWG$/, '').replace(/mm2$/, 'mm²');
   const many = Number(sets.text) > 1 && !/set/.test(plain) ? `${sets.text} × ` : '';
   return `${many}${plain} ${MATERIAL_SHORT[material.text] ?? ''}`.trim();
+}
+
+/** `7`, `2, 4`, `19–23`, `7a`: the spaces of a row in a narrow column. */
+export function spacesText({ spaces, breakers }: CircuitView): string {
+  const [first = 0, second = 0] = spaces;
+  const even = spaces.every((space, i) => space === first + i * (second - first));
+  const text = spaces.length > 2 && even ? `${first}–${spaces.at(-1)}` : spaces.join(', ');
+  return `${text}${breakers[0]?.half ?? ''}`;
+}
+
+/** `20/1P`; breakers that differ stand beside each other. */
+export function breakerText({ breakers, fields }: CircuitView): string {
+  if (fields.breaker.draft || breakers.some(({ amps }) => amps === null)) return fields.breaker.text;
+  return [...new Set(breakers.map(({ amps, poles }) => `${Number(amps)}/${poles}P`))].join(' + ');
 }
 
 export const lineText = (circuit: CircuitView): string => {

@@ -5,8 +5,8 @@ import { cx } from '../../../ui/cx.ts';
 import { DropBar } from '../../../ui/drop-bar.tsx';
 import { MissingBox } from '../../../ui/missing-box.tsx';
 import { Verdict } from '../../../ui/verdict.tsx';
-import type { CircuitFigures } from '../../../workers/results.ts';
-import { type GridColumn, lineText, wireText } from '../columns.ts';
+import type { CircuitFigures, PanelFigures } from '../../../workers/results.ts';
+import { breakerText, type GridColumn, lineText, spacesText, wireText } from '../columns.ts';
 
 export interface CellContext {
   circuit: CircuitView;
@@ -15,6 +15,8 @@ export interface CellContext {
   amps: number | null;
   leftOut: string | null;
   racewayAssumed: boolean;
+  /** Of the panel that it feeds. */
+  feeds: PanelFigures | null;
 }
 
 /** What a cell shows: text as typed, figures as computed, a box where something is missing. */
@@ -38,11 +40,13 @@ function TypedCell({ column, circuit, racewayAssumed }: CellContext & { column: 
     );
   if (view.text === '' && circuit.next?.field === field)
     return <MissingBox what={column.label.toLowerCase()} />;
+  if (field === 'spaces') return spacesText(circuit);
+  if (field === 'breaker') return breakerText(circuit);
   if (field === 'description')
     return (
       <>
         {view.text}
-        {circuit.fields.room.text && column.key === 'description' && (
+        {circuit.fields.room.text && !column.plain && (
           <span className="ml-1.5 text-label text-ink-soft">{circuit.fields.room.text}</span>
         )}
       </>
@@ -66,18 +70,20 @@ function TypedCell({ column, circuit, racewayAssumed }: CellContext & { column: 
   return view.text;
 }
 
-function Computed({ column, circuit, figures, amps, leftOut }: CellContext & { column: GridColumn }) {
+function Computed({ column, circuit, figures, amps, leftOut, feeds }: CellContext & { column: GridColumn }) {
   if (column.key === 'line') return <span className="text-ink-soft">{lineText(circuit)}</span>;
   if (column.key === 'amps')
     return amps === null ? null : <span className="text-ink-soft">{formatFixed(amps, 1)}</span>;
   if (column.key === 'verdict') {
     if (leftOut !== null) return <Verdict kind="unjudged" word="left out" />;
     if (figures) return <Verdict kind={figures.shown} />;
+    if (feeds) return <Verdict kind={feeds.shown} />;
     return circuit.circuit.kind === 'spare' || circuit.circuit.kind === 'reserved' ? (
       <span className="text-ink-soft">{circuit.circuit.kind}</span>
     ) : null;
   }
-  if (!figures || leftOut !== null) return null;
+  if (leftOut !== null) return null;
+  if (!figures) return column.key === 'feeder' ? <FeederPart feeds={feeds} /> : null;
   const { feederPercent, branchPercent, totalPercent, limitPercent, reasons } = figures.worst;
   if (column.key === 'bar')
     return feederPercent === null || branchPercent === null ? null : (
@@ -91,6 +97,17 @@ function Computed({ column, circuit, figures, amps, leftOut }: CellContext & { c
   return (
     <span className={cx(missed ? 'font-bold text-over' : column.key === 'feeder' && 'text-ink-soft')}>
       {formatFixed(value, digits)}
+    </span>
+  );
+}
+
+/** What is dropped up to the panel that a feeder ends at. */
+function FeederPart({ feeds }: { feeds: PanelFigures | null }) {
+  if (!feeds || feeds.feederPercent === null) return null;
+  const missed = feeds.shown === 'over' || feeds.shown === 'rise';
+  return (
+    <span className={missed ? 'font-bold text-over' : 'text-ink-soft'}>
+      {formatFixed(feeds.feederPercent, 2)}
     </span>
   );
 }

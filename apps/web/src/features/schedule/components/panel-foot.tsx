@@ -19,7 +19,7 @@ export function PanelFootRow({ panel, result }: PanelFootProps) {
       aria-label={`Foot of ${panel.code}`}
       className="flex flex-none flex-wrap gap-x-8 gap-y-2 border-t border-ink bg-sheet px-4 py-2 text-grid"
     >
-      <table className="text-right">
+      <table className="text-right whitespace-nowrap">
         <caption className="sr-only">Loads per line of {panel.code}</caption>
         <thead className="text-label text-ink-soft">
           <tr>

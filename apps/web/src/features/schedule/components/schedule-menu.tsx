@@ -9,12 +9,13 @@ interface ScheduleMenuProps {
   panel: PanelView | null;
   readOnly: boolean;
   onAsk: (ask: ScheduleAsk) => void;
+  onUpload: () => void;
   onUndo: () => void;
   onRedo: () => void;
 }
 
 /** Everything that is done to a panel and to the network, and the way back. */
-export function ScheduleMenu({ panel, readOnly, onAsk, onUndo, onRedo }: ScheduleMenuProps) {
+export function ScheduleMenu({ panel, readOnly, onAsk, onUpload, onUndo, onRedo }: ScheduleMenuProps) {
   const { firm, job } = useOpenJob();
   const { rows, undo, redo } = useReplica();
   const feed = panel ? ({ feed: `panel:${panel.id}` } as const) : {};
@@ -43,6 +44,7 @@ export function ScheduleMenu({ panel, readOnly, onAsk, onUndo, onRedo }: Schedul
     { label: undo ? `Undo: ${undo}` : 'Undo', disabled: !undo, keys: 'Ctrl Z', onSelect: onUndo },
     { label: redo ? `Redo: ${redo}` : 'Redo', disabled: !redo, keys: 'Ctrl Y', onSelect: onRedo },
     ...ofPanel,
+    { label: 'Upload a schedule', onSelect: onUpload },
     { label: 'Add a panel', onSelect: () => onAsk({ kind: 'panel', id: null, ...feed }) },
     { label: 'Add a transformer', onSelect: () => onAsk({ kind: 'transformer', id: null, ...feed }) },
     { label: 'Add a feeder', onSelect: () => onAsk({ kind: 'feeder', id: null, ...feed }) },

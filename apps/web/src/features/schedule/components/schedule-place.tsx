@@ -94,13 +94,16 @@ export function SchedulePlace({ cautions, sizesFor, handCheckFor }: SchedulePlac
   const actions = (
     <>
       <ViewSwitch view={view} onView={(chosen) => go({ view: chosen })} />
-      {!archived && (
-        <>
-          <Button onClick={() => setUploading(true)}>Upload</Button>
-          {panel && <Button onClick={add}>Add circuit</Button>}
-        </>
-      )}
-      <ScheduleMenu panel={panel} readOnly={archived} onAsk={setAsked} onUndo={takeBack} onRedo={doAgain} />
+      {!archived && desk && <Button onClick={() => setUploading(true)}>Upload</Button>}
+      {!archived && panel && <Button onClick={add}>Add circuit</Button>}
+      <ScheduleMenu
+        panel={panel}
+        readOnly={archived}
+        onAsk={setAsked}
+        onUpload={() => setUploading(true)}
+        onUndo={takeBack}
+        onRedo={doAgain}
+      />
     </>
   );
 
@@ -134,45 +137,47 @@ export function SchedulePlace({ cautions, sizesFor, handCheckFor }: SchedulePlac
           )
         }
       >
-        <JobTrouble snapshot={snapshot} to={(at) => troubleAddress(rows, at, to)} />
-        {view === 'loads' || view === 'runs' ? (
-          <WorstFirst
-            what={view}
-            result={result}
-            schedule={schedule}
-            actions={actions}
-            onWhat={(what) => go({ view: what })}
-            to={(id) => to({ circuit: id, view: 'results' })}
-          />
-        ) : panel ? (
-          <PanelSchedule
-            key={panel.id}
-            rows={rows}
-            panel={panel}
-            panels={schedule.panels}
-            result={result}
-            view={view}
-            chosenId={circuitId}
-            readOnly={archived}
-            jump={jump}
-            actions={actions}
-            to={(id) => to({ circuit: id })}
-            onPanel={(id) => go({ panel: id })}
-            onChoose={choose}
-            onType={(cells) => edits.typeCells(cells).problem}
-            onAdd={add}
-            onDuplicate={duplicate}
-            onRemove={remove}
-          />
-        ) : (
-          <NoPanels
-            readOnly={archived}
-            onPanel={() => setAsked({ kind: 'panel', id: null })}
-            onUpload={() => setUploading(true)}
-          />
-        )}
-        <ScheduleNotes panel={panel} result={result} said={said} next={next} />
-        {(!circuit || desk) && <div className="flex-none border-t border-rule px-4 py-1.5">{cautions}</div>}
+        <div className={desk ? 'contents' : 'min-h-0 flex-1 overflow-auto'}>
+          <JobTrouble snapshot={snapshot} to={(at) => troubleAddress(rows, at, to)} />
+          {view === 'loads' || view === 'runs' ? (
+            <WorstFirst
+              what={view}
+              result={result}
+              schedule={schedule}
+              actions={actions}
+              onWhat={(what) => go({ view: what })}
+              to={(id) => to({ circuit: id, view: 'results' })}
+            />
+          ) : panel ? (
+            <PanelSchedule
+              key={panel.id}
+              rows={rows}
+              panel={panel}
+              panels={schedule.panels}
+              result={result}
+              view={view}
+              chosenId={circuitId}
+              readOnly={archived}
+              jump={jump}
+              actions={actions}
+              to={(id) => to({ circuit: id })}
+              onPanel={(id) => go({ panel: id })}
+              onChoose={choose}
+              onType={(cells) => edits.typeCells(cells).problem}
+              onAdd={add}
+              onDuplicate={duplicate}
+              onRemove={remove}
+            />
+          ) : (
+            <NoPanels
+              readOnly={archived}
+              onPanel={() => setAsked({ kind: 'panel', id: null })}
+              onUpload={() => setUploading(true)}
+            />
+          )}
+          <ScheduleNotes panel={panel} result={result} said={said} next={next} />
+          {!(circuit && desk) && <div className="flex-none border-t border-rule px-4 py-1.5">{cautions}</div>}
+        </div>
       </WorkArea>
       <UploadDialog
         open={uploading}

@@ -1,4 +1,5 @@
 import { formatFixed } from '@farlug/solver/units';
+import { cx } from '../../../ui/cx.ts';
 import { type DropPart, DropStrip } from '../../../ui/drop-strip.tsx';
 import { Table, Td, Th } from '../../../ui/table.tsx';
 import type { LoadFigures } from '../../../workers/results.ts';
@@ -7,6 +8,8 @@ interface VoltsPathProps {
   load: LoadFigures;
   counted: { source: boolean; service: boolean; transformer: boolean };
 }
+
+const SWATCH = { aside: 'hatch', feeder: 'bg-mid', branch: 'bg-deep' } as const;
 
 /** Where the volts go, service to far lug: the picture, then the same as a table. */
 export function VoltsPath({ load, counted }: VoltsPathProps) {
@@ -49,6 +52,7 @@ export function VoltsPath({ load, counted }: VoltsPathProps) {
           {shown.map(({ key, percent, part }) => (
             <tr key={key}>
               <Td className="pl-0!">
+                <span aria-hidden="true" className={cx('mr-2 inline-block size-2.5', SWATCH[part])} />
                 {key}
                 {part === 'aside' && <span className="text-label text-ink-soft"> not counted</span>}
               </Td>

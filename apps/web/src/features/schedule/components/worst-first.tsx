@@ -156,11 +156,11 @@ function Runs({ runs, schedule, to }: PartProps & { runs: readonly RunFigures[] 
         {runs.map((run) => (
           <tr key={run.row}>
             <RowHead>
-              {run.id}{' '}
+              {run.circuitId === null || schedule.circuit(run.circuitId)?.code !== run.id
+                ? `${run.id} `
+                : null}
               {run.circuitId !== null && (
-                <span className="font-normal">
-                  <Name circuitId={run.circuitId} row={run.row} id={run.id} schedule={schedule} to={to} />
-                </span>
+                <Name circuitId={run.circuitId} row={run.row} id={run.id} schedule={schedule} to={to} />
               )}
             </RowHead>
             <Td>
