@@ -18,6 +18,12 @@ export const busOfFeed = (rows: JobRows, value: string): string | null => {
   return 'busId' in feed ? feed.busId : (rows.panel.get(feed.panelId)?.busId ?? null);
 };
 
+/** What the first panel of a job hangs on: the service. Later ones are asked for. */
+export function firstFeed(rows: JobRows): FeedValue {
+  const service = inOrder(rows.source.values())[0];
+  return service && rows.panel.size === 0 ? `bus:${service.busId}` : '';
+}
+
 /** Panels from the service down, then the service itself, transformer terminals and junctions. */
 export function feedChoices(rows: JobRows, without: ReadonlySet<string> = new Set()): Choice<FeedValue>[] {
   const systems = systemsOfRows(rows);

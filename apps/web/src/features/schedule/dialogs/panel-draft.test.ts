@@ -127,3 +127,10 @@ test('text that was not understood before stands in its field until it is put ri
   const right = after(drafted.rows, settlePanel(drafted.rows, id, { ...draft, mainAmps: '150' }));
   expect(right.draft.size).toBe(0);
 });
+
+test('the first panel of a job hangs on the service', () => {
+  const empty = { ...rows, panel: new Map() };
+  const draft = newPanelDraft(empty, '');
+  expect(draft.feed).toBe(`bus:${[...rows.source.values()][0]!.busId}`);
+  expect(newPanelDraft(rows, '').feed).toBe('');
+});

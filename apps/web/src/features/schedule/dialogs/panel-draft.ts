@@ -14,7 +14,7 @@ import { parseBreaker } from '@farlug/solver/units';
 import type { FieldErrors } from '../../../lib/form-errors.ts';
 import { typeBreaker } from './breaker-draft.ts';
 import { EditChain } from './edit-chain.ts';
-import { busOfFeed, type FeedValue, feedOf } from './feed-choices.ts';
+import { busOfFeed, type FeedValue, feedOf, firstFeed } from './feed-choices.ts';
 import { rowTexts } from './row-texts.ts';
 import { NEW_RUN, type RunTexts, runTexts, typeRun } from './run-draft.ts';
 import { usualLines } from './usual-lines.ts';
@@ -51,7 +51,7 @@ export const newPanelDraft = (rows: JobRows, feed: FeedValue): PanelDraft => ({
   area: '',
   mounting: '',
   notes: '',
-  feed,
+  feed: feed || firstFeed(rows),
   breaker: '',
   breakerSpaces: '',
   run: NEW_RUN,

@@ -1,7 +1,7 @@
 import { applyEdit, type Edit } from '@farlug/contract/edit';
 import type { JobRows } from '@farlug/contract/rows';
 import { scheduleView } from '@farlug/contract/schedule';
-import { cleanup, render, screen, waitFor } from '@testing-library/react';
+import { cleanup, configure, render, screen, waitFor } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { afterEach, expect, test, vi } from 'vitest';
 import { demoRows } from '../upload/testing/sample-sheet.ts';
@@ -10,6 +10,9 @@ import { DeletePanelDialog, DuplicatePanelDialog } from './panel-actions.tsx';
 import { PanelDialog } from './panel-dialog.tsx';
 import { SourceDialog } from './source-dialog.tsx';
 import { TransformerDialog } from './transformer-dialog.tsx';
+
+// Whole dialogs under a busy machine: a slow answer is not a wrong one.
+configure({ asyncUtilTimeout: 10_000 });
 
 afterEach(cleanup);
 

@@ -1,13 +1,16 @@
 import { applyEdit, type Edit, invertEdit } from '@farlug/contract/edit';
 import type { JobRows } from '@farlug/contract/rows';
 import { scheduleView } from '@farlug/contract/schedule';
-import { cleanup, render, screen, within } from '@testing-library/react';
+import { cleanup, configure, render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { useRef, useState } from 'react';
 import { afterEach, expect, test, vi } from 'vitest';
 import { FIRM, fakeServer, refusal, SIGNED_IN } from '../../../testing/fake-server.ts';
 import { ScheduleUpload } from './schedule-upload.tsx';
 import { demoRows, sampleSheet } from './testing/sample-sheet.ts';
+
+// Whole dialogs under a busy machine: a slow answer is not a wrong one.
+configure({ asyncUtilTimeout: 10_000 });
 
 afterEach(() => {
   cleanup();
@@ -77,6 +80,7 @@ test('a schedule from drawings is read, confirmed, written as one edit, and take
   const panel = panelOf(latest, 'LP-5')!;
   expect(panel.circuits).toHaveLength(16);
   expect(panel.fedFromText).toMatch(/^DP-L/);
+  expect(screen.getByText('16 rows written in one step.')).toBeDefined();
   expect(screen.getByText(/7 circuits without a length/)).toBeDefined();
 
   await user.click(screen.getByRole('button', { name: 'Undo the upload' }));

@@ -7,7 +7,7 @@ import {
 } from '@farlug/contract/import';
 import type { JobRows, Row } from '@farlug/contract/rows';
 import { codeProblem, ROW_FIELDS } from '@farlug/contract/schedule';
-import { type FeedValue, feedOf } from '../dialogs/feed-choices.ts';
+import { type FeedValue, feedOf, firstFeed } from '../dialogs/feed-choices.ts';
 import { usualLines } from '../dialogs/usual-lines.ts';
 
 /** Where the circuits go: a panel of the job, or a new one as it is typed. */
@@ -44,7 +44,7 @@ export function planOf(rows: JobRows, cells: Cells, panelId: string | null): She
       code: title.code ?? '',
       spaces: String(spacesFor(cells, mapping)),
       mainAmps: title.mainAmps ?? '',
-      feed: '',
+      feed: firstFeed(rows),
     },
     receptaclesAtBreaker: true,
     spreadLighting: true,

@@ -55,7 +55,7 @@ export function Written({ open, rows, written, onUndo, onClose, onShow }: Writte
       }
     >
       {refused && <Message kind="wrong">{refused}</Message>}
-      <Message kind="done">{formatCount(made.size, 'row')} written in one step.</Message>
+      <Message kind="done">{formatCount(own.length, 'row')} written in one step.</Message>
       {panel && panel.fedFrom === null && (
         <Message kind="note" className="mt-2">
           Nothing feeds {code} yet: say what does, and its circuits are judged.
