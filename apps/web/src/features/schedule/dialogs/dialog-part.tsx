@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react';
+import { type ReactNode, useId } from 'react';
 
 /** Fields that stay folded until they are asked for; folded out where one of them is wrong. */
 export function Further({ title, wrong, children }: { title: string; wrong: boolean; children: ReactNode }) {
@@ -20,11 +20,14 @@ export function DialogPart({
   note?: ReactNode;
   children: ReactNode;
 }) {
+  const id = useId();
   return (
-    <fieldset className="min-w-0">
-      <legend className="w-full border-b border-line pb-1 text-label text-ink-soft">{title}</legend>
+    <section aria-labelledby={id} className="min-w-0">
+      <h3 id={id} className="border-b border-line pb-1 text-label font-normal text-ink-soft">
+        {title}
+      </h3>
       {note && <p className="mt-2 text-grid text-ink-soft">{note}</p>}
       <div className="mt-3 grid items-start gap-3 desk:grid-cols-2">{children}</div>
-    </fieldset>
+    </section>
   );
 }

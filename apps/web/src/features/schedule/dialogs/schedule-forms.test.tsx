@@ -150,3 +150,15 @@ test('a source needs what its fault current is', async () => {
   await user.click(screen.getByRole('button', { name: 'Add the source' }));
   await waitFor(() => expect(job.rows.source.size).toBe(rows.source.size + 1));
 });
+
+test('of several fields in a part, the one that is wrong takes the focus', async () => {
+  const { props } = openJob();
+  const feed = `panel:${panelOf(rows, 'DP-L')!.id}` as const;
+  render(<FeederDialog {...props} runId={null} feed={feed} />);
+  const user = userEvent.setup();
+  await user.type(screen.getByLabelText('Name'), 'F99');
+  await user.selectOptions(screen.getByLabelText('To'), feed);
+  await user.click(screen.getByRole('button', { name: 'Add the run' }));
+  expect(await screen.findByText(/from one point to another: choose two/)).toBeDefined();
+  await waitFor(() => expect(document.activeElement).toBe(screen.getByLabelText('To')));
+});

@@ -38,15 +38,7 @@ export function TargetFields({ rows, target, errors, onChange }: TargetFieldsPro
               onChange={(event) => onChange({ code: event.target.value })}
             />
           </Field>
-          <Field
-            label="Fed from"
-            className="desk:col-span-2"
-            hint={
-              target.feed === ''
-                ? 'Until something feeds it, its circuits are left out of the results.'
-                : 'By the next open spaces; size and length of the feeder are filled in afterwards.'
-            }
-          >
+          <Field label="Fed from" className="desk:col-span-2" hint={feedHint(target.feed)}>
             <Select
               value={target.feed}
               onValue={(feed) => onChange({ feed })}
@@ -73,4 +65,10 @@ export function TargetFields({ rows, target, errors, onChange }: TargetFieldsPro
       )}
     </div>
   );
+}
+
+function feedHint(feed: TargetDraft['feed']): string {
+  if (feed === '') return 'Until something feeds it, its circuits are left out of the results.';
+  const by = feed.startsWith('panel:') ? 'By the next open spaces; ' : '';
+  return `${by}size and length of its feeder are filled in afterwards.`.replace(/^s/, 'S');
 }
