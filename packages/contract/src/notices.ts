@@ -1,3 +1,5 @@
+import { CAUTION } from '@farlug/solver/job';
+
 /**
  * The cautions that stand wherever a verdict does: on pages, in reports, in messages, on the command line.
  * A firm's own wording follows them and never takes their place.
@@ -13,5 +15,4 @@ export const NOTICES: readonly string[] = [
 ];
 
 /** The same in two lines, for the foot of a page that links to the whole. */
-export const BRIEF_NOTICE =
-  'Calculated from the data entered. Does not replace the adopted local code, the authority having jurisdiction, or a licensed electrician or engineer. Voltage drop does not replace ampacity, overcurrent, fault, grounding or equipment ratings. “Within” is not “approved”. Not checked: fault and clearing times, coordination, lugs, fill, torque, harmonics. Verify absence of voltage before work.';
+export const BRIEF_NOTICE: string = CAUTION;
