@@ -8,7 +8,7 @@ import { SheetSection, SideSheet } from '../../../ui/side-sheet.tsx';
 import { DESK, useMedia } from '../../../ui/use-media.ts';
 import { VerdictSentence } from '../../../ui/verdict.tsx';
 import type { CircuitFigures, JobResult } from '../../../workers/results.ts';
-import { lineText, wireText } from '../columns.ts';
+import { breakerText, lineText, wireText } from '../columns.ts';
 import { forceSentence, verdictSentence } from '../verdict-words.ts';
 import { CircuitFieldsForm } from './circuit-fields-form.tsx';
 import { PartsSection } from './parts-section.tsx';
@@ -102,7 +102,7 @@ function aboutCircuit(circuit: CircuitView): string {
   const state = circuit.runs[0]?.lengthState ?? null;
   return [
     circuit.spaces.length > 0 ? `Space ${circuit.spaces.join(', ')} on ${lineText(circuit)}` : null,
-    breaker.text && `breaker ${breaker.text}`,
+    breaker.text && `Breaker ${breakerText(circuit)}`,
     wire && `${wire}${raceway.text ? ` in ${raceway.text}` : ''}`,
     length.text && `${length.text}${state ? `, ${state}` : ''}`,
     load.text && `${load.text}${load.assumed ? ', assumed' : ''}`,

@@ -7,20 +7,31 @@ interface GridCellProps {
   place: string;
   /** The one cell of the grid that Tab reaches. */
   here: boolean;
+  /** An editor stands in it and has the focus in its place. */
+  editing: boolean;
   wrong: string | null;
   onClick: () => void;
   onDoubleClick: () => void;
   children: ReactNode;
 }
 
-export function GridCell({ column, place, here, wrong, onClick, onDoubleClick, children }: GridCellProps) {
+export function GridCell({
+  column,
+  place,
+  here,
+  editing,
+  wrong,
+  onClick,
+  onDoubleClick,
+  children,
+}: GridCellProps) {
   return (
     // biome-ignore lint/a11y/useKeyWithClickEvents: the grid handles the keys of its cells
     <td
       // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: the grid pattern names its cells so
       role="gridcell"
       data-cell={place}
-      tabIndex={here ? 0 : -1}
+      tabIndex={editing ? undefined : here ? 0 : -1}
       aria-readonly={column.field === null || undefined}
       aria-invalid={wrong !== null || undefined}
       onClick={onClick}

@@ -144,7 +144,7 @@ export function ScheduleGrid(props: ScheduleGridProps) {
                 key={one.key}
                 scope="col"
                 className={cx(
-                  'border-b border-ink px-1.5 py-1.5 text-label font-normal whitespace-nowrap text-ink-soft first:pl-4 last:pr-4',
+                  'px-1.5 py-1.5 text-label shadow-[inset_0_-1px_0_var(--ink)] font-normal whitespace-nowrap text-ink-soft first:pl-4 last:pr-4',
                   one.numeric ? 'text-right' : 'text-left',
                 )}
               >
@@ -172,6 +172,7 @@ export function ScheduleGrid(props: ScheduleGridProps) {
                     column={one}
                     place={`${r}:${c}`}
                     here={here}
+                    editing={here && editing !== null}
                     wrong={problem?.id === cell.circuit.id && problem.key === one.key ? problem.text : null}
                     onClick={() => {
                       if (here && editing) return;

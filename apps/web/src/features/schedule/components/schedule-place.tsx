@@ -91,11 +91,12 @@ export function SchedulePlace({ cautions, sizesFor, handCheckFor }: SchedulePlac
   };
 
   const next = <NextMissingLink missing={missing} chosenId={circuitId} panelId={panelId} onJump={fillIn} />;
+  const whole = view === 'loads' || view === 'runs';
   const actions = (
     <>
       <ViewSwitch view={view} onView={(chosen) => go({ view: chosen })} />
-      {!archived && desk && <Button onClick={() => setUploading(true)}>Upload</Button>}
-      {!archived && panel && <Button onClick={add}>Add circuit</Button>}
+      {!archived && desk && !whole && <Button onClick={() => setUploading(true)}>Upload</Button>}
+      {!archived && panel && !whole && <Button onClick={add}>Add circuit</Button>}
       <ScheduleMenu
         panel={panel}
         readOnly={archived}
@@ -139,7 +140,7 @@ export function SchedulePlace({ cautions, sizesFor, handCheckFor }: SchedulePlac
       >
         <div className={desk ? 'contents' : 'min-h-0 flex-1 overflow-auto'}>
           <JobTrouble snapshot={snapshot} to={(at) => troubleAddress(rows, at, to)} />
-          {view === 'loads' || view === 'runs' ? (
+          {whole ? (
             <WorstFirst
               what={view}
               result={result}
@@ -175,7 +176,7 @@ export function SchedulePlace({ cautions, sizesFor, handCheckFor }: SchedulePlac
               onUpload={() => setUploading(true)}
             />
           )}
-          <ScheduleNotes panel={panel} result={result} said={said} next={next} />
+          <ScheduleNotes panel={whole ? null : panel} result={result} said={said} next={next} />
           {!(circuit && desk) && <div className="flex-none border-t border-rule px-4 py-1.5">{cautions}</div>}
         </div>
       </WorkArea>

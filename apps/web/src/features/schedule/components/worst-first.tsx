@@ -110,7 +110,7 @@ function Loads({ loads, schedule, to }: PartProps & { loads: readonly LoadFigure
             <Td numeric label="Total %">
               {percent(load.totalPercent, load.limitPercent)}
             </Td>
-            <Td className="w-24" label="Drop">
+            <Td className="desk:w-24" label="Drop">
               {load.feederPercent !== null && load.branchPercent !== null && (
                 <DropBar
                   feederPercent={load.feederPercent}
