@@ -4,7 +4,13 @@ import { applyEdit, invertEdit } from '../edit/index.ts';
 import { jobFromRows } from '../job/index.ts';
 import type { JobRows } from '../rows/index.ts';
 import { changeCircuitFieldEdit, type ScheduleChange } from './circuit-edits.ts';
-import { addFeederEdit, addSourceEdit, deleteRunEdit, deleteTransformerEdit } from './network-edits.ts';
+import {
+  addFeederEdit,
+  addSourceEdit,
+  deleteRunEdit,
+  deleteSourceEdit,
+  deleteTransformerEdit,
+} from './network-edits.ts';
 import { addPanelEdit } from './panel-edits.ts';
 import { refeedPanelEdit } from './refeed-edits.ts';
 import { setLengthEdit, setRunSizeEdit } from './run-edits.ts';
@@ -151,6 +157,9 @@ describe('pieces of the network', () => {
     expect(addSourceEdit(now, { code: 'standby', system: '3ph-4w' }, bus(now, 'MDP')).problem).toMatch(
       /already the name of a source/,
     );
+    const gone = after(now, deleteSourceEdit(now, added.id!));
+    expect([gone.source.size, gone.run.size, gone.bus.size]).toEqual([1, rows.run.size, rows.bus.size]);
+    expect(deleteSourceEdit(rows, [...rows.source.keys()][0]!).problem).toMatch(/needs one source/);
   });
 
   test('nothing typed into a breaker that goes stays behind', () => {

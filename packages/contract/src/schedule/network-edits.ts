@@ -98,3 +98,23 @@ export function addSourceEdit(
   });
   return { edit: changes.edit(`Add source ${code}`), problem: null, id: source.id, runId };
 }
+
+/** Deletes a source with its point and the runs that leave it; the last one of a job stays. */
+export function deleteSourceEdit(rows: JobRows, sourceId: string): ScheduleChange {
+  const source = rows.source.get(sourceId);
+  if (!source) return { edit: null, problem: 'The source is gone.' };
+  if (rows.source.size === 1) return { edit: null, problem: 'A job needs one source: change it instead.' };
+  const changes = new RowChanges(rows);
+  removeWithDrafts(changes, 'source', sourceId);
+  const shared = [...changes.rows.source.values(), ...rows.panel.values(), ...rows.load.values()].some(
+    (row) => row.busId === source.busId,
+  );
+  const points = new Set([source.busId]);
+  for (const run of shared ? [] : rows.run.values()) {
+    if (run.circuitId !== null || (run.fromBusId !== source.busId && run.toBusId !== source.busId)) continue;
+    points.add(run.fromBusId).add(run.toBusId);
+    removeWithDrafts(changes, 'run', run.id);
+  }
+  for (const bus of points) removeIfUnused(changes, bus);
+  return { edit: changes.edit(`Delete source ${source.code}`), problem: null };
+}

@@ -24,9 +24,10 @@ export function firstFeed(rows: JobRows): FeedValue {
   return service && rows.panel.size === 0 ? `bus:${service.busId}` : '';
 }
 
-/** Panels from the service down, then the service itself, transformer terminals and junctions. */
+/** Panels from the service down, then secondaries of transformers, the service itself and junctions. */
 export function feedChoices(rows: JobRows, without: ReadonlySet<string> = new Set()): Choice<FeedValue>[] {
   const systems = systemsOfRows(rows);
+  const transformers = new Map([...rows.transformer.values()].map((one) => [one.toBusId, one]));
   const panelBuses = new Set([...rows.panel.values()].map((panel) => panel.busId));
   const label = (busId: string) => {
     const bus = rows.bus.get(busId)!;
@@ -41,12 +42,19 @@ export function feedChoices(rows: JobRows, without: ReadonlySet<string> = new Se
   }));
   const points = inOrder(rows.bus.values())
     .filter((bus) => !panelBuses.has(bus.id) && (bus.kind === 'service' || isJoint(rows, bus.id)))
-    .map((bus) => ({
-      value: `bus:${bus.id}` as const,
-      label: label(bus.id),
-      group: 'Other points',
-      busId: bus.id,
-    }));
+    .map((bus) => {
+      const before = transformers.get(bus.id);
+      const system = systems.get(bus.id);
+      return {
+        value: `bus:${bus.id}` as const,
+        label: before
+          ? `${before.code}, secondary, ${system ? systemText(system) : 'not fed yet'}`
+          : label(bus.id),
+        group: before ? 'Transformers' : 'Other points',
+        busId: bus.id,
+      };
+    })
+    .sort((a, b) => Number(b.group === 'Transformers') - Number(a.group === 'Transformers'));
   return [...panels, ...points]
     .filter((one) => !without.has(one.busId))
     .map(({ busId: _, ...choice }) => choice);

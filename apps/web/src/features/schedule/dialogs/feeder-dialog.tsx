@@ -1,7 +1,6 @@
 import { deleteRunEdit, systemsOfRows, systemText } from '@farlug/contract/schedule';
 import { useMemo } from 'react';
 import { useForm } from '../../../lib/use-form.ts';
-import { Dialog } from '../../../ui/dialog.tsx';
 import { Field } from '../../../ui/field.tsx';
 
 import { Select } from '../../../ui/select.tsx';
@@ -12,6 +11,7 @@ import { echoBreaker } from './echoes.ts';
 import { type FeedValue, feedChoices } from './feed-choices.ts';
 import { type FeederDraft, feederDraft, newFeederDraft, settleFeeder } from './feeder-draft.ts';
 import { type JobDialogProps, taken } from './job-dialog.ts';
+import { LongDialog } from './long-dialog.tsx';
 import { furtherWrong, RunFields, RunFurtherFields } from './run-fields.tsx';
 import { TypedInput } from './typed-input.tsx';
 
@@ -49,10 +49,9 @@ export function FeederDialog({ rows, apply, onClose, runId, feed }: FeederDialog
     onTexts: (texts: FeederDraft['run']) => set('run', texts),
   };
   return (
-    <Dialog
-      open
-      wide
-      onOpenChange={(open) => !open && onClose()}
+    <LongDialog
+      changed={form.changed}
+      onClose={onClose}
       title={title}
       description={
         run
@@ -134,7 +133,7 @@ export function FeederDialog({ rows, apply, onClose, runId, feed }: FeederDialog
           <RunFurtherFields {...fields} />
         </Further>
       </DialogForm>
-    </Dialog>
+    </LongDialog>
   );
 }
 

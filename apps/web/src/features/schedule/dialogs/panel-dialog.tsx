@@ -2,7 +2,6 @@ import { PANEL_LAYOUTS, type PanelLayout } from '@farlug/solver/job';
 import { useMemo } from 'react';
 import { useForm } from '../../../lib/use-form.ts';
 import { Button } from '../../../ui/button.tsx';
-import { Dialog } from '../../../ui/dialog.tsx';
 import { Field } from '../../../ui/field.tsx';
 
 import { Message } from '../../../ui/message.tsx';
@@ -12,6 +11,7 @@ import { DialogPart, Further } from './dialog-part.tsx';
 import { echoAmps, echoBreaker } from './echoes.ts';
 import { type FeedValue, feedChoices } from './feed-choices.ts';
 import { type JobDialogProps, taken } from './job-dialog.ts';
+import { LongDialog } from './long-dialog.tsx';
 import { OnTheWay } from './on-the-way.tsx';
 import { feederOf, newPanelDraft, type PanelDraft, panelDraft, settlePanel } from './panel-draft.ts';
 import { furtherWrong, RunFields, RunFurtherFields } from './run-fields.tsx';
@@ -67,7 +67,7 @@ export function PanelDialog({ rows, apply, onClose, onAsk, panelId, feed, onDone
   );
   const title = panel ? `Panel ${rows.bus.get(panel.busId)!.code}` : 'Add a panel';
   return (
-    <Dialog open wide onOpenChange={(open) => !open && onClose()} title={title}>
+    <LongDialog changed={form.changed} onClose={onClose} title={title}>
       <DialogForm
         label={title}
         onSubmit={form.onSubmit}
@@ -166,6 +166,6 @@ export function PanelDialog({ rows, apply, onClose, onAsk, panelId, feed, onDone
           {text('notes', 'Notes', null, { maxLength: 4000 })}
         </Further>
       </DialogForm>
-    </Dialog>
+    </LongDialog>
   );
 }

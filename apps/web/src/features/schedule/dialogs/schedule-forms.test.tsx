@@ -6,9 +6,11 @@ import userEvent from '@testing-library/user-event';
 import { afterEach, expect, test, vi } from 'vitest';
 import { demoRows } from '../upload/testing/sample-sheet.ts';
 import { FeederDialog } from './feeder-dialog.tsx';
+import { newFeederDraft, settleFeeder } from './feeder-draft.ts';
 import { DeletePanelDialog, DuplicatePanelDialog } from './panel-actions.tsx';
 import { PanelDialog } from './panel-dialog.tsx';
 import { SourceDialog } from './source-dialog.tsx';
+import { newSourceDraft, settleSource } from './source-draft.ts';
 import { TransformerDialog } from './transformer-dialog.tsx';
 
 // Whole dialogs under a busy machine: a slow answer is not a wrong one.
@@ -161,4 +163,51 @@ test('of several fields in a part, the one that is wrong takes the focus', async
   await user.click(screen.getByRole('button', { name: 'Add the run' }));
   expect(await screen.findByText(/from one point to another: choose two/)).toBeDefined();
   await waitFor(() => expect(document.activeElement).toBe(screen.getByLabelText('To')));
+});
+
+test('Esc asks before what was typed is let go', async () => {
+  const { props } = openJob();
+  render(<PanelDialog {...props} panelId={null} feed="" onDone={vi.fn()} />);
+  const user = userEvent.setup();
+  await user.type(screen.getByLabelText('Name'), 'LP-7');
+  await user.keyboard('{Escape}');
+  expect(props.onClose).not.toHaveBeenCalled();
+  await user.click(screen.getByRole('button', { name: 'Go on typing' }));
+  expect((screen.getByLabelText('Name') as HTMLInputElement).value).toBe('LP-7');
+  await user.keyboard('{Escape}');
+  await user.click(screen.getByRole('button', { name: 'Let it go' }));
+  expect(props.onClose).toHaveBeenCalled();
+});
+
+test('a further source is deleted when asked for twice', async () => {
+  const made = settleSource(rows, {
+    ...newSourceDraft(rows),
+    code: 'Standby',
+    to: `panel:${panelOf(rows, 'MDP')!.id}`,
+    faultAmps: '900',
+  });
+  const { job, props } = openJob();
+  props.apply(made.edit!);
+  render(<SourceDialog {...props} rows={job.rows} />);
+  const user = userEvent.setup();
+  await user.click(screen.getByRole('button', { name: 'Delete Standby …' }));
+  expect(job.rows.source.size).toBe(2);
+  await user.click(screen.getByRole('button', { name: 'Delete Standby' }));
+  expect(job.rows.source.size).toBe(1);
+  expect(job.rows.run.size).toBe(rows.run.size);
+});
+
+test('a run beside the feeder of a panel is reached from the panel', async () => {
+  const made = settleFeeder(rows, null, {
+    ...newFeederDraft(`panel:${panelOf(rows, 'DP-L')!.id}`),
+    code: 'F99',
+    to: `panel:${panelOf(rows, 'LP-2')!.id}`,
+  });
+  const { job, props } = openJob();
+  props.apply(made.edit!);
+  render(
+    <PanelDialog {...props} rows={job.rows} panelId={panelOf(rows, 'LP-2')!.id} feed="" onDone={vi.fn()} />,
+  );
+  await userEvent.setup().click(screen.getByRole('button', { name: 'run F99' }));
+  expect(props.onAsk).toHaveBeenCalledWith({ kind: 'feeder', id: made.id });
 });

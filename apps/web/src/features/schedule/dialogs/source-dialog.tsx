@@ -4,7 +4,6 @@ import { SYSTEM_FAULT, SYSTEM_ORDER, SYSTEM_VOLTS, SYSTEM_WORDS } from '../../..
 import { useForm } from '../../../lib/use-form.ts';
 import { Button } from '../../../ui/button.tsx';
 import { Checkbox } from '../../../ui/checkbox.tsx';
-import { Dialog } from '../../../ui/dialog.tsx';
 import { Field } from '../../../ui/field.tsx';
 
 import { Segmented } from '../../../ui/segmented.tsx';
@@ -13,7 +12,9 @@ import { DialogForm } from './dialog-form.tsx';
 import { DialogPart } from './dialog-part.tsx';
 import { echoAmps, echoVolts } from './echoes.ts';
 import { feedChoices } from './feed-choices.ts';
+import { FurtherSources } from './further-sources.tsx';
 import { type JobDialogProps, taken } from './job-dialog.ts';
+import { LongDialog } from './long-dialog.tsx';
 import { RunFields } from './run-fields.tsx';
 import { followPoint, newSourceDraft, type SourceDraft, settleSource } from './source-draft.ts';
 import { TypedInput } from './typed-input.tsx';
@@ -49,13 +50,13 @@ export function SourceDialog({ rows, apply, onClose }: Omit<JobDialogProps, 'onA
     />
   );
   return (
-    <Dialog
-      open
-      wide
-      onOpenChange={(open) => !open && onClose()}
+    <LongDialog
+      changed={form.changed}
+      onClose={onClose}
       title="Add a source"
       description="A generator, a battery, a second service. PV that follows the grid is a circuit of class Generation with a negative load."
     >
+      <FurtherSources rows={rows} apply={apply} />
       <DialogForm
         label="Add a source"
         onSubmit={form.onSubmit}
@@ -158,6 +159,6 @@ export function SourceDialog({ rows, apply, onClose }: Omit<JobDialogProps, 'onA
           />
         </DialogPart>
       </DialogForm>
-    </Dialog>
+    </LongDialog>
   );
 }

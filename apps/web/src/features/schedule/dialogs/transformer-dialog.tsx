@@ -3,7 +3,6 @@ import { PAIRS, type System, TRANSFORMER_CONNECTIONS, type TransformerConnection
 import { useMemo } from 'react';
 import { SYSTEM_VOLTS, SYSTEM_WORDS } from '../../../lib/job-words.ts';
 import { useForm } from '../../../lib/use-form.ts';
-import { Dialog } from '../../../ui/dialog.tsx';
 import { Field } from '../../../ui/field.tsx';
 
 import { Segmented } from '../../../ui/segmented.tsx';
@@ -14,6 +13,7 @@ import { DialogPart, Further } from './dialog-part.tsx';
 import { echoVolts } from './echoes.ts';
 import { busOfFeed, type FeedValue, feedChoices } from './feed-choices.ts';
 import { type JobDialogProps, taken } from './job-dialog.ts';
+import { LongDialog } from './long-dialog.tsx';
 import { furtherWrong, RunFields, RunFurtherFields } from './run-fields.tsx';
 import {
   followFeed,
@@ -85,7 +85,7 @@ export function TransformerDialog({ rows, apply, onClose, transformerId, feed }:
       set(field as keyof TransformerDraft, given);
   };
   return (
-    <Dialog open wide onOpenChange={(open) => !open && onClose()} title={title}>
+    <LongDialog changed={form.changed} onClose={onClose} title={title}>
       <DialogForm
         label={title}
         onSubmit={form.onSubmit}
@@ -193,6 +193,6 @@ export function TransformerDialog({ rows, apply, onClose, transformerId, feed }:
           </>
         )}
       </DialogForm>
-    </Dialog>
+    </LongDialog>
   );
 }
