@@ -12,7 +12,7 @@ import { runElements, runFlow } from './run-results.ts';
 import { runsInTurns } from './run-turns.ts';
 import type { State } from './solve-state.ts';
 import { totalsOf } from './totals.ts';
-import { type TurnFigures, turnFigures } from './turn-figures.ts';
+import { type TurnFigures, turnFigures, type Wanted } from './turn-figures.ts';
 import { turnSolver } from './turn-solver.ts';
 import { reasonsOf, verdictOf, worstVerdict } from './verdict.ts';
 
@@ -25,11 +25,13 @@ export interface Prepared {
   shownRuns: (solution: Solution) => RunResult[];
 }
 
+const EVERYTHING: Wanted = { headroom: true, loads: null };
+
 /**
  * Builds and solves what all scenarios share. Refused, as a value that names the place: what the network refuses, a
  * job that no solution serves at design demand or in some turn of a circuit.
  */
-export function prepareJob(job: Job): Prepared | Refusal {
+export function prepareJob(job: Job, wanted: Wanted = EVERYTHING): Prepared | Refusal {
   const core = buildCore(job);
   if ('kind' in core) return core;
   const credits = diversityCredits(core);
@@ -38,7 +40,7 @@ export function prepareJob(job: Job): Prepared | Refusal {
   if ('kind' in design) return design;
   const judge = judgeOf(core);
   const solver = turnSolver(core, design, credits);
-  const turns = turnFigures(core, design, judge, solver);
+  const turns = turnFigures(core, design, judge, solver, wanted);
   if ('kind' in turns) return turns;
   return {
     kind: 'prepared',
@@ -53,9 +55,10 @@ export function prepareJob(job: Job): Prepared | Refusal {
  * Solves a parsed job in one scenario: `farlug-solution/1`, volts, amps, watts, ohms and percents in full double
  * precision, arrays in the order of the job. The model's scenarios, splits and limits; see the package's page.
  */
-export function solveJob(job: Job, options: { scenario: Scenario }): SolveOutcome {
-  const prepared = prepareJob(job);
-  return prepared.kind === 'prepared' ? prepared.solve(options.scenario) : prepared;
+export function solveJob(job: Job, options: { scenario: Scenario } & Partial<Wanted>): SolveOutcome {
+  const { scenario, ...wanted } = options;
+  const prepared = prepareJob(job, { ...EVERYTHING, ...wanted });
+  return prepared.kind === 'prepared' ? prepared.solve(scenario) : prepared;
 }
 
 function solveScenario(
@@ -71,7 +74,7 @@ function solveScenario(
   if ('kind' in state) return state;
   const loads = core.job.loads.map((_, i): LoadResult => {
     const found = turns[i];
-    if (!found) return unserved(core, i);
+    if (!found) return withoutFigures(core, i);
     const figures =
       scenario === 'each-circuit'
         ? found.each
@@ -127,7 +130,7 @@ function loadResult(
   };
 }
 
-const unserved = (core: Core, i: number): LoadResult => ({
+const withoutFigures = (core: Core, i: number): LoadResult => ({
   id: core.job.loads[i]!.id,
   terminals: core.job.loads[i]!.terminals,
   volts: null,
@@ -140,7 +143,7 @@ const unserved = (core: Core, i: number): LoadResult => ({
   branchPercent: null,
   totalPercent: null,
   limitPercent: null,
-  verdict: 'unserved',
+  verdict: core.loads[i]!.served ? 'unjudged' : 'unserved',
   reasons: [],
   turn: null,
   headroomAmps: null,

@@ -18,7 +18,15 @@ export interface TurnFigures {
   starting: LoadFigures | null;
   startingPercent: number | null;
   headroomAmps: number | null;
-  thevenin: Phasor;
+  thevenin: Phasor | null;
+}
+
+/** What is found beside verdicts, and for which loads: a comparison of sizes needs less than a whole solution. */
+export interface Wanted {
+  /** Headroom and driving-point impedances. */
+  headroom: boolean;
+  /** Loads by index; the others come back as `unjudged` and without figures. `null`: all. */
+  loads: ReadonlySet<number> | null;
 }
 
 const SQRT3 = Math.sqrt(3);
@@ -31,11 +39,12 @@ export function turnFigures(
   design: State,
   judge: Judge,
   solver: TurnSolver,
+  wanted: Wanted,
 ): (TurnFigures | null)[] | Refusal {
   const found: (TurnFigures | null)[] = core.loads.map(() => null);
   const thevenin = theveninAt(core, design);
   for (const [circuit, { loads }] of core.circuits.list.entries()) {
-    const served = loads.filter((load) => core.loads[load]!.served);
+    const served = loads.filter((load) => core.loads[load]!.served && (wanted.loads?.has(load) ?? true));
     if (served.length === 0) continue;
     solver.open(circuit, judge.nodesOf(circuit));
     const starts = new Map<number, Start>();
@@ -70,8 +79,8 @@ export function turnFigures(
         turn: worst.name,
         starting: start?.figures ?? null,
         startingPercent: start?.percent ?? null,
-        headroomAmps: headroom(core, judge, load, on),
-        thevenin: thevenin(load, worst.figures.split.bus, worst.figures.split.pair),
+        headroomAmps: wanted.headroom ? headroom(core, judge, load, on) : null,
+        thevenin: wanted.headroom ? thevenin(load, worst.figures.split.bus, worst.figures.split.pair) : null,
       };
     }
   }
