@@ -1,0 +1,47 @@
+import { beyondFinder } from '@farlug/solver/job';
+import { solveJob } from '@farlug/solver/judge';
+import { type Candidate, candidates, type FloorLoad } from '@farlug/solver/sizing';
+import type { NoAnswer, SizesQuestion, WorkerJob } from './questions.ts';
+
+/** A size with the circuit of the worst load beyond, by row. */
+export interface SizeFigures extends Candidate {
+  worstCircuitId: string | null;
+}
+
+export interface SizesAnswer {
+  kind: 'sizes';
+  /** The run, by row, and its code. */
+  run: string;
+  code: string;
+  load: FloorLoad;
+  sizes: SizeFigures[];
+}
+
+/** Every size of a run side by side; only what lies beyond it is judged again for each. */
+export function answerSizes(
+  { built: { job, index }, scenario }: WorkerJob,
+  { run, bothMaterials = false, maxSets = 1 }: SizesQuestion,
+): SizesAnswer | NoAnswer {
+  const at = index.runs.indexOf(run);
+  const code = job.runs[at]?.id;
+  if (code === undefined)
+    return { kind: 'none', reason: 'This run is left out of the results: finish its row first.' };
+  const beyond = beyondFinder(job)(at);
+  const loads = beyond ? new Set(beyond.loads) : null;
+  const outcome = candidates(
+    job,
+    code,
+    (laid, of) => solveJob(laid, { scenario: of, headroom: false, loads }),
+    {
+      scenario,
+      bothMaterials,
+      maxSets,
+    },
+  );
+  if (!outcome.ok) return { kind: 'none', reason: `${outcome.at}: ${outcome.reason}` };
+  const sizes = outcome.candidates.map((candidate) => ({
+    ...candidate,
+    worstCircuitId: candidate.worst ? (index.loadByCode.get(candidate.worst.id)?.circuitId ?? null) : null,
+  }));
+  return { kind: 'sizes', run, code, load: outcome.load, sizes };
+}
