@@ -24,6 +24,7 @@ export async function fillLengths(page: Page, textOf: (index: number) => string)
   for (; await missing(page).isVisible(); filled += 1) {
     const said = (await missing(page).textContent()) ?? '';
     await missing(page).click();
+    await page.locator('[role=gridcell]:focus', { hasText: 'length' }).waitFor();
     await page.keyboard.type(textOf(filled));
     await page.keyboard.press('Enter');
     await page.getByRole('button', { name: said, exact: true }).first().waitFor({ state: 'detached' });
