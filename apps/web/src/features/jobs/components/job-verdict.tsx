@@ -20,12 +20,16 @@ export function WorstDrop({ job }: { job: JobSummary }) {
 export function JobCounts({ job }: { job: JobSummary }) {
   const { verdict } = job;
   if (!verdict) return <span className="text-ink-soft">Open it to have it judged</span>;
+  if (worstKind(verdict) === 'unjudged' && verdict.leftOut === 0)
+    return <span className="text-ink-soft">Nothing to judge yet</span>;
   const stale = verdict.atSeq < job.headSeq;
   return (
     <span className="flex flex-wrap gap-x-4">
-      <VerdictFigure kind={verdict.over > 0 ? 'over' : 'within'} word="">
-        {verdict.over} over
-      </VerdictFigure>
+      {worstKind(verdict) !== 'unjudged' && (
+        <VerdictFigure kind={verdict.over > 0 ? 'over' : 'within'} word="">
+          {verdict.over} over
+        </VerdictFigure>
+      )}
       {verdict.near > 0 && (
         <VerdictFigure kind="near" word="">
           {verdict.near} near
