@@ -5,6 +5,7 @@ import { createContext, type ReactNode, useContext, useEffect, useState, useSync
 import { ask } from '../lib/call.ts';
 import { ErrorState } from '../ui/error-state.tsx';
 import { Skeleton } from '../ui/skeleton.tsx';
+import { useToast } from '../ui/toast.tsx';
 import { jobPort, keptEdits } from './job-port.ts';
 import { Replica, type ReplicaSnapshot } from './replica.ts';
 import { SolverClient } from './solver-client.ts';
@@ -70,6 +71,12 @@ function Opened({ firm, job, archived, open, children }: OpenedProps) {
       client.close();
     };
   }, [replica]);
+
+  const toast = useToast();
+  useEffect(
+    () => replica.onOthers((person, label) => toast(`${person || 'Somebody else'}: ${label}`)),
+    [replica, toast],
+  );
 
   useEffect(() => {
     const look = () => {

@@ -75,7 +75,12 @@ function Computed({ column, circuit, figures, amps, leftOut, feeds }: CellContex
   if (column.key === 'amps')
     return amps === null ? null : <span className="text-ink-soft">{formatFixed(amps, 1)}</span>;
   if (column.key === 'verdict') {
-    if (leftOut !== null) return <Verdict kind="unjudged" word="left out" />;
+    if (leftOut !== null)
+      return (
+        <span title={leftOut}>
+          <Verdict kind="unjudged" word="left out" />
+        </span>
+      );
     if (figures) return <Verdict kind={figures.shown} />;
     if (feeds) return <Verdict kind={feeds.shown} />;
     return circuit.circuit.kind === 'spare' || circuit.circuit.kind === 'reserved' ? (

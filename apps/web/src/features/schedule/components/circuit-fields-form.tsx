@@ -36,21 +36,23 @@ interface FormProps {
 export function CircuitFieldsForm({ circuit, readOnly, onType }: FormProps) {
   return (
     <div className="grid grid-cols-2 gap-x-3 gap-y-2">
-      {FIELDS.map(([field, label, hint]) => (
-        <TypedField
-          key={field}
-          label={label}
-          hint={circuit.next?.field === field ? circuit.next.reason : hint}
-          className={field === 'description' || field === 'notes' ? 'col-span-2' : ''}
-          text={circuit.fields[field].text}
-          active={circuit.next?.field === field}
-          readOnly={readOnly}
-          onTake={(text) => {
-            const problem = onType(field, text);
-            return problem === null ? null : problemWords(label, problem);
-          }}
-        />
-      ))}
+      {FIELDS.filter(([field]) => field !== 'length' || circuit.runs.length > 1).map(
+        ([field, label, hint]) => (
+          <TypedField
+            key={field}
+            label={label}
+            hint={circuit.next?.field === field ? circuit.next.reason : hint}
+            className={field === 'description' || field === 'notes' ? 'col-span-2' : ''}
+            text={circuit.fields[field].text}
+            active={circuit.next?.field === field}
+            readOnly={readOnly}
+            onTake={(text) => {
+              const problem = onType(field, text);
+              return problem === null ? null : problemWords(label, problem);
+            }}
+          />
+        ),
+      )}
       <Field label="Class">
         <Select
           value={circuit.fields.class.text}

@@ -1,18 +1,17 @@
 import type { JobRows } from '@farlug/contract/rows';
 import type { CircuitField, CircuitView, ScheduleChange } from '@farlug/contract/schedule';
-import { formatFixed, formatPercent, formatPercentAgainst } from '@farlug/solver/units';
 import type { ReactNode } from 'react';
 import { Button } from '../../../ui/button.tsx';
-import { KeyFigures } from '../../../ui/key-values.tsx';
 import { SheetSection, SideSheet } from '../../../ui/side-sheet.tsx';
 import { DESK, useMedia } from '../../../ui/use-media.ts';
 import { VerdictSentence } from '../../../ui/verdict.tsx';
-import type { CircuitFigures, JobResult } from '../../../workers/results.ts';
+import type { JobResult } from '../../../workers/results.ts';
 import { breakerText, lineText, wireText } from '../columns.ts';
-import { forceSentence, verdictSentence } from '../verdict-words.ts';
 import { CircuitFieldsForm } from './circuit-fields-form.tsx';
+import { LengthSection } from './length-section.tsx';
 import { PartsSection } from './parts-section.tsx';
-import { VoltsPath } from './volts-path.tsx';
+import { PathSection } from './path-section.tsx';
+import { VerdictSection } from './verdict-section.tsx';
 import { WiringMenu } from './wiring-menu.tsx';
 
 interface CircuitSheetProps {
@@ -49,6 +48,13 @@ export function CircuitSheet(props: CircuitSheetProps) {
   );
   const fields = (
     <>
+      <LengthSection
+        rows={rows}
+        circuit={circuit}
+        readOnly={readOnly}
+        onType={(text) => onType('length', text)}
+        onApply={onApply}
+      />
       <SheetSection title="Fields">
         <CircuitFieldsForm circuit={circuit} readOnly={readOnly} onType={onType} />
       </SheetSection>
@@ -65,6 +71,13 @@ export function CircuitSheet(props: CircuitSheetProps) {
         </SheetSection>
       )}
     </>
+  );
+  const path = figures && !leftOut && (
+    <PathSection
+      worst={figures.worst}
+      lossWatts={result?.runs.get(run?.id ?? '')?.lossWatts ?? null}
+      job={job}
+    />
   );
   return (
     <SideSheet
@@ -83,11 +96,13 @@ export function CircuitSheet(props: CircuitSheetProps) {
           </VerdictSentence>
         </SheetSection>
       )}
-      {figures && !leftOut && <Figures figures={figures} job={job} counted={job} />}
+      {figures && !leftOut && <VerdictSection figures={figures} job={job} />}
+      {desk && path}
       {!desk && fields}
       {(circuit.loads.length > 1 || circuit.runs.length > 1) && (
         <PartsSection rows={rows} circuit={circuit} result={result} readOnly={readOnly} onApply={onApply} />
       )}
+      {!desk && path}
       {below}
       {desk && fields}
       <SheetSection>{cautions}</SheetSection>
@@ -109,63 +124,4 @@ function aboutCircuit(circuit: CircuitView): string {
   ]
     .filter(Boolean)
     .join('. ');
-}
-
-interface FiguresProps {
-  figures: CircuitFigures;
-  job: { limitForce: 'recommendation' | 'mandatory'; limitBasis: string | null };
-  counted: { includeSource: boolean; includeService: boolean; includeTransformer: boolean };
-}
-
-function Figures({ figures, job, counted }: FiguresProps) {
-  const { worst, shown } = figures;
-  const total = worst.totalPercent;
-  const sentence = verdictSentence(
-    shown,
-    worst.reasons,
-    total === null ? '' : formatPercentAgainst(total, worst.limitPercent),
-    worst.limitPercent === null ? null : formatPercent(worst.limitPercent, 2),
-  );
-  const force = forceSentence(shown, job.limitForce, job.limitBasis);
-  return (
-    <>
-      <SheetSection>
-        <VerdictSentence kind={shown} lead={sentence.lead}>
-          {sentence.rest}
-        </VerdictSentence>
-        {force && <p className="mt-1 text-label text-ink-soft">{force}</p>}
-      </SheetSection>
-      {worst.dropVolts !== null && (
-        <SheetSection title={`Where the ${formatFixed(worst.dropVolts, 2)} volts go, service to far lug`}>
-          <VoltsPath
-            load={worst}
-            counted={{
-              source: counted.includeSource,
-              service: counted.includeService,
-              transformer: counted.includeTransformer,
-            }}
-          />
-        </SheetSection>
-      )}
-      {worst.volts !== null && (
-        <SheetSection>
-          <KeyFigures
-            columns={2}
-            items={[
-              ['At the far lug', `${formatFixed(worst.volts, 1)} V`],
-              [
-                'Headroom',
-                worst.headroomAmps === null ? 'no limit' : `${formatFixed(worst.headroomAmps, 1)} A`,
-              ],
-              ['Between', worst.terminals],
-              [
-                'While starting',
-                worst.startingPercent === null ? 'not stated' : formatPercent(worst.startingPercent, 1),
-              ],
-            ]}
-          />
-        </SheetSection>
-      )}
-    </>
-  );
 }

@@ -45,7 +45,10 @@ export function GridCell({
     >
       {children}
       {wrong !== null && (
-        <span role="alert" className="block max-w-64 text-left text-label whitespace-normal text-over">
+        <span
+          role="alert"
+          className="absolute top-full left-0 z-20 block w-72 border border-over bg-sheet px-2 py-1 text-left text-label whitespace-normal text-over"
+        >
           {wrong}
         </span>
       )}

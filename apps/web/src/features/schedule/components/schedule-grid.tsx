@@ -87,6 +87,10 @@ export function ScheduleGrid(props: ScheduleGridProps) {
     if (above && field) typeHere(above.fields[field].text);
   };
 
+  // Only as long as the text that was not understood stands in the cell.
+  const wrongIn = ({ circuit: { id, fields } }: CellContext, { key, field: typed }: GridColumn) =>
+    problem?.id === id && problem.key === key && typed && fields[typed].draft ? problem.text : null;
+
   const onKey = (event: KeyboardEvent) => {
     if (editing) return;
     const command = event.ctrlKey || event.metaKey;
@@ -173,7 +177,7 @@ export function ScheduleGrid(props: ScheduleGridProps) {
                     place={`${r}:${c}`}
                     here={here}
                     editing={here && editing !== null}
-                    wrong={problem?.id === cell.circuit.id && problem.key === one.key ? problem.text : null}
+                    wrong={wrongIn(cell, one)}
                     onClick={() => {
                       if (here && editing) return;
                       go({ row: r, column: c });

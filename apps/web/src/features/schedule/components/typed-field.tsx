@@ -5,6 +5,7 @@ import { TextInput } from '../../../ui/text-input.tsx';
 interface TypedFieldProps {
   label: React.ReactNode;
   hint: string | null;
+  hideLabel?: boolean;
   className?: string;
   /** As it stands in the row. */
   text: string;
@@ -16,7 +17,16 @@ interface TypedFieldProps {
 }
 
 /** Taken when it is left or Enter is pressed; what is not understood stays, with the reason. */
-export function TypedField({ label, hint, className, text, readOnly, onTake, active }: TypedFieldProps) {
+export function TypedField({
+  label,
+  hint,
+  hideLabel,
+  className,
+  text,
+  readOnly,
+  onTake,
+  active,
+}: TypedFieldProps) {
   const [typed, setTyped] = useState<string | null>(null);
   const [problem, setProblem] = useState<string | null>(null);
   const take = () => {
@@ -25,7 +35,7 @@ export function TypedField({ label, hint, className, text, readOnly, onTake, act
     setTyped(null);
   };
   return (
-    <Field label={label} hint={hint} error={problem} className={className}>
+    <Field label={label} hideLabel={hideLabel ?? false} hint={hint} error={problem} className={className}>
       <TextInput
         value={typed ?? text}
         maxLength={400}
