@@ -1,4 +1,10 @@
-import { type CircuitField, changeCircuitFieldEdit, circuitParts } from '@farlug/contract/schedule';
+import {
+  type CircuitField,
+  changeCircuitFieldEdit,
+  circuitParts,
+  type Feed,
+} from '@farlug/contract/schedule';
+import { parseBreaker } from '@farlug/solver/units';
 import type { EditChain } from './edit-chain.ts';
 
 export interface BreakerDraft {
@@ -16,4 +22,11 @@ export function typeBreaker(chain: EditChain, circuitId: string, draft: BreakerD
   };
   type('breaker', 'breaker', 'Breaker');
   type('spaces', 'breakerSpaces', 'Spaces');
+}
+
+/** A feed with poles and amps as typed for its breaker; null where that text is no breaker. */
+export function withBreaker(feed: Feed, typed: string): Feed | null {
+  if ('busId' in feed || typed.trim() === '') return feed;
+  const read = parseBreaker(typed, 3);
+  return read.ok ? { ...feed, poles: read.poles, amps: String(read.amps) } : null;
 }

@@ -1,6 +1,6 @@
 import type { JobRows, Row } from '@farlug/contract/rows';
 import { addFeederEdit, circuitParts, fieldText } from '@farlug/contract/schedule';
-import { type BreakerDraft, typeBreaker } from './breaker-draft.ts';
+import { type BreakerDraft, typeBreaker, withBreaker } from './breaker-draft.ts';
 import { EditChain } from './edit-chain.ts';
 import { busOfFeed, type FeedValue, feedOf } from './feed-choices.ts';
 import type { Settled } from './panel-draft.ts';
@@ -55,8 +55,10 @@ function addFeeder(chain: EditChain, draft: FeederDraft): string | null {
   if (!feed) chain.refuse('from', 'Choose where the run starts.');
   if (to === null) chain.refuse('to', 'Choose where the run ends.');
   if (draft.code.trim() === '') chain.refuse('code', 'Give the run a name, such as F7.');
-  if (!feed || to === null || draft.code.trim() === '') return null;
-  const added = addFeederEdit(chain.rows, feed, to, draft.code);
+  const place = feed && withBreaker(feed, draft.breaker);
+  if (feed && !place) chain.refuse('breaker', 'Breaker must be amps and poles, such as 200/3.');
+  if (!place || to === null || draft.code.trim() === '') return null;
+  const added = addFeederEdit(chain.rows, place, to, draft.code);
   const field = added.problem?.includes('name')
     ? 'code'
     : added.problem?.includes('open spaces')

@@ -2,6 +2,7 @@ import { PANEL_LAYOUTS, type PanelLayout } from '@farlug/solver/job';
 import { useMemo } from 'react';
 import { useForm } from '../../../lib/use-form.ts';
 import { Button } from '../../../ui/button.tsx';
+import { Checkbox } from '../../../ui/checkbox.tsx';
 import { Field } from '../../../ui/field.tsx';
 
 import { Message } from '../../../ui/message.tsx';
@@ -101,7 +102,15 @@ export function PanelDialog({ rows, apply, onClose, onAsk, panelId, feed, onDone
               ]}
             />
           </Field>
-          {fromPanel && (
+          {fromPanel && !panel && (
+            <Checkbox
+              className="desk:col-span-2"
+              checked={values.feedThrough}
+              onChecked={(feedThrough) => set('feedThrough', feedThrough)}
+              label="By its feed-through lugs, without a breaker there"
+            />
+          )}
+          {fromPanel && !values.feedThrough && (
             <>
               <TypedInput
                 label="Breaker there"

@@ -134,3 +134,12 @@ test('the first panel of a job hangs on the service', () => {
   expect(draft.feed).toBe(`bus:${[...rows.source.values()][0]!.busId}`);
   expect(newPanelDraft(rows, '').feed).toBe('');
 });
+
+test('a panel is fed by feed-through lugs, or by a breaker of two poles', () => {
+  const draft = { ...newPanelDraft(rows, feedOf('DP-L')), code: 'LP-7' };
+  const through = panelOf(after(rows, settlePanel(rows, null, { ...draft, feedThrough: true })), 'LP-7');
+  expect(through.fedFromText).toBe('DP-L');
+  const two = panelOf(after(rows, settlePanel(rows, null, { ...draft, breaker: '60/2' })), 'LP-7');
+  expect(two.panel.lines).toHaveLength(2);
+  expect(settlePanel(rows, null, { ...draft, breaker: 'sixty' }).errors.breaker).toMatch(/amps and poles/);
+});

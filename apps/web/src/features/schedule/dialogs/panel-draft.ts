@@ -3,6 +3,7 @@ import type { JobRows, Row } from '@farlug/contract/rows';
 import {
   addPanelEdit,
   circuitParts,
+  type Feed,
   fieldText,
   panelTree,
   type RowField,
@@ -10,9 +11,8 @@ import {
   renamePointEdit,
   scheduleView,
 } from '@farlug/contract/schedule';
-import { parseBreaker } from '@farlug/solver/units';
 import type { FieldErrors } from '../../../lib/form-errors.ts';
-import { typeBreaker } from './breaker-draft.ts';
+import { typeBreaker, withBreaker } from './breaker-draft.ts';
 import { EditChain } from './edit-chain.ts';
 import { busOfFeed, type FeedValue, feedOf, firstFeed } from './feed-choices.ts';
 import { rowTexts } from './row-texts.ts';
@@ -32,6 +32,8 @@ const PANEL_FIELDS = [
 
 export type PanelDraft = Record<(typeof PANEL_FIELDS)[number] | 'code' | 'name', string> & {
   feed: FeedValue;
+  /** By the lugs at the far end of that panel's bus bars, without a breaker. */
+  feedThrough: boolean;
   /** In the panel that feeds it. */
   breaker: string;
   breakerSpaces: string;
@@ -52,6 +54,7 @@ export const newPanelDraft = (rows: JobRows, feed: FeedValue): PanelDraft => ({
   mounting: '',
   notes: '',
   feed: feed || firstFeed(rows),
+  feedThrough: false,
   breaker: '',
   breakerSpaces: '',
   run: NEW_RUN,
@@ -66,6 +69,7 @@ export function panelDraft(rows: JobRows, panel: Row<'panel'>): PanelDraft {
     code: bus.code,
     name: bus.name ?? '',
     feed: feedValue(rows, panel.id),
+    feedThrough: circuit?.circuit.kind === 'feed-through',
     breaker: circuit ? fieldText(circuit, 'breaker') : '',
     breakerSpaces: circuit ? fieldText(circuit, 'spaces') : '',
     run: run ? runTexts(rows, run) : NEW_RUN,
@@ -132,30 +136,28 @@ export function settlePanel(rows: JobRows, panelId: string | null, draft: PanelD
 }
 
 function addPanel(chain: EditChain, draft: PanelDraft): string | null {
-  const breaker = breakerOf(draft);
-  if (breaker === 'refused') chain.refuse('breaker', 'Breaker must be amps and poles, such as 200/3.');
-  const feed = feedOf(draft.feed);
-  const given =
-    feed && 'panelId' in feed && breaker && breaker !== 'refused' ? { ...feed, ...breaker } : feed;
-  const added = addPanelEdit(chain.rows, { code: draft.code, feed: given });
+  const feed = placeOf(draft);
+  if (feed === 'refused') chain.refuse('breaker', NO_BREAKER);
+  const added = addPanelEdit(chain.rows, { code: draft.code, feed: feed === 'refused' ? null : feed });
   const field = added.problem?.includes('open spaces') ? 'feed' : 'code';
   return chain.take(field, added) ? added.id : null;
 }
 
 function refeed(chain: EditChain, panelId: string, draft: PanelDraft): void {
   const now = feedValue(chain.rows, panelId);
-  const same = busOfFeed(chain.rows, now) === busOfFeed(chain.rows, draft.feed);
-  const feed = feedOf(draft.feed);
-  if (same || !feed) return;
-  const breaker = breakerOf(draft);
-  const place = 'panelId' in feed && breaker && breaker !== 'refused' ? { ...feed, ...breaker } : feed;
-  chain.take('feed', refeedPanelEdit(chain.rows, panelId, place));
+  if (busOfFeed(chain.rows, now) === busOfFeed(chain.rows, draft.feed)) return;
+  const feed = placeOf(draft);
+  if (feed === 'refused') chain.refuse('breaker', NO_BREAKER);
+  else if (feed) chain.take('feed', refeedPanelEdit(chain.rows, panelId, feed));
 }
 
-function breakerOf({ breaker }: PanelDraft): { poles: 1 | 2 | 3; amps: string } | 'refused' | null {
-  if (breaker.trim() === '') return null;
-  const read = parseBreaker(breaker, 3);
-  return read.ok ? { poles: read.poles, amps: String(read.amps) } : 'refused';
+const NO_BREAKER = 'Breaker must be amps and poles, such as 200/3.';
+
+function placeOf({ feed: value, breaker, feedThrough }: PanelDraft): Feed | null | 'refused' {
+  const feed = feedOf(value);
+  if (!feed) return null;
+  if (feedThrough && 'panelId' in feed) return { ...feed, feedThrough: true };
+  return withBreaker(feed, breaker) ?? 'refused';
 }
 
 /** A panel cannot be smaller than the spaces that its circuits take. */
