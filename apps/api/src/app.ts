@@ -3,8 +3,10 @@ import { authenticate } from './auth/authenticate.ts';
 import type { Deps } from './deps.ts';
 import { registerAccounts } from './features/accounts/accounts-routes.ts';
 import { registerFirm } from './features/firm/firm-routes.ts';
+import { registerInspection } from './features/inspection/inspection-routes.ts';
 import { registerJobs } from './features/jobs/jobs-routes.ts';
 import { registerMailbox } from './features/mailbox/mailbox-routes.ts';
+import { registerReports } from './features/reports/reports-routes.ts';
 import { registerSchedule } from './features/schedule/schedule-routes.ts';
 import { answerErrors } from './http/error-answer.ts';
 import { createFrame, type Frame } from './http/frame.ts';
@@ -20,6 +22,8 @@ const FEATURES: readonly ((frame: Frame) => void)[] = [
   registerFirm,
   registerJobs,
   registerSchedule,
+  registerReports,
+  registerInspection,
   registerMailbox,
 ];
 

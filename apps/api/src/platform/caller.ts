@@ -16,6 +16,7 @@ export interface Member {
 /** What an opened inspection link left in the browser's session. */
 export interface InspectionGrant {
   firmId: string;
+  jobId: string;
   deliveryId: string;
   epoch: number;
 }

@@ -1,7 +1,8 @@
 import { type JobRows, listsFromRows } from '@farlug/contract/rows';
 import type { Scenario } from '@farlug/solver/job';
+import type { Answer, AnswerTo } from '../workers/answers.ts';
 import type { FromWorker, ToWorker } from '../workers/protocol.ts';
-import type { Answer, AnswerTo, Question } from '../workers/questions.ts';
+import type { Question } from '../workers/questions.ts';
 import type { JobResult } from '../workers/results.ts';
 import type { RowsChange } from './replica.ts';
 

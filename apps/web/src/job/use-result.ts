@@ -2,7 +2,8 @@ import type { Scenario } from '@farlug/solver/job';
 import { SCENARIOS } from '@farlug/solver/job';
 import { useCallback, useEffect, useState, useSyncExternalStore } from 'react';
 import { useSearchParams } from 'react-router-dom';
-import type { AnswerTo, Question } from '../workers/questions.ts';
+import type { AnswerTo } from '../workers/answers.ts';
+import type { Question } from '../workers/questions.ts';
 import { useOpenJob } from './open-job.tsx';
 import type { SolverSnapshot } from './solver-client.ts';
 

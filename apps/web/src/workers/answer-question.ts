@@ -1,7 +1,8 @@
 import { answerEquations } from './answer-equations.ts';
 import { answerHandCheck } from './answer-hand-check.ts';
 import { answerSizes } from './answer-sizes.ts';
-import type { Answer, Question, WorkerJob } from './questions.ts';
+import type { Answer } from './answers.ts';
+import type { Question, WorkerJob } from './questions.ts';
 
 export function answerQuestion(job: WorkerJob, question: Question): Answer {
   const [problem] = job.built.problems;

@@ -1,7 +1,8 @@
 import type { Edit } from '@farlug/contract/edit';
 import type { JobRowLists } from '@farlug/contract/rows';
 import type { Scenario } from '@farlug/solver/job';
-import type { Answer, Question } from './questions.ts';
+import type { Answer } from './answers.ts';
+import type { Question } from './questions.ts';
 import type { JobResult } from './results.ts';
 
 /**

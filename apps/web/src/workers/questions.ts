@@ -1,8 +1,5 @@
 import type { JobFromRows } from '@farlug/contract/job';
 import type { Scenario } from '@farlug/solver/job';
-import type { EquationsAnswer } from './answer-equations.ts';
-import type { HandCheckAnswer } from './answer-hand-check.ts';
-import type { SizesAnswer } from './answer-sizes.ts';
 
 /** What a page may ask the worker beside the results that it is always sent. Runs and panels by row. */
 export type SizesQuestion = { kind: 'sizes'; run: string; bothMaterials?: boolean; maxSets?: number };
@@ -15,11 +12,6 @@ export interface NoAnswer {
   kind: 'none';
   reason: string;
 }
-export type Answer = SizesAnswer | HandCheckAnswer | EquationsAnswer | NoAnswer;
-export type AnswerTo<Q extends Question> =
-  | NoAnswer
-  | (Q extends SizesQuestion ? SizesAnswer : Q extends HandCheckQuestion ? HandCheckAnswer : EquationsAnswer);
-
 /** The job that a question is about, as the worker holds it. */
 export interface WorkerJob {
   built: JobFromRows;

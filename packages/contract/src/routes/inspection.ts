@@ -1,6 +1,7 @@
 import { jobSchema } from '@farlug/solver/job';
 import { z } from 'zod';
 import { EVERYONE, INSPECTION, route } from '../route.ts';
+import { LENGTH_STATES } from '../rows/index.ts';
 import { empty, instant, none, ok, token } from './common.ts';
 import { decisionBody, decisionView, PAPER_SIZES, PDF_STATES } from './reports.ts';
 
@@ -36,6 +37,19 @@ export const revisionInput = z.strictObject({
   /** Ampacity-floor overrides with the reason that was given. */
   overrides: z.array(z.strictObject({ run: z.string(), reason: z.string() })),
   tables: z.array(z.strictObject({ id: z.string(), source: z.string(), sha256: z.string() })),
+  /** How each run's length was come by, where it is said. */
+  lengths: z.array(z.strictObject({ run: z.string(), state: z.enum(LENGTH_STATES) })),
+  /** What the schedule says of a row beyond the job file, by its place in `job.panels[panel].circuits[row]`. */
+  rowWords: z.array(
+    z.strictObject({
+      panel: z.int(),
+      row: z.int(),
+      code: z.string(),
+      room: z.string(),
+      loadType: z.string(),
+      notes: z.string(),
+    }),
+  ),
   notices: z.array(z.string()),
   firmWording: z.string(),
 });
@@ -56,6 +70,33 @@ export const openInspection = route({
   errors: ['invalid', 'link_gone', 'too_many'],
 });
 
+/** What a report says in a few lines: counts by circuit, and what exceeds or is near a limit, worst first. */
+export const reportDigest = z.strictObject({
+  counts: z.strictObject({
+    over: z.int(),
+    rise: z.int(),
+    near: z.int(),
+    within: z.int(),
+    unjudged: z.int(),
+    unserved: z.int(),
+  }),
+  findings: z.array(
+    z.strictObject({
+      /** `LP-2-20` or, of a load in no circuit, its own id. */
+      place: z.string(),
+      serves: z.string(),
+      load: z.string(),
+      shown: z.enum(['over', 'rise', 'near']),
+      feederPercent: z.number().nullable(),
+      branchPercent: z.number().nullable(),
+      totalPercent: z.number().nullable(),
+      limitPercent: z.number().nullable(),
+      reasons: z.array(z.string()),
+    }),
+  ),
+});
+export type ReportDigest = z.output<typeof reportDigest>;
+
 export const inspectionView = z.strictObject({
   recipientName: z.string(),
   revisionNo: z.int(),
@@ -67,6 +108,7 @@ export const inspectionView = z.strictObject({
   /** A later revision exists: this one is no longer the newest. */
   superseded: z.boolean(),
   input: revisionInput,
+  digest: reportDigest,
   decisions: z.array(decisionView),
 });
 export type InspectionView = z.output<typeof inspectionView>;
