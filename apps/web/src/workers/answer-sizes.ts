@@ -1,5 +1,5 @@
 import { beyondFinder } from '@farlug/solver/job';
-import { solveJob } from '@farlug/solver/judge';
+import { prepareJob } from '@farlug/solver/judge';
 import { type Candidate, candidates, type FloorLoad } from '@farlug/solver/sizing';
 import type { NoAnswer, SizesQuestion, WorkerJob } from './questions.ts';
 
@@ -17,7 +17,7 @@ export interface SizesAnswer {
   sizes: SizeFigures[];
 }
 
-/** Every size of a run side by side; only what lies beyond it is judged again for each. */
+/** Every size of a run side by side; only what lies beyond it is judged again for each, and the run is shown as elsewhere. */
 export function answerSizes(
   { built: { job, index }, scenario }: WorkerJob,
   { run, bothMaterials = false, maxSets = 1 }: SizesQuestion,
@@ -31,7 +31,14 @@ export function answerSizes(
   const outcome = candidates(
     job,
     code,
-    (laid, of) => solveJob(laid, { scenario: of, headroom: false, loads }),
+    (laid, of) => {
+      const prepared = prepareJob(laid, { headroom: false, loads });
+      if (prepared.kind !== 'prepared') return prepared;
+      const outcome = prepared.solve(of);
+      if (outcome.kind !== 'solved') return outcome;
+      const { solution } = outcome;
+      return { kind: 'solved', solution: { ...solution, runs: prepared.shownRuns(solution, at) } };
+    },
     {
       scenario,
       bothMaterials,

@@ -36,6 +36,18 @@ describe('runs as pages show them', () => {
       expect(byId(runs, run!).dropPercent).toBeCloseTo(byId(solution.loads, load!).branchPercent!, 9);
   });
 
+  it('shows one run alone as it shows it among all', () => {
+    const { job, solve, shownRuns } = prepared('tannery-row');
+    const outcome = solve('each-circuit');
+    if (outcome.kind !== 'solved') throw new Error(outcome.reason);
+    const all = shownRuns(outcome.solution);
+    const at = job.runs.findIndex(({ id }) => id === 'LP-2-20');
+    const alone = shownRuns(outcome.solution, at);
+    expect(alone[at]).toEqual(all[at]);
+    expect(alone[at]).not.toEqual(outcome.solution.runs[at]);
+    expect(alone.filter((run, i) => run !== outcome.solution.runs[i])).toHaveLength(1);
+  });
+
   it('leaves feeders at design demand, and every run in the other scenarios', () => {
     const { job, solution, runs } = solved('tannery-row', 'each-circuit');
     for (const { id } of job.runs.filter(({ kind }) => kind !== 'branch'))

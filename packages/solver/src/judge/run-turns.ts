@@ -5,13 +5,21 @@ import { turnsOf } from './demand.ts';
 import { runElements, runFlow } from './run-results.ts';
 import type { TurnSolver } from './turn-solver.ts';
 
-/** Branch runs each in the turn of its circuit that drops it most; other runs as they are given. */
-export function runsInTurns(core: Core, solver: TurnSolver, runs: readonly RunResult[]): RunResult[] {
+/**
+ * Branch runs each in the turn of its circuit that drops it most; other runs as they are given. `only`, the index of
+ * a run, leaves the circuits without it as they are given too.
+ */
+export function runsInTurns(
+  core: Core,
+  solver: TurnSolver,
+  runs: readonly RunResult[],
+  only: number | null = null,
+): RunResult[] {
   const shown = [...runs];
   let elements: readonly Element[] = [];
   let byRun: Element[][] = [];
   for (const [circuit, { runs: own, buses }] of core.circuits.list.entries()) {
-    if (own.length === 0) continue;
+    if (own.length === 0 || (only !== null && !own.includes(only))) continue;
     solver.open(circuit, nodesAt(core, buses));
     const worst = new Map<number, number>();
     for (const turn of turnsOf(core, circuit)) {

@@ -21,8 +21,8 @@ export interface Prepared {
   kind: 'prepared';
   job: Job;
   solve: (scenario: Scenario) => SolveOutcome;
-  /** Runs as pages show them: in `each-circuit` a branch run is shown in the turn of its circuit that drops it most. */
-  shownRuns: (solution: Solution) => RunResult[];
+  /** Runs as pages show them: in `each-circuit` a branch run is shown in the turn of its circuit that drops it most. `only`: the index of the one run that is wanted so. */
+  shownRuns: (solution: Solution, only?: number) => RunResult[];
 }
 
 const EVERYTHING: Wanted = { headroom: true, loads: null };
@@ -46,8 +46,8 @@ export function prepareJob(job: Job, wanted: Wanted = EVERYTHING): Prepared | Re
     kind: 'prepared',
     job,
     solve: (scenario) => solveScenario(core, credits, design, judge, turns, scenario),
-    shownRuns: (solution) =>
-      solution.scenario === 'each-circuit' ? runsInTurns(core, solver, solution.runs) : solution.runs,
+    shownRuns: (solution, only) =>
+      solution.scenario === 'each-circuit' ? runsInTurns(core, solver, solution.runs, only) : solution.runs,
   };
 }
 
