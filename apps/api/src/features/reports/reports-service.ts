@@ -1,7 +1,9 @@
 import type { DeliveryView, RevisionSummary } from '@farlug/contract/routes';
 import {
+  addLink,
   createDelivery,
   type DecisionRow,
+  type DeliveryRow,
   deliveryById,
   enqueue,
   type FirmTransaction,
@@ -21,9 +23,11 @@ import {
 import type { Deps } from '../../deps.ts';
 import type { FileAnswer } from '../../http/call.ts';
 import { messageIdFor } from '../../mail/message-id.ts';
+import { tokenHash } from '../../platform/account-token.ts';
 import type { Member } from '../../platform/caller.ts';
 import { canonicalJson } from '../../platform/canonical-hash.ts';
 import { DONE, type Done } from '../../platform/done.ts';
+import { linkToken } from '../../platform/link-token.ts';
 import { type Refusal, refusalAsValue, refuse } from '../../platform/refusal.ts';
 import { reportFileName } from './report-file-name.ts';
 import { deliveryViewOf, revisionSummaryOf } from './reports-presenter.ts';
@@ -102,6 +106,10 @@ export function revisionInputFile(
   });
 }
 
+/** Where the mailed link will lead, by the hash of its secret. */
+const keepLink = (deps: Deps, tx: FirmTransaction, jobId: string, { id, epoch }: DeliveryRow) =>
+  addLink(tx, tokenHash(linkToken(deps.config.linkSecret, id, epoch)), { jobId, deliveryId: id, epoch });
+
 export interface NewSending {
   delivery: string;
   recipientName: string;
@@ -139,6 +147,7 @@ export function sendRevision(
       if (!same)
         throw refuse('conflict', 'There is a delivery with this id already. Send it under a new id.');
     } else {
+      await keepLink(deps, tx, jobId, delivery!);
       await enqueue(tx, 'send-report', { firmId: member.firmId, jobId, deliveryId: id });
       await recordAudit(tx, 'report.sent', `revision ${revision.no} to ${to.recipientEmail}`);
     }
@@ -183,6 +192,7 @@ export function renewLink(
     });
     if (renewed === null)
       throw refuse('conflict', 'The message is on its way this moment. Renew its link when it has arrived.');
+    await keepLink(deps, tx, jobId, renewed);
     await enqueue(tx, 'send-report', { firmId: member.firmId, jobId, deliveryId });
     await recordAudit(tx, 'link.renewed', renewed.recipientEmail);
     return deliveryViewOf(renewed, deps.now());

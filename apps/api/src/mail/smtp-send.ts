@@ -1,0 +1,121 @@
+import { Readable } from 'node:stream';
+import MailComposer from 'nodemailer/lib/mail-composer';
+import SMTPConnection from 'nodemailer/lib/smtp-connection';
+
+export interface Letter {
+  from: string;
+  to: { name: string; address: string };
+  subject: string;
+  text: string;
+  html: string;
+  messageId: string;
+  attachments: { filename: string; content: Buffer; contentType: string }[];
+}
+
+/**
+ * How sending a message ended. `refused` before or after its body by an answer of the server: nothing was delivered,
+ * and `retry` says whether later may be better. `lost`: the connection ended after the body began to go out, without
+ * an answer: nobody knows.
+ */
+export type SendOutcome =
+  | { kind: 'sent'; response: string }
+  | { kind: 'refused'; retry: boolean; reason: string }
+  | { kind: 'lost'; reason: string };
+
+interface SmtpError extends Error {
+  code?: string;
+  responseCode?: number;
+}
+
+const CONNECT_MS = 15_000;
+const SILENCE_MS = 60_000;
+
+/** Sends one message over SMTP (RFC 5321), knowing at every moment whether its body has begun to go out. */
+export async function sendBySmtp(smtpUrl: string, letter: Letter): Promise<SendOutcome> {
+  const message = await compose(letter);
+  const connection = new SMTPConnection(connectionOptions(smtpUrl));
+  let bodyBegan = false;
+  const body = new Readable({
+    read() {
+      bodyBegan = true;
+      this.push(message);
+      this.push(null);
+    },
+  });
+  try {
+    await new Promise<void>((resolve, reject) => {
+      connection.once('error', reject);
+      connection.once('end', () => reject(new Error('the server closed the connection')));
+      connection.connect((error) => (error ? reject(error) : resolve()));
+    });
+    await logIn(connection, smtpUrl);
+    const response = await new Promise<string>((resolve, reject) => {
+      connection.once('error', reject);
+      connection.once('end', () => reject(new Error('the server closed the connection')));
+      const envelope = { from: addressOf(letter.from), to: [letter.to.address] };
+      connection.send(envelope, body, (error, info) => {
+        if (error) reject(error);
+        else resolve(info.response);
+      });
+    });
+    connection.quit();
+    return { kind: 'sent', response };
+  } catch (error) {
+    connection.close();
+    return outcomeOf(error as SmtpError, bodyBegan);
+  }
+}
+
+function outcomeOf(error: SmtpError, bodyBegan: boolean): SendOutcome {
+  const reason = error.message;
+  if (error.responseCode !== undefined) return { kind: 'refused', retry: error.responseCode < 500, reason };
+  if (bodyBegan) return { kind: 'lost', reason };
+  // Name resolution, refused connections and silence before the message may pass; a broken address will not.
+  return { kind: 'refused', retry: error.code !== 'EENVELOPE', reason };
+}
+
+const compose = (letter: Letter): Promise<Buffer> =>
+  new MailComposer({
+    from: letter.from,
+    to: letter.to,
+    subject: letter.subject,
+    text: letter.text,
+    html: letter.html,
+    messageId: letter.messageId,
+    attachments: letter.attachments,
+    disableFileAccess: true,
+    disableUrlAccess: true,
+  })
+    .compile()
+    .build();
+
+const addressOf = (from: string): string => /<([^>]+)>/.exec(from)?.[1] ?? from;
+
+const LOOPBACK = /^(127\.|localhost$|\[?::1\]?$)/;
+
+function connectionOptions(smtpUrl: string) {
+  const url = new URL(smtpUrl);
+  const secure = url.protocol === 'smtps:';
+  return {
+    host: url.hostname.replace(/^\[|\]$/g, ''),
+    port: Number(url.port || (secure ? 465 : 587)),
+    secure,
+    // A password never goes out in the clear, except to this machine itself.
+    requireTLS: !secure && url.username !== '' && !LOOPBACK.test(url.hostname),
+    ignoreTLS: LOOPBACK.test(url.hostname),
+    connectionTimeout: CONNECT_MS,
+    greetingTimeout: CONNECT_MS,
+    socketTimeout: SILENCE_MS,
+    disableFileAccess: true,
+  };
+}
+
+function logIn(connection: SMTPConnection, smtpUrl: string): Promise<void> {
+  const { username, password } = new URL(smtpUrl);
+  if (username === '') return Promise.resolve();
+  return new Promise((resolve, reject) => {
+    connection.login({ user: decodeURIComponent(username), pass: decodeURIComponent(password) }, (error) =>
+      error ? reject(error) : resolve(),
+    );
+  });
+}
