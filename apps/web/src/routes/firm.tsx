@@ -10,7 +10,7 @@ export function Component() {
   const { firmId, person, mayManage } = useMembership();
   const known = FIRM_PARTS.find((name) => name === part);
   if (!known || (known === 'audit' && !mayManage))
-    return <EmptyState title="There is no such part of the firm." />;
+    return <EmptyState level="h1" title="There is no such part of the firm." />;
   return (
     <FirmPage
       key={firmId}

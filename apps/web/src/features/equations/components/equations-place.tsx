@@ -47,7 +47,7 @@ export function EquationsPlace({
   const answer = useAnswer(panel ? { kind: 'equations', panel: panel.id } : null);
   if (!panel)
     return (
-      <EmptyState title="No panel yet">
+      <EmptyState level="h1" title="No panel yet">
         The node equations of a panel stand here once there is one.
       </EmptyState>
     );

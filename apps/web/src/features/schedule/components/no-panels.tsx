@@ -10,6 +10,7 @@ interface NoPanelsProps {
 export function NoPanels({ readOnly, onPanel, onUpload }: NoPanelsProps) {
   return (
     <EmptyState
+      level="h1"
       title="No panel yet"
       actions={
         !readOnly && (

@@ -6,6 +6,7 @@ import { useOpenJob, useReplica } from '../../../job/open-job.tsx';
 import { useAnswer, useResult, useScenario } from '../../../job/use-result.ts';
 import { SCENARIO_WORDS } from '../../../lib/job-words.ts';
 import { usePageTitle } from '../../../lib/use-page-title.ts';
+import { Button } from '../../../ui/button.tsx';
 import { Checkbox } from '../../../ui/checkbox.tsx';
 import { EmptyState } from '../../../ui/empty-state.tsx';
 import { Field } from '../../../ui/field.tsx';
@@ -28,13 +29,14 @@ export function SizesPlace({
   cautions: ReactNode;
   handCheckFor?: (run: string) => ReactNode;
 }) {
-  const { firm, job, archived } = useOpenJob();
-  const { rows } = useReplica();
-  const { result, solving } = useResult();
+  const { firm, job, archived, replica } = useOpenJob();
+  const { rows, undo } = useReplica();
+  const { result, solving, fault } = useResult();
   const [scenario] = useScenario();
   const [params, setParams] = useSearchParams();
   const [both, setBoth] = useState(false);
   const [sets, setSets] = useState<(typeof SETS)[number]>('1');
+  const [problem, setProblem] = useState<string | null>(null);
   const jobRow = [...rows.job.values()][0]!;
   usePageTitle('Sizes', jobRow.name);
   const choices = runChoices(rows, result);
@@ -44,9 +46,14 @@ export function SizesPlace({
     run ? { kind: 'sizes', run: run.id, bothMaterials: both, maxSets: Number(sets) } : null,
   );
 
+  const takeBack = () => {
+    const done = replica.undo();
+    setProblem(done.ok ? null : done.message);
+  };
+
   if (choices.length === 0)
     return (
-      <EmptyState title="No run yet">
+      <EmptyState level="h1" title="No run yet">
         Runs appear here with the <Link to={paths.schedule(firm, job)}>schedule’s</Link> circuits and feeders.
       </EmptyState>
     );
@@ -67,7 +74,9 @@ export function SizesPlace({
             'Every size of its material, each by solving the whole job again'
           )
         }
+        actions={undo !== null && !archived && <Button onClick={takeBack}>Undo: {undo}</Button>}
       />
+      {problem && <Message kind="wrong">{problem}</Message>}
       <div className="flex flex-wrap items-end gap-x-6 gap-y-2 border-b border-rule px-4 pb-3">
         <Field label="Run" className="w-full desk:w-96">
           <Select
@@ -92,6 +101,10 @@ export function SizesPlace({
       </div>
       {!run ? (
         <Message kind="wrong">This run is not in the job any more. Choose another one.</Message>
+      ) : fault ? (
+        <Message kind="wrong">
+          The solver stopped: {fault}. Nothing that was typed is lost; reload the page to go on.
+        </Message>
       ) : answer === null ? (
         <Skeleton rows={12} label="Solving the job once for every size" />
       ) : answer.kind === 'none' ? (
@@ -122,7 +135,12 @@ export function SizesPlace({
           </div>
         </>
       )}
-      {run && handCheckFor && <div className="max-w-200">{handCheckFor(run.id)}</div>}
+      {run && handCheckFor && (
+        <div className="max-w-200">
+          <h2 className="sr-only">Checked by hand</h2>
+          {handCheckFor(run.id)}
+        </div>
+      )}
       <div className="border-t border-rule px-4 py-3">{cautions}</div>
     </Scroller>
   );
