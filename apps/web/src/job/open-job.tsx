@@ -63,7 +63,7 @@ function Opened({ firm, job, archived, open, children }: OpenedProps) {
   const [solver, setSolver] = useState<SolverClient | null>(null);
 
   useEffect(() => {
-    const client = new SolverClient(replica.getSnapshot().rows);
+    const client = new SolverClient(() => replica.getSnapshot().rows);
     const stop = replica.onChange((change) => client.follow(change));
     setSolver(client);
     return () => {

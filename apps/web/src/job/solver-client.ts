@@ -1,9 +1,10 @@
 import { type JobRows, listsFromRows } from '@farlug/contract/rows';
 import type { Scenario } from '@farlug/solver/job';
-import type { Answer, AnswerTo } from '../workers/answers.ts';
-import type { FromWorker, ToWorker } from '../workers/protocol.ts';
+import type { AnswerTo } from '../workers/answers.ts';
+import type { FromSolver, ToSolver } from '../workers/protocol.ts';
 import type { Question } from '../workers/questions.ts';
 import type { JobResult } from '../workers/results.ts';
+import { AnswerClient } from './answer-client.ts';
 import type { RowsChange } from './replica.ts';
 
 export interface SolverSnapshot {
@@ -19,16 +20,16 @@ export interface SolverSnapshot {
 export class SolverClient {
   private readonly worker: Worker;
   private generation = 0;
-  private nextAsk = 0;
-  private readonly waiting = new Map<number, (answer: Answer) => void>();
+  private readonly answers: AnswerClient;
   private readonly listeners = new Set<() => void>();
   private snapshot: SolverSnapshot = { scenario: 'each-circuit', result: null, solving: true, fault: null };
 
-  constructor(rows: JobRows) {
+  constructor(rowsNow: () => JobRows) {
     this.worker = new Worker(new URL('../workers/solve-worker.ts', import.meta.url), { type: 'module' });
-    this.worker.addEventListener('message', (event: MessageEvent<FromWorker>) => this.receive(event.data));
+    this.worker.addEventListener('message', (event: MessageEvent<FromSolver>) => this.receive(event.data));
     this.worker.addEventListener('error', (event) => this.update({ fault: event.message, solving: false }));
-    this.open(rows);
+    this.answers = new AnswerClient(rowsNow);
+    this.open(rowsNow());
   }
 
   getSnapshot = (): SolverSnapshot => this.snapshot;
@@ -53,15 +54,14 @@ export class SolverClient {
     this.update({ scenario, solving: true });
   }
 
-  /** Asks about the rows as they stand; the answer to a question that the rows outran is still given. */
-  ask<Q extends Question>(question: Q): Promise<AnswerTo<Q>> {
-    const id = this.nextAsk++;
-    this.send({ kind: 'ask', id, question });
-    return new Promise((resolve) => this.waiting.set(id, (answer) => resolve(answer as AnswerTo<Q>)));
+  /** Asks about the rows as they stand, in the scenario that is chosen; never answered once `signal` is aborted. */
+  ask<Q extends Question>(question: Q, signal?: AbortSignal): Promise<AnswerTo<Q>> {
+    return this.answers.ask(question, this.snapshot.scenario, signal);
   }
 
   close(): void {
     this.worker.terminate();
+    this.answers.close();
   }
 
   private open(rows: JobRows): void {
@@ -70,19 +70,17 @@ export class SolverClient {
     this.update({ solving: true });
   }
 
-  private receive(message: FromWorker): void {
-    if (message.kind === 'answer') {
-      this.waiting.get(message.id)?.(message.answer);
-      this.waiting.delete(message.id);
-    } else if (message.kind === 'fault') this.update({ fault: message.message, solving: false });
-    else {
-      const { generation, scenario } = message.result;
-      if (scenario !== this.snapshot.scenario) return;
-      this.update({ result: message.result, solving: generation < this.generation, fault: null });
+  private receive(message: FromSolver): void {
+    if (message.kind === 'fault') {
+      this.update({ fault: message.message, solving: false });
+      return;
     }
+    const { generation, scenario } = message.result;
+    if (scenario !== this.snapshot.scenario) return;
+    this.update({ result: message.result, solving: generation < this.generation, fault: null });
   }
 
-  private send(message: ToWorker): void {
+  private send(message: ToSolver): void {
     this.worker.postMessage(message);
   }
 

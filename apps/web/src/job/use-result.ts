@@ -38,21 +38,27 @@ export function useScenario(): [Scenario, (scenario: Scenario) => void] {
   return [scenario, choose];
 }
 
+/** Nobody waits for what is passed by on the way to another row. */
+const PAUSE_MS = 120;
+
 /** The worker's answer, asked anew whenever the result changes; the last one stands until then. */
 export function useAnswer<Q extends Question>(question: Q | null): AnswerTo<Q> | null {
   const { solver } = useOpenJob();
-  const { result } = useResult();
+  const { result, solving } = useResult();
   const key = question === null ? null : JSON.stringify(question);
   const [kept, setKept] = useState<{ key: string; answer: AnswerTo<Q> } | null>(null);
   useEffect(() => {
-    if (key === null) return;
-    let wanted = true;
-    void solver.ask(JSON.parse(key) as Q).then((answer) => {
-      if (wanted) setKept({ key, answer });
-    });
+    if (key === null || solving) return;
+    const unwanted = new AbortController();
+    const timer = setTimeout(() => {
+      void solver.ask(JSON.parse(key) as Q, unwanted.signal).then((answer) => {
+        if (!unwanted.signal.aborted) setKept({ key, answer });
+      });
+    }, PAUSE_MS);
     return () => {
-      wanted = false;
+      clearTimeout(timer);
+      unwanted.abort();
     };
-  }, [solver, key, result]);
+  }, [solver, key, result, solving]);
   return kept !== null && kept.key === key ? kept.answer : null;
 }

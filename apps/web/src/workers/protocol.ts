@@ -5,18 +5,21 @@ import type { Answer } from './answers.ts';
 import type { Question } from './questions.ts';
 import type { JobResult } from './results.ts';
 
+/** A fault of the program, not of the job. */
+type Fault = { kind: 'fault'; message: string };
+
 /**
  * What the page and its solver say to each other. Rows go over once, then every edit; each change has a generation,
  * and a result names the one it stands on. Only the newest scenario asked for is solved.
  */
-export type ToWorker =
+export type ToSolver =
   | { kind: 'open'; generation: number; rows: JobRowLists }
   | { kind: 'apply'; generation: number; edit: Edit }
-  | { kind: 'scenario'; scenario: Scenario }
-  | { kind: 'ask'; id: number; question: Question };
+  | { kind: 'scenario'; scenario: Scenario };
+export type FromSolver = { kind: 'result'; result: JobResult } | Fault;
 
-export type FromWorker =
-  | { kind: 'result'; result: JobResult }
-  | { kind: 'answer'; id: number; generation: number; answer: Answer }
-  /** A fault of the program, not of the job. */
-  | { kind: 'fault'; message: string };
+/** Questions go to a worker of their own, so that a long answer never holds up the verdicts. */
+export type ToAnswerer =
+  | { kind: 'open'; rows: JobRowLists }
+  | { kind: 'ask'; id: number; scenario: Scenario; question: Question };
+export type FromAnswerer = { kind: 'answer'; id: number; answer: Answer } | Fault;

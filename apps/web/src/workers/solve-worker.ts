@@ -2,30 +2,22 @@ import { applyEdit } from '@farlug/contract/edit';
 import { jobFromRows } from '@farlug/contract/job';
 import { type JobRows, rowsFromLists } from '@farlug/contract/rows';
 import type { Scenario } from '@farlug/solver/job';
-import { answerQuestion } from './answer-question.ts';
 import { jobResult, type PreparedRows, prepareRows } from './job-result.ts';
-import type { FromWorker, ToWorker } from './protocol.ts';
-import type { Question } from './questions.ts';
+import type { FromSolver, ToSolver } from './protocol.ts';
 
-/** The worker's side of `protocol.ts`: edits that arrive together are solved once, and questions wait their turn. */
-const scope = self as unknown as { postMessage(message: FromWorker): void };
+/** Solves the newest rows in the newest scenario: edits that arrive together are solved once. */
+const scope = self as unknown as { postMessage(message: FromSolver): void };
 let rows: JobRows | null = null;
 let generation = 0;
 let scenario: Scenario = 'each-circuit';
 let prepared: PreparedRows | null = null;
-let stale = false;
-const questions: { id: number; question: Question }[] = [];
 let woken = false;
 
-self.addEventListener('message', ({ data }: MessageEvent<ToWorker>) => {
-  if (data.kind === 'ask') questions.push(data);
-  else if (data.kind === 'scenario') {
-    scenario = data.scenario;
-    stale = true;
-  } else {
+self.addEventListener('message', ({ data }: MessageEvent<ToSolver>) => {
+  if (data.kind === 'scenario') scenario = data.scenario;
+  else {
     generation = data.generation;
     prepared = null;
-    stale = true;
     if (data.kind === 'open') rows = rowsFromLists(data.rows);
     else if (rows) {
       const outcome = applyEdit(rows, data.edit);
@@ -35,25 +27,16 @@ self.addEventListener('message', ({ data }: MessageEvent<ToWorker>) => {
   if (woken) return;
   woken = true;
   // A macrotask: messages that are waiting are taken in first.
-  setTimeout(work);
+  setTimeout(solve);
 });
 
-function work(): void {
+function solve(): void {
   woken = false;
   if (!rows) return;
   try {
     prepared ??= prepareRows(jobFromRows(rows));
-    if (stale) {
-      stale = false;
-      scope.postMessage({
-        kind: 'result',
-        result: jobResult(prepared, scenario, generation, () => performance.now()),
-      });
-    }
-    for (const { id, question } of questions.splice(0)) {
-      const answer = answerQuestion({ built: prepared.built, scenario }, question);
-      scope.postMessage({ kind: 'answer', id, generation, answer });
-    }
+    const result = jobResult(prepared, scenario, generation, () => performance.now());
+    scope.postMessage({ kind: 'result', result });
   } catch (error) {
     scope.postMessage({ kind: 'fault', message: error instanceof Error ? error.message : String(error) });
   }
