@@ -1,6 +1,6 @@
 import { createDatabase } from '@farlug/db';
 import { readConfig } from './config.ts';
-import { renderReport } from './pdf/render-report.ts';
+import { renderReport } from './pdf/render-report.tsx';
 import { createLogger } from './platform/logger.ts';
 import { startWorker } from './worker/start-worker.ts';
 

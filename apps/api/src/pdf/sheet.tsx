@@ -1,0 +1,178 @@
+import { Page, Text, View } from '@react-pdf/renderer';
+import type { ReactNode } from 'react';
+import type { RevisionFacts } from '../worker/worker-deps.ts';
+import { Mark } from './glyph.tsx';
+import type { ReportFigures } from './report-figures.ts';
+import { INK, SOFT, styles } from './theme.ts';
+import { day } from './words.ts';
+
+interface SheetProps {
+  figures: ReportFigures;
+  facts: RevisionFacts;
+  title: string;
+  lead?: string;
+  aside?: readonly (readonly [string, string])[];
+  children: ReactNode;
+}
+
+const LEFT = 33;
+const RIGHT = 29;
+const TOP = 30;
+const BOTTOM = 65;
+const COLUMNS = ['1', '2', '3', '4', '5', '6', '7', '8'];
+const ROWS = ['A', 'B', 'C', 'D', 'E', 'F'];
+
+/** A drawing sheet: frame with zones, the title block at the foot of each page, and what flows between. */
+export function Sheet({ figures, facts, title, lead, aside, children }: SheetProps) {
+  const letter = figures.input.paper === 'letter';
+  const height = letter ? 792 : 842;
+  return (
+    <Page
+      size={letter ? 'LETTER' : 'A4'}
+      wrap
+      style={[
+        styles.text,
+        { paddingTop: TOP + 12, paddingLeft: LEFT + 14, paddingRight: RIGHT + 14, paddingBottom: BOTTOM + 8 },
+      ]}
+    >
+      <View
+        fixed
+        style={{
+          position: 'absolute',
+          left: LEFT,
+          right: RIGHT,
+          top: TOP,
+          height: height - TOP - BOTTOM,
+          borderWidth: 1,
+          borderColor: INK,
+        }}
+      />
+      <Zones height={height} />
+      <View
+        style={{
+          flexDirection: 'row',
+          justifyContent: 'space-between',
+          borderBottomWidth: 2,
+          borderBottomColor: INK,
+          paddingBottom: 6,
+          marginBottom: 6,
+        }}
+      >
+        <View style={{ flexShrink: 1, paddingRight: 14 }}>
+          <Text style={styles.h1}>{title}</Text>
+          {lead && <Text>{lead}</Text>}
+        </View>
+        {aside && (
+          <View style={{ flexShrink: 0, maxWidth: 210 }}>
+            {aside.map(([word, text]) => (
+              <View key={word} style={styles.row}>
+                <Text style={[styles.soft, { width: 48 }]}>{word}</Text>
+                <Text style={{ maxWidth: 160 }}>{text}</Text>
+              </View>
+            ))}
+          </View>
+        )}
+      </View>
+      {children}
+      <TitleBlock figures={figures} facts={facts} />
+    </Page>
+  );
+}
+
+function Zones({ height }: { height: number }) {
+  const zone = { position: 'absolute' as const, fontSize: 6.5, color: SOFT };
+  return (
+    <>
+      {COLUMNS.map((label, i) => (
+        <Text
+          fixed
+          key={label}
+          style={[zone, { top: TOP - 11, left: `${6 + ((i + 0.5) / COLUMNS.length) * 88}%` }]}
+        >
+          {label}
+        </Text>
+      ))}
+      {ROWS.map((label, i) => (
+        <Text
+          fixed
+          key={label}
+          style={[
+            zone,
+            { left: LEFT - 11, top: TOP + ((i + 0.5) / ROWS.length) * (height - TOP - BOTTOM) - 4 },
+          ]}
+        >
+          {label}
+        </Text>
+      ))}
+    </>
+  );
+}
+
+function TitleBlock({ figures, facts }: { figures: ReportFigures; facts: RevisionFacts }) {
+  const { titleBlock } = figures.input;
+  return (
+    <View
+      fixed
+      style={{
+        position: 'absolute',
+        left: LEFT,
+        right: RIGHT,
+        bottom: BOTTOM - 36,
+        height: 36,
+        borderWidth: 1,
+        borderTopWidth: 2,
+        borderColor: INK,
+        flexDirection: 'row',
+        fontSize: 8.5,
+        lineHeight: 1.25,
+      }}
+    >
+      <View style={{ flexDirection: 'row', alignItems: 'center', gap: 5, paddingHorizontal: 7 }}>
+        <Mark size={19} />
+        <View>
+          <Text style={styles.bold}>Farlug</Text>
+          <Text style={{ fontSize: 7.5 }}>voltage drop report</Text>
+        </View>
+      </View>
+      <Cell word="Job" text={titleBlock.job} grow />
+      <Cell word="Issued by" text={`${titleBlock.firm}`} width={104} />
+      <Cell word="Revision" text={facts.revisionLetter} width={44} />
+      <Cell word="Date" text={day(facts.issuedAt)} width={58} />
+      <Cell word="Input, solver" text={`${facts.sha256.slice(0, 8)}, ${facts.solverVersion}`} width={84} />
+      <View
+        style={{ borderLeftWidth: 1, borderLeftColor: INK, paddingHorizontal: 6, paddingTop: 4, width: 52 }}
+      >
+        <Text style={{ fontSize: 6.5, color: SOFT }}>Page</Text>
+        <Text render={({ pageNumber, totalPages }) => `${pageNumber} of ${totalPages}`} />
+      </View>
+    </View>
+  );
+}
+
+function Cell({
+  word,
+  text,
+  grow = false,
+  width,
+}: {
+  word: string;
+  text: string;
+  grow?: boolean;
+  width?: number;
+}) {
+  return (
+    <View
+      style={{
+        borderLeftWidth: 1,
+        borderLeftColor: INK,
+        paddingHorizontal: 6,
+        paddingTop: 4,
+        overflow: 'hidden',
+        ...(grow ? { flexGrow: 1, flexShrink: 1, flexBasis: 0 } : { width }),
+      }}
+    >
+      <Text style={{ fontSize: 6.5, color: SOFT }}>{word}</Text>
+      <Text style={{ maxLines: 1, textOverflow: 'ellipsis' }}>{text}</Text>
+    </View>
+  );
+}
