@@ -1,6 +1,6 @@
 import type { Page } from 'playwright-core';
 import { expect, test } from 'vitest';
-import { fillLengths, overCount, titleBlock } from './support/job.ts';
+import { circuitRow, fillLengths, overCount, titleBlock } from './support/job.ts';
 import { linkIn, openMail } from './support/mail.ts';
 import { DEMO, newcomer, openDemoJob, placeOf, signIn } from './support/people.ts';
 import { picture } from './support/picture.ts';
@@ -33,8 +33,34 @@ test('a contractor fixes a run of the demo job and issues a report, and an inspe
   const sheet = page.getByRole('complementary');
   await sheet.getByRole('heading', { name: /Roof deck receptacles/ }).waitFor();
   await sheet.getByText('Over.').waitFor();
+
+  await page.getByRole('link', { name: /^LP-2/ }).click();
+  await circuitRow(page, 'Plotter and press bench').getByText('Plotter and press bench').click();
+  await sheet.getByRole('heading', { name: /Plotter and press bench/ }).waitFor();
+  const use = sheet.getByRole('button', { name: /^Use / });
+  await use.waitFor();
   await checkScreen(page, 'schedule of the demo job, a circuit open');
   await picture(page, 'schedule');
+  await use.click();
+  await expect.poll(() => overCount(page)).toBe(over - 1);
+  await sheet.getByText('Over.').waitFor({ state: 'detached' });
+  await page.getByRole('button', { name: 'More about the panel' }).click();
+  await page.getByRole('menuitem', { name: /^Undo/ }).click();
+  await expect.poll(() => overCount(page)).toBe(over);
+
+  await sheet.getByRole('link', { name: 'All sizes' }).click();
+  await page.getByRole('button', { name: /^Use 8 AWG Cu/ }).waitFor();
+  await checkScreen(page, 'sizes of a run');
+  await picture(page, 'sizes');
+  await page.getByRole('button', { name: /^Use 8 AWG Cu/ }).click();
+  await expect.poll(() => overCount(page)).toBe(over - 1);
+  await page.getByRole('button', { name: /^Undo: / }).click();
+  await expect.poll(() => overCount(page)).toBe(over);
+  await page.getByRole('link', { name: 'Equations' }).click();
+  await page.getByText('Kirchhoff’s current law closes').waitFor();
+  await checkScreen(page, 'equations of a panel');
+  await page.getByRole('link', { name: 'Schedule' }).click();
+  await judged(page);
 
   await fillLengths(page, (index) => `${40 + 5 * index} ft`);
   await titleBlock(page)
