@@ -143,5 +143,5 @@ test('the side sheet says the verdict in words, with what is assumed in the circ
 test('worst first leads with the worst load of the whole job', async () => {
   await open('LP-2', '&view=loads', 'Worst first');
   const [first] = within(screen.getByRole('table')).getAllByRole('rowheader');
-  expect(first!.textContent).toContain('LP-2-20, Loft lighting, south bays');
+  expect(first!.textContent).toContain('LP-2-20, Roof deck receptacles');
 });
