@@ -37,6 +37,7 @@ export function EquationsSection({ figures, facts }: { figures: ReportFigures; f
           )}
         </View>
       ))}
+      <Named title="Voltages of the nodes around, volt" items={equations.neighbours} />
       <Named title="Impedances, ohm" items={equations.impedances} />
       <Named title="Currents, ampere" items={equations.currents} />
     </Sheet>

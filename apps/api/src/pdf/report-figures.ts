@@ -34,6 +34,8 @@ export interface PrintedRow {
   shown: ShownVerdict | null;
   worst: LoadResult | null;
   run: Run | null;
+  /** Of a row that feeds a panel: the feeder part there, at design demand. */
+  feeds: { feederPercent: number | null; shown: ShownVerdict } | null;
 }
 export interface PrintedPanel {
   bus: string;
@@ -114,6 +116,7 @@ export function reportFigures(
       shown: group?.shown ?? null,
       worst: group?.worst ?? null,
       run,
+      feeds: null,
     };
   };
 
@@ -131,8 +134,13 @@ export function reportFigures(
         room: words.get(`${p} ${r}`)?.room ?? '',
         key: run?.kind === 'branch' ? (groupOfRun.get(run.id) ?? null) : null,
       });
-      if (run && run.kind !== 'branch') return { ...row, serves: row.serves || `panel ${run.to}` };
-      return row;
+      if (!run || run.kind === 'branch') return row;
+      const verdict = shown.panels.get(run.to);
+      return {
+        ...row,
+        serves: row.serves || `panel ${run.to}`,
+        feeds: verdict ? { feederPercent: buses.get(run.to)?.feederPercent ?? null, shown: verdict } : null,
+      };
     });
     const figures = buses.get(panel.bus) ?? null;
     const nominal = figures?.volts ? Object.keys(figures.volts).filter((pair) => pair !== 'N').length : 0;

@@ -53,6 +53,7 @@ function PanelTable({ panel }: { panel: PrintedPanel }) {
   return (
     <View style={{ marginBottom: 8 }}>
       <View
+        fixed
         minPresenceAhead={60}
         style={{ flexDirection: 'row', alignItems: 'center', gap: 8, marginTop: 4, marginBottom: 2 }}
       >
@@ -107,11 +108,21 @@ function ScheduleRow({ row }: { row: PrintedRow }) {
         wire: row.wire,
         length: <Assumed when={row.lengthAssumed}>{row.length}</Assumed>,
         load: <Assumed when={row.loadAssumed || row.powerFactorAssumed}>{row.load}</Assumed>,
-        feeder: <Part row={row} part="feeder" />,
+        feeder: row.feeds ? <Fed row={row} /> : <Part row={row} part="feeder" />,
         branch: <Part row={row} part="branch" />,
         total: <Part row={row} part="total" />,
-        verdict: row.shown && <Verdict kind={row.shown} />,
+        verdict: row.feeds ? <Verdict kind={row.feeds.shown} /> : row.shown && <Verdict kind={row.shown} />,
       }}
     />
+  );
+}
+
+/** The feeder part at the panel that a row feeds. */
+function Fed({ row }: { row: PrintedRow }) {
+  const { feeds } = row;
+  if (feeds?.feederPercent == null) return null;
+  const over = feeds.shown === 'over';
+  return (
+    <Text style={over ? styles.bold : {}}>{`${formatFixed(feeds.feederPercent, 2)}${over ? '*' : ''}`}</Text>
   );
 }

@@ -30,10 +30,12 @@ export function Sheet({ figures, facts, title, lead, aside, children }: SheetPro
     <Page
       size={letter ? 'LETTER' : 'A4'}
       wrap
-      style={[
-        styles.text,
-        { paddingTop: TOP + 12, paddingLeft: LEFT + 14, paddingRight: RIGHT + 14, paddingBottom: BOTTOM + 8 },
-      ]}
+      style={{
+        paddingTop: TOP + 12,
+        paddingLeft: LEFT + 14,
+        paddingRight: RIGHT + 14,
+        paddingBottom: BOTTOM + 8,
+      }}
     >
       <View
         fixed
@@ -48,39 +50,55 @@ export function Sheet({ figures, facts, title, lead, aside, children }: SheetPro
         }}
       />
       <Zones height={height} />
-      <View
-        style={{
-          flexDirection: 'row',
-          justifyContent: 'space-between',
-          borderBottomWidth: 2,
-          borderBottomColor: INK,
-          paddingBottom: 6,
-          marginBottom: 6,
-        }}
-      >
-        <View style={{ flexShrink: 1, paddingRight: 14 }}>
-          <Text style={styles.h1}>{title}</Text>
-          {lead && <Text>{lead}</Text>}
-        </View>
-        {aside && (
-          <View style={{ flexShrink: 0, maxWidth: 210 }}>
-            {aside.map(([word, text]) => (
-              <View key={word} style={styles.row}>
-                <Text style={[styles.soft, { width: 48 }]}>{word}</Text>
-                <Text style={{ maxWidth: 160 }}>{text}</Text>
-              </View>
-            ))}
+      <View style={styles.text}>
+        <View
+          style={{
+            flexDirection: 'row',
+            justifyContent: 'space-between',
+            borderBottomWidth: 2,
+            borderBottomColor: INK,
+            paddingBottom: 6,
+            marginBottom: 6,
+          }}
+        >
+          <View style={{ flexShrink: 1, paddingRight: 14 }}>
+            <Text style={styles.h1}>{title}</Text>
+            {lead && <Text>{lead}</Text>}
           </View>
-        )}
+          {aside && (
+            <View style={{ flexShrink: 0, maxWidth: 210 }}>
+              {aside.map(([word, text]) => (
+                <View key={word} style={styles.row}>
+                  <Text style={[styles.soft, { width: 48 }]}>{word}</Text>
+                  <Text style={{ maxWidth: 160 }}>{text}</Text>
+                </View>
+              ))}
+            </View>
+          )}
+        </View>
+        {children}
       </View>
-      {children}
       <TitleBlock figures={figures} facts={facts} />
+      {/* Laid out anew on each page, where an inherited line height would be applied twice. */}
+      <Text
+        fixed
+        style={{
+          position: 'absolute',
+          right: RIGHT,
+          bottom: BOTTOM - 28,
+          width: 46,
+          fontFamily: 'Sans',
+          fontSize: 8.5,
+          color: INK,
+        }}
+        render={({ pageNumber, totalPages }) => `${pageNumber} of ${totalPages}`}
+      />
     </Page>
   );
 }
 
 function Zones({ height }: { height: number }) {
-  const zone = { position: 'absolute' as const, fontSize: 6.5, color: SOFT };
+  const zone = { position: 'absolute' as const, fontFamily: 'Sans', fontSize: 6.5, color: SOFT };
   return (
     <>
       {COLUMNS.map((label, i) => (
@@ -123,8 +141,10 @@ function TitleBlock({ figures, facts }: { figures: ReportFigures; facts: Revisio
         borderTopWidth: 2,
         borderColor: INK,
         flexDirection: 'row',
+        fontFamily: 'Sans',
         fontSize: 8.5,
         lineHeight: 1.25,
+        color: INK,
       }}
     >
       <View style={{ flexDirection: 'row', alignItems: 'center', gap: 5, paddingHorizontal: 7 }}>
@@ -143,7 +163,6 @@ function TitleBlock({ figures, facts }: { figures: ReportFigures; facts: Revisio
         style={{ borderLeftWidth: 1, borderLeftColor: INK, paddingHorizontal: 6, paddingTop: 4, width: 52 }}
       >
         <Text style={{ fontSize: 6.5, color: SOFT }}>Page</Text>
-        <Text render={({ pageNumber, totalPages }) => `${pageNumber} of ${totalPages}`} />
       </View>
     </View>
   );

@@ -62,7 +62,7 @@ function VerdictSentence({ figures }: { figures: ReportFigures }) {
       <View style={{ paddingTop: 4 }}>
         <Glyph kind={kind} size={9} />
       </View>
-      <Text style={{ fontSize: 12, lineHeight: 1.35, flexShrink: 1 }}>
+      <Text style={{ fontSize: 12, lineHeight: 1.35, flexGrow: 1, flexShrink: 1, flexBasis: 0 }}>
         <Text style={{ color: COLOURS[kind], fontWeight: 600 }}>{lead}</Text> {rest}
       </Text>
     </View>

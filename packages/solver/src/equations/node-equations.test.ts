@@ -65,7 +65,11 @@ describe('node equations by inspection', () => {
   });
 
   it('moves what lies outside the chosen points to the right, at its solved volts', () => {
-    const { matrix, solution } = written(jobOf(cabin), { buses: ['C'] });
+    const { matrix, solution, neighbours } = written(jobOf(cabin), { buses: ['C'] });
+    expect(neighbours.map(({ name, value }) => [name, value[0]])).toEqual([
+      ['V(B.L1)', expect.closeTo(47.3, 10)],
+      ['V(B.N)', expect.closeTo(0.7, 10)],
+    ]);
     expect(matrix.nodes).toEqual(['C.L1', 'C.N']);
     expect(matrix.y[0]![0]![0]).toBeCloseTo(20, 9);
     expect(matrix.right[0]![0]).toBeCloseTo(20 * 47.3 - 4, 8);

@@ -43,6 +43,8 @@ export interface Equations {
   solution: Phasor[];
   impedances: Named[];
   currents: Named[];
+  /** Volts of the nodes that the equations name and that are not written out themselves. */
+  neighbours: Named[];
   /** The largest `kclAmps` against the largest current of any branch there. */
   kclResidual: number;
 }
@@ -193,6 +195,15 @@ function writeEquations(
     solution: free.map((i) => equations[i]!.volts),
     impedances: [...impedances.values()],
     currents: [...currents.values()],
+    neighbours: neighboursOf(equations, voltsOf),
     kclResidual: largest === 0 ? 0 : worst / largest,
   };
+}
+
+function neighboursOf(equations: readonly NodeEquation[], voltsOf: ReadonlyMap<string, Phasor>): Named[] {
+  const own = new Set(equations.map(({ node }) => node));
+  const others = new Set(equations.flatMap(({ terms }) => terms.map(({ node }) => node)));
+  return [...others]
+    .filter((node) => !own.has(node))
+    .map((node) => ({ name: `V(${node})`, about: `node ${node}`, value: voltsOf.get(node)! }));
 }

@@ -5,12 +5,12 @@ import { ampsOf, sinkAdmittance, sinkCurrent } from '../judge/sink-current.ts';
 import { flowsOf, type State } from '../judge/solve-state.ts';
 import { nodeNames } from './node-names.ts';
 
-/** An admittance or a current by the name that the written equations give it. */
+/** An impedance, a current or a voltage by the name that the written equations give it. */
 export interface Named {
   name: string;
   /** What it is, in words. */
   about: string;
-  /** Ohm or ampere. */
+  /** Ohm, ampere or volt. */
   value: Phasor;
 }
 

@@ -96,6 +96,11 @@ export function EquationsPlace({
           ) : (
             <EquationList equations={answer.equations.equations} form={form} />
           )}
+          <NamedTable
+            caption="Voltages of the nodes around, volt"
+            items={answer.equations.neighbours}
+            unit="V"
+          />
           <NamedTable caption="Impedances, ohm" items={answer.equations.impedances} unit="Ω" />
           <NamedTable caption="Currents, ampere" items={answer.equations.currents} unit="A" />
         </>
