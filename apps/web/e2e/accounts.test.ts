@@ -46,7 +46,7 @@ test('a forgotten password is chosen anew by the mailed link, which works once',
   const link = await linkIn(page, '/reset');
   await page.goto(link);
   const password = `${pia.password}, anew`;
-  await page.getByLabel('New password').fill(password);
+  await page.getByLabel('New password', { exact: true }).fill(password);
   await page.getByRole('button', { name: 'Save the password' }).click();
   await page.getByText('holds from now on').waitFor();
   await signIn(page, { ...pia, password });
@@ -54,7 +54,7 @@ test('a forgotten password is chosen anew by the mailed link, which works once',
   provokes(410);
   await page.goto(product('/'));
   await page.goto(link);
-  await page.getByLabel('New password').fill(`${password}, again`);
+  await page.getByLabel('New password', { exact: true }).fill(`${password}, again`);
   await page.getByRole('button', { name: 'Save the password' }).click();
   await page.getByRole('heading', { name: 'This link no longer works' }).waitFor();
 });

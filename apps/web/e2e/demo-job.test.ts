@@ -9,6 +9,9 @@ import { PHONE, product, visitor, withBrowser } from './support/visitor.ts';
 
 withBrowser();
 
+/** A report of some dozens of pages is printed in the background. */
+const PRINTING = { timeout: 90_000 };
+
 const judged = (page: Page) =>
   titleBlock(page)
     .getByText(/^\d{3} judged/)
@@ -74,7 +77,7 @@ test('a contractor fixes a run of the demo job and issues a report, and an inspe
   const issued = /Revision ([A-Z]+) is issued/;
   const letter = issued.exec((await page.getByText(issued).textContent()) ?? '')?.[1] ?? '';
   const revision = page.getByRole('region', { name: `Revision ${letter}`, exact: true });
-  const pdf = await revision.getByRole('link', { name: 'Open the PDF' }).getAttribute('href');
+  const pdf = await revision.getByRole('link', { name: 'Open the PDF' }).getAttribute('href', PRINTING);
   expect((await (await page.request.get(product(pdf ?? ''))).body()).subarray(0, 5).toString()).toBe('%PDF-');
 
   const inspector = newcomer('Dele Moss');
@@ -86,7 +89,7 @@ test('a contractor fixes a run of the demo job and issues a report, and an inspe
   await revision
     .getByRole('row', { name: new RegExp(inspector.name) })
     .getByText('sent', { exact: true })
-    .waitFor();
+    .waitFor(PRINTING);
 
   const { page: theirs } = await visitor({ viewport: PHONE });
   await openMail(theirs, inspector.email, /Tannery Row workshop/);
