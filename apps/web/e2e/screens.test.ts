@@ -1,4 +1,4 @@
-import { test } from 'vitest';
+import { expect, test } from 'vitest';
 import { DEMO, signIn } from './support/people.ts';
 import { checkScreen } from './support/screen.ts';
 import { product, visitor, withBrowser } from './support/visitor.ts';
@@ -25,6 +25,7 @@ test('the pages outside a firm keep to the rules of accessibility, light and dar
     await page.goto(product(path));
     await page.getByRole('heading', { name: heading }).first().waitFor();
     await checkScreen(page, path);
+    expect(page.url()).toContain(path);
   }
 });
 

@@ -2,6 +2,7 @@ import type { Route } from '@farlug/contract/route';
 import type { Request, Response } from 'express';
 import type { z } from 'zod';
 import type { InspectionGrant, Member, Person } from '../platform/caller.ts';
+import type { FileAnswer } from '../platform/file-answer.ts';
 import type { Logger } from '../platform/logger.ts';
 import type { Refusal } from '../platform/refusal.ts';
 
@@ -24,15 +25,6 @@ export interface Call<R extends Route = Route> {
   log: Logger;
   request: Request;
   response: Response;
-}
-
-export interface FileAnswer {
-  type: string;
-  name: string;
-  bytes: Buffer;
-  /** Shown in the browser and not saved; only for types that cannot run script. */
-  inline?: boolean;
-  headers?: Record<string, string>;
 }
 
 export type Answer<R extends Route> = R extends { kind: 'file' } ? FileAnswer : z.input<R['response']>;

@@ -1,9 +1,10 @@
 import type { Route } from '@farlug/contract/route';
 import { json, type Request, type RequestHandler, type Response, Router } from 'express';
 import type { Deps } from '../deps.ts';
+import type { FileAnswer } from '../platform/file-answer.ts';
 import { Refusal, refuse } from '../platform/refusal.ts';
 import { type Admission, admit } from './admit.ts';
-import type { Call, FileAnswer, Handler } from './call.ts';
+import type { Call, Handler } from './call.ts';
 import { csrfHolds } from './csrf.ts';
 import { sendRefusal } from './error-answer.ts';
 import { limitersOf } from './limit-rate.ts';

@@ -1,6 +1,6 @@
 import type { Route } from '@farlug/contract/route';
 import type { Response } from 'express';
-import type { FileAnswer } from './call.ts';
+import type { FileAnswer } from '../platform/file-answer.ts';
 import { parse } from './validation.ts';
 
 export function sendJson(route: Route, answer: unknown, response: Response, check: boolean): void {

@@ -10,5 +10,3 @@ export const zeroVolts = (network: Network): Volts => ({
   re: new Float64Array(network.nodes.count),
   im: new Float64Array(network.nodes.count),
 });
-
-export const copyVolts = ({ re, im }: Volts): Volts => ({ re: re.slice(), im: im.slice() });

@@ -2,8 +2,8 @@ import { describe, expect, it } from 'vitest';
 import { SOLVERS } from '../../test/support/solvers.ts';
 import type { JobFile } from '../job/index.ts';
 import { parseJob } from '../job/index.ts';
-import type { Solve } from './candidates.ts';
 import { candidates } from './candidates.ts';
+import type { Solve } from './solve.ts';
 
 /** A 120 V circuit on the resistance basis: every figure is 2·I·R·L with R of NEC Chapter 9 Table 9 in PVC. */
 const circuit = (run: object = {}, rest: Partial<JobFile> = {}) => {

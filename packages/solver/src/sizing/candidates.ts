@@ -10,6 +10,7 @@ import type { Grounding } from './grounding-choice.ts';
 import { groundingChooser } from './grounding-choice.ts';
 import type { Longest } from './longest.ts';
 import { longestFinder } from './longest.ts';
+import type { Solve } from './solve.ts';
 
 export interface WorstLoad {
   id: string;
@@ -61,8 +62,6 @@ export interface CandidateOptions {
 export type CandidatesOutcome =
   | { ok: true; runId: string; load: FloorLoad; candidates: Candidate[] }
   | { ok: false; at: string; reason: string };
-
-export type Solve = (job: Job, scenario: Scenario) => SolveOutcome;
 
 /**
  * Every size of one run side by side, each by solving the job anew with the run laid in it; `solve` is

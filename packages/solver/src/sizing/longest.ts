@@ -1,6 +1,6 @@
 import type { Beyond, Job, Scenario, Solution } from '../job/index.ts';
 import { withRun } from './candidate-sizes.ts';
-import type { Solve } from './candidates.ts';
+import type { Solve } from './solve.ts';
 
 /** The longest run that still passes, in the job's unit of length, to the whole unit below. */
 export type Longest =

@@ -1,5 +1,5 @@
 import { CONDUCTORS, type Conductor, type Job, type Run, SYSTEM_CONDUCTORS } from '@farlug/solver/job';
-import { add, type Complex, scale, sub, ZERO } from './complex.ts';
+import { type Complex, sub } from './complex.ts';
 import { nominalPhasors, type Phasors, secondaryPhasors, windingPairs } from './systems.ts';
 
 /** What a separately derived system carries: its nominal EMFs, open-voltage ratio and source bus. */
@@ -129,9 +129,3 @@ export const supplyAt = (topology: Topology, bus: string): Supply | undefined =>
 /** Nominal EMF between two conductors of the system at a bus. */
 export const nominalBetween = (supply: Supply, plus: Conductor, minus: Conductor): Complex =>
   sub(supply.nominal[plus]!, supply.nominal[minus]!);
-
-export const centroid = (list: Complex[]): Complex =>
-  scale(
-    list.reduce((sum, v) => add(sum, v), ZERO),
-    1 / list.length,
-  );

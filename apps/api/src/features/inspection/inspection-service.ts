@@ -5,7 +5,6 @@ import {
   type FirmTransaction,
   isSuperseded,
   linkTarget,
-  listDecisions,
   markOpened,
   readPdf,
   recordAudit,
@@ -13,13 +12,14 @@ import {
   revisionContent,
 } from '@farlug/db';
 import type { Deps } from '../../deps.ts';
-import type { FileAnswer } from '../../http/call.ts';
 import { tokenHash } from '../../platform/account-token.ts';
 import type { InspectionGrant } from '../../platform/caller.ts';
 import { DONE, type Done } from '../../platform/done.ts';
+import type { FileAnswer } from '../../platform/file-answer.ts';
 import { type Refusal, refusalAsValue, refuse } from '../../platform/refusal.ts';
-import { decisionViewOf, linkState } from '../reports/reports-presenter.ts';
-import { type GivenDecision, pdfAnswer, putDecision } from '../reports/reports-service.ts';
+import { decisionsOfDelivery, type GivenDecision, putDecision } from '../reports/decisions-service.ts';
+import { linkState } from '../reports/link-state.ts';
+import { pdfAnswer } from '../reports/reports-service.ts';
 
 const gone = () =>
   refuse('link_gone', 'This link is not good any more. Ask whoever sent the report for a new one.');
@@ -56,7 +56,6 @@ export function inspectionOf(deps: Deps, grant: InspectionGrant): Promise<Inspec
     const content = await revisionContent(tx, jobId, delivery.revisionId);
     const pdf = await readPdf(tx, jobId, delivery.revisionId);
     if (!revision || !content || !pdf) throw gone();
-    const decisions = await listDecisions(tx, jobId, delivery.revisionId);
     return {
       recipientName: delivery.recipientName,
       revisionNo: revision.no,
@@ -68,7 +67,7 @@ export function inspectionOf(deps: Deps, grant: InspectionGrant): Promise<Inspec
       superseded: await isSuperseded(tx, jobId, revision.no),
       input: revisionInput.parse(content.input),
       digest: reportDigest.parse((content.result as { digest: unknown }).digest),
-      decisions: decisions.filter(({ deliveryId }) => deliveryId === delivery.id).map(decisionViewOf),
+      decisions: await decisionsOfDelivery(tx, jobId, delivery),
     };
   });
 }

@@ -1,5 +1,6 @@
 import type { DecisionView, DeliveryView, RevisionSummary } from '@farlug/contract/routes';
 import type { DecisionRow, DeliveryRow, RevisionWithFate } from '@farlug/db';
+import { linkState } from './link-state.ts';
 
 export function revisionSummaryOf(revision: RevisionWithFate, now: Date): RevisionSummary {
   return {
@@ -24,14 +25,6 @@ export function deliveryViewOf(delivery: DeliveryRow, now: Date): DeliveryView {
     link: linkState(delivery, now),
     linkExpiresAt: delivery.linkExpiresAt.toISOString(),
   };
-}
-
-export function linkState(
-  { linkRevokedAt, linkExpiresAt }: Pick<DeliveryRow, 'linkRevokedAt' | 'linkExpiresAt'>,
-  now: Date,
-): DeliveryView['link'] {
-  if (linkRevokedAt !== null) return 'revoked';
-  return linkExpiresAt <= now ? 'expired' : 'open';
 }
 
 export function decisionViewOf(decision: DecisionRow): DecisionView {

@@ -10,6 +10,8 @@ import {
   sendRevision,
 } from '@farlug/contract/routes';
 import type { Frame } from '../../http/frame.ts';
+import * as decisions from './decisions-service.ts';
+import * as deliveries from './deliveries-service.ts';
 import * as issue from './issue-service.ts';
 import * as reports from './reports-service.ts';
 
@@ -23,16 +25,16 @@ export function registerReports({ deps, mount }: Frame): void {
     reports.revisionInputFile(deps, member, params.job, params.revision),
   );
   mount(sendRevision, ({ member, params, body }) =>
-    reports.sendRevision(deps, member, params.job, params.revision, body),
+    deliveries.sendRevision(deps, member, params.job, params.revision, body),
   );
   mount(resendDelivery, ({ member, params }) =>
-    reports.resendDelivery(deps, member, params.job, params.delivery),
+    deliveries.resendDelivery(deps, member, params.job, params.delivery),
   );
   mount(renewLink, ({ member, params, body }) =>
-    reports.renewLink(deps, member, params.job, params.delivery, body.linkDays),
+    deliveries.renewLink(deps, member, params.job, params.delivery, body.linkDays),
   );
-  mount(revokeLink, ({ member, params }) => reports.revokeLink(deps, member, params.job, params.delivery));
+  mount(revokeLink, ({ member, params }) => deliveries.revokeLink(deps, member, params.job, params.delivery));
   mount(recordPaperDecision, ({ member, params, body }) =>
-    reports.enterPaperDecision(deps, member, params.job, params.revision, body),
+    decisions.enterPaperDecision(deps, member, params.job, params.revision, body),
   );
 }

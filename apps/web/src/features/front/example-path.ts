@@ -12,7 +12,7 @@ export interface PathPoint {
 }
 
 export const EXAMPLE_JOB = 'Tannery Row workshop';
-export const EXAMPLE_LOAD = 'LP-2-20';
+const EXAMPLE_LOAD = 'LP-2-20';
 export const EXAMPLE_PATH: readonly PathPoint[] = [
   { label: 'Service', kind: 'service', volts: 118.67 },
   { label: 'MDP', kind: 'panel', volts: 118.25, run: { size: '2 sets 350', length: '85 ft', weight: 6.8 } },
