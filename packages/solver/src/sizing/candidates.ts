@@ -1,4 +1,4 @@
-import type { Beyond, Job, Material, Scenario, Solution, SolveOutcome, Verdict } from '../job/index.ts';
+import type { Beyond, Job, Material, Scenario, Solution, Verdict } from '../job/index.ts';
 import { beyondFinder, MATERIALS } from '../job/index.ts';
 import { busSystems } from '../job/systems.ts';
 import type { CandidateSize } from './candidate-sizes.ts';

@@ -112,7 +112,3 @@ export const lineText = (circuit: CircuitView): string => {
   if (digits.length === 0) return '';
   return digits.length === 3 ? '3-ph' : `L${digits.join('-')}`;
 };
-
-/** `LP-2-2/4`: what a row is called aloud. */
-export const rowName = (circuit: CircuitView): string =>
-  `${circuit.code}${circuit.fields.description.text ? `, ${circuit.fields.description.text}` : ''}`;

@@ -9,11 +9,12 @@ interface ScheduleNotesProps {
   result: JobResult | null;
   /** What was done or refused last, in words. */
   said: string | null;
+  leftOut: ReactNode;
   next: ReactNode;
 }
 
 /** Under the schedule: what its marks mean, what is assumed, what was just done, what comes next. */
-export function ScheduleNotes({ panel, result, said, next }: ScheduleNotesProps) {
+export function ScheduleNotes({ panel, result, said, leftOut, next }: ScheduleNotesProps) {
   const assumed = result && panel && assumedWords(result.assumed, panel);
   return (
     <div className="flex min-h-8 flex-none flex-wrap items-center gap-x-5 border-t border-rule px-4 py-1 text-label text-ink-soft">
@@ -26,7 +27,10 @@ export function ScheduleNotes({ panel, result, said, next }: ScheduleNotesProps)
       <span role="status" className="text-ink">
         {said}
       </span>
-      <span className="ml-auto">{next}</span>
+      <span className="ml-auto flex flex-wrap gap-x-5">
+        {leftOut}
+        {next}
+      </span>
     </div>
   );
 }

@@ -20,6 +20,7 @@ import { troubleAddress } from '../trouble-address.ts';
 import { UploadDialog } from '../upload/upload-dialog.tsx';
 import { CircuitSheet } from './circuit-sheet.tsx';
 import { JobTrouble } from './job-trouble.tsx';
+import { LeftOutLink } from './left-out-link.tsx';
 import { NextMissingLink } from './next-missing-link.tsx';
 import { NoPanels } from './no-panels.tsx';
 import { PanelRail } from './panel-rail.tsx';
@@ -176,7 +177,22 @@ export function SchedulePlace({ cautions, sizesFor, handCheckFor }: SchedulePlac
               onUpload={() => setUploading(true)}
             />
           )}
-          <ScheduleNotes panel={whole ? null : panel} result={result} said={said} next={next} />
+          <ScheduleNotes
+            panel={whole ? null : panel}
+            result={result}
+            said={said}
+            leftOut={
+              result && (
+                <LeftOutLink
+                  leftOut={result.leftOut}
+                  count={result.leftOutCount}
+                  nameOf={schedule.nameOf}
+                  to={(place) => to({ ...place, view: 'results' })}
+                />
+              )
+            }
+            next={next}
+          />
           {!(circuit && desk) && <div className="flex-none border-t border-rule px-4 py-1.5">{cautions}</div>}
         </div>
       </WorkArea>
