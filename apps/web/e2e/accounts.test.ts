@@ -38,6 +38,7 @@ test('a forgotten password is chosen anew by the mailed link, which works once',
   await signUp(page, pia, 'Rook Wiring');
   await page.getByRole('button', { name: 'Sign out' }).click();
   await page.getByRole('link', { name: 'Forgot the password' }).click();
+  await page.getByRole('heading', { name: 'Forgot the password' }).waitFor();
   await page.getByLabel('E-mail').fill(pia.email);
   await page.getByRole('button', { name: 'Mail me a link' }).click();
   await page.getByText('a link is on its way').waitFor();

@@ -20,6 +20,7 @@ const missing = (page: Page): Locator => page.getByRole('button', { name: /missi
 
 /** Goes from empty length to empty length by the link that names the next, and types each. Says how many there were. */
 export async function fillLengths(page: Page, textOf: (index: number) => string): Promise<number> {
+  await page.getByRole('grid').waitFor();
   let filled = 0;
   for (; await missing(page).isVisible(); filled += 1) {
     const said = (await missing(page).textContent()) ?? '';
