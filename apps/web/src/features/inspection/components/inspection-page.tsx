@@ -16,6 +16,7 @@ import { useInspection } from '../hooks/use-inspection.ts';
 import { AssumedList } from './assumed-list.tsx';
 import { DecisionForm } from './decision-form.tsx';
 import { DecisionList } from './decision-list.tsx';
+import { Findings } from './findings.tsx';
 import { LinkEnded } from './link-ended.tsx';
 
 export function InspectionPage() {
@@ -105,6 +106,7 @@ function Report({ view }: { view: InspectionView }) {
             </span>
           </div>
         </section>
+        <Findings digest={view.digest} />
         <section aria-label="What it stands on">
           <h2 className="mb-1 text-label font-normal text-ink-soft">What it stands on</h2>
           <Particulars items={basisOf(input)} />
