@@ -30,6 +30,8 @@ export function reportLetter(facts: ReportLetterFacts): Letter {
       : `${circuits(over)} beyond the limits that were set`,
     `${counts.near} near a limit`,
     `${counts.within} within`,
+    ...(counts.unserved > 0 ? [`${counts.unserved} without supply in this scenario`] : []),
+    ...(counts.unjudged > 0 ? [`${counts.unjudged} without a limit to be judged by`] : []),
   ].join(', ');
   const limits = input.job.limits;
   const paragraphs = [

@@ -29,11 +29,14 @@ interface SmtpError extends Error {
 
 const CONNECT_MS = 15_000;
 const SILENCE_MS = 60_000;
+/** Less than the queue gives an attempt, so that how it ended is always written down. */
+const ALTOGETHER_MS = 100_000;
 
 /** Sends one message over SMTP (RFC 5321), knowing at every moment whether its body has begun to go out. */
 export async function sendBySmtp(smtpUrl: string, letter: Letter): Promise<SendOutcome> {
   const message = await compose(letter);
   const connection = new SMTPConnection(connectionOptions(smtpUrl));
+  const broken = brokenOff(connection);
   let bodyBegan = false;
   const body = new Readable({
     read() {
@@ -43,28 +46,42 @@ export async function sendBySmtp(smtpUrl: string, letter: Letter): Promise<SendO
     },
   });
   try {
-    await new Promise<void>((resolve, reject) => {
-      connection.once('error', reject);
-      connection.once('end', () => reject(new Error('the server closed the connection')));
-      connection.connect((error) => (error ? reject(error) : resolve()));
-    });
-    await logIn(connection, smtpUrl);
-    const response = await new Promise<string>((resolve, reject) => {
-      connection.once('error', reject);
-      connection.once('end', () => reject(new Error('the server closed the connection')));
-      const envelope = { from: addressOf(letter.from), to: [letter.to.address] };
-      connection.send(envelope, body, (error, info) => {
-        if (error) reject(error);
-        else resolve(info.response);
-      });
-    });
+    await Promise.race([broken.off, connect(connection)]);
+    await Promise.race([broken.off, logIn(connection, smtpUrl)]);
+    const response = await Promise.race([broken.off, transmit(connection, letter, body)]);
     connection.quit();
     return { kind: 'sent', response };
   } catch (error) {
     connection.close();
     return outcomeOf(error as SmtpError, bodyBegan);
+  } finally {
+    broken.forget();
   }
 }
+
+/** Rejects when the connection fails, ends, or takes too long in all, whatever is being waited for. */
+function brokenOff(connection: SMTPConnection): { off: Promise<never>; forget: () => void } {
+  let timer: NodeJS.Timeout | undefined;
+  const off = new Promise<never>((_resolve, reject) => {
+    // Stays on the connection: what happens to it after the message was taken is nobody's concern.
+    connection.on('error', reject);
+    connection.once('end', () => reject(new Error('The server closed the connection.')));
+    timer = setTimeout(() => reject(new Error('The server took too long.')), ALTOGETHER_MS);
+  });
+  off.catch(() => {});
+  return { off, forget: () => clearTimeout(timer) };
+}
+
+const connect = (connection: SMTPConnection): Promise<void> =>
+  new Promise((resolve, reject) => {
+    connection.connect((error) => (error ? reject(error) : resolve()));
+  });
+
+const transmit = (connection: SMTPConnection, letter: Letter, body: Readable): Promise<string> =>
+  new Promise((resolve, reject) => {
+    const envelope = { from: addressOf(letter.from), to: [letter.to.address] };
+    connection.send(envelope, body, (error, info) => (error ? reject(error) : resolve(info.response)));
+  });
 
 function outcomeOf(error: SmtpError, bodyBegan: boolean): SendOutcome {
   const reason = error.message;

@@ -11,6 +11,7 @@ import {
   readPdf,
   revisionContent,
 } from '@farlug/db';
+import { linkState } from '../features/reports/link-state.ts';
 import { reportFileName, revisionLetter } from '../features/reports/report-file-name.ts';
 import { reportLetter } from '../mail/report-letter.ts';
 import { sendBySmtp } from '../mail/smtp-send.ts';
@@ -43,27 +44,41 @@ export async function sendReport(
       );
       return null;
     }
-    return { delivery, content, bytes: pdf.pdf };
+    if (linkState(delivery, new Date()) !== 'open') {
+      await markFailed(
+        tx,
+        jobId,
+        deliveryId,
+        'Its link ended before the message went out. Renew it to send.',
+      );
+      return null;
+    }
+    return {
+      no: content.no,
+      sha256: content.sha256,
+      solverVersion: content.solverVersion,
+      input: revisionInput.parse(content.input),
+      digest: reportDigest.parse((content.result as { digest: unknown }).digest),
+      bytes: pdf.pdf,
+    };
   });
   if (ready === null) return;
   if (ready === 'printing') throw new Error('the report is still being printed');
 
   const taken = await inFirm((tx) => beginSending(tx, jobId, deliveryId));
   if (taken === null) return;
-  const { content, bytes } = ready;
+  const { no, input, bytes, ...facts } = ready;
   const letter = reportLetter({
     from: config.mailFrom,
     to: { name: taken.recipientName, address: taken.recipientEmail },
     messageId: taken.messageId,
     message: taken.message,
-    input: revisionInput.parse(content.input),
-    digest: reportDigest.parse((content.result as { digest: unknown }).digest),
-    revisionLetter: revisionLetter(content.no),
-    sha256: content.sha256,
-    solverVersion: content.solverVersion,
-    link: `${config.publicUrl}/i#${linkToken(config.linkSecret, deliveryId, taken.epoch)}`,
+    input,
+    ...facts,
+    revisionLetter: revisionLetter(no),
+    link: `${config.publicUrl}/i#${linkToken(config.linkSecret, { firmId, jobId, deliveryId, epoch: taken.epoch })}`,
     linkExpiresAt: taken.linkExpiresAt,
-    pdf: { name: reportFileName(content.input, content.no, 'pdf'), bytes },
+    pdf: { name: reportFileName(input, no, 'pdf'), bytes },
   });
   const outcome = await sendBySmtp(config.smtpUrl, letter);
   log.info({ deliveryId, outcome: outcome.kind }, 'report mail');

@@ -83,14 +83,14 @@ export function inspectionPdf(deps: Deps, grant: InspectionGrant): Promise<FileA
 /** What the inspector decides, on the revision that was sent; name and title as typed. */
 export function decide(deps: Deps, grant: InspectionGrant, given: GivenDecision): Promise<Done | Refusal> {
   return withLink(deps, grant, async (tx, jobId, delivery) => {
-    await putDecision(tx, jobId, {
+    const recorded = await putDecision(tx, jobId, {
       ...given,
       revisionId: delivery.revisionId,
       deliveryId: delivery.id,
       via: 'link',
       enteredBy: null,
     });
-    await recordAudit(tx, 'decision.received', `${delivery.recipientEmail}: ${given.decision}`);
+    if (recorded) await recordAudit(tx, 'decision.received', `${delivery.recipientEmail}: ${given.decision}`);
     return DONE;
   });
 }

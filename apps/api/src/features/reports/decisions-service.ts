@@ -35,35 +35,36 @@ export function enterPaperDecision(
     deps.db.withFirm(firmId, person.id, async (tx) => {
       const revision = await revisionById(tx, jobId, revisionId);
       if (revision === null) throw refuse('not_found', 'There is no such report in this job.');
-      await putDecision(tx, jobId, {
+      const recorded = await putDecision(tx, jobId, {
         ...given,
         revisionId,
         deliveryId: null,
         via: 'paper',
         enteredBy: person.id,
       });
-      await recordAudit(tx, 'decision.entered', `revision ${revision.no}: ${given.decision}`);
+      if (recorded) await recordAudit(tx, 'decision.entered', `revision ${revision.no}: ${given.decision}`);
       return DONE;
     }),
   );
 }
 
-/** Written once: the same decision again changes nothing, another one under its id is a conflict. */
+const TYPED = ['decision', 'words', 'comments', 'name', 'title', 'via', 'deliveryId'] as const;
+
+/** Written once: the same decision again changes nothing (false), another one under its id is a conflict. */
 export async function putDecision(
   tx: FirmTransaction,
   jobId: string,
   values: Parameters<typeof recordDecision>[2],
-): Promise<void> {
+): Promise<boolean> {
   if (values.decision === 'other' && values.words.trim() === '')
     throw refuse('invalid', 'Write the decision in the authority’s own words.', [
       { path: 'words', message: 'must say what was decided' },
     ]);
-  if (await recordDecision(tx, jobId, values)) return;
+  if (await recordDecision(tx, jobId, values)) return true;
   const known = (await listDecisions(tx, jobId, values.revisionId)).find(({ id }) => id === values.id);
-  const same =
-    known?.decision === values.decision && known.comments === values.comments && known.name === values.name;
-  if (!same)
+  if (known === undefined || !TYPED.every((field) => known[field] === values[field]))
     throw refuse('conflict', 'A decision with this id is on record already, and none is ever changed.');
+  return false;
 }
 
 /** Decisions that came by one delivery's link. */

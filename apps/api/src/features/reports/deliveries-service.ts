@@ -29,8 +29,11 @@ const asMember = <T>(deps: Deps, { firmId, person }: Member, run: (tx: FirmTrans
   refusalAsValue(() => deps.db.withFirm(firmId, person.id, run));
 
 /** Where the mailed link will lead, by the hash of its secret. */
-const keepLink = (deps: Deps, tx: FirmTransaction, jobId: string, { id, epoch }: DeliveryRow) =>
-  addLink(tx, tokenHash(linkToken(deps.config.linkSecret, id, epoch)), { jobId, deliveryId: id, epoch });
+function keepLink(deps: Deps, tx: FirmTransaction, jobId: string, { id, epoch }: DeliveryRow): Promise<void> {
+  const place = { jobId, deliveryId: id, epoch };
+  const token = linkToken(deps.config.linkSecret, { firmId: tx.firmId, ...place });
+  return addLink(tx, tokenHash(token), place);
+}
 
 export interface NewSending {
   delivery: string;
