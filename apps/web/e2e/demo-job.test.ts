@@ -109,8 +109,10 @@ test('a contractor fixes a run of the demo job and issues a report, and an inspe
   await checkScreen(theirs, 'inspection');
   await theirs.setViewportSize(PHONE);
   await picture(theirs, 'inspection-phone');
+  await theirs.getByText(/^\d+ of 142 exceed\.$/).waitFor();
+  await theirs.getByRole('button', { name: 'Comment on LP-2-20' }).click();
+  await theirs.keyboard.type('Measure the route to the roof deck.');
   await theirs.getByRole('radio', { name: 'Corrections needed' }).click();
-  await theirs.getByLabel('Comments').fill('Measure the route to the roof deck.');
   await theirs.getByLabel('Title or office').fill('inspector');
   await theirs.getByRole('button', { name: 'Record' }).click();
   await theirs.getByText(`on record against revision ${letter}`).waitFor();

@@ -1,5 +1,6 @@
 import { cleanup, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
+import { useState } from 'react';
 import { afterEach, expect, test, vi } from 'vitest';
 import { fakeServer, refusal, VISITOR } from '../../../testing/fake-server.ts';
 import { renderPage } from '../../../testing/render-page.tsx';
@@ -30,6 +31,29 @@ test('corrections need words and a name; then the decision is recorded as typed'
     comments: 'Measure LP-2-20.',
     name: 'Dele Moss',
   });
+});
+
+test('a circuit that is asked for is taken up in the comments, below what stands there', async () => {
+  const user = userEvent.setup();
+  fakeServer({ 'GET /api/session': VISITOR });
+  const Asking = () => {
+    const [asked, setAsked] = useState<{ no: number; place: string } | null>(null);
+    return (
+      <>
+        <button type="button" onClick={() => setAsked({ no: (asked?.no ?? 0) + 1, place: 'LP-2-20' })}>
+          ask
+        </button>
+        <DecisionForm letter="B" recipient="" asked={asked} />
+      </>
+    );
+  };
+  renderPage(<Asking />);
+  const comments = screen.getByLabelText('Comments') as HTMLTextAreaElement;
+  await user.type(comments, 'Look again.');
+  await user.click(screen.getByRole('button', { name: 'ask' }));
+  expect(comments.value).toBe('Look again.\nLP-2-20: ');
+  await user.keyboard('is assumed');
+  expect(comments.value).toBe('Look again.\nLP-2-20: is assumed');
 });
 
 test('the token of the link is sent once, leaves the address, and the page goes on at a clean one', async () => {

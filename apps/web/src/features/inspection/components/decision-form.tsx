@@ -1,6 +1,6 @@
 import { newId } from '@farlug/contract/edit';
 import { DECISIONS, type DecisionKind } from '@farlug/contract/routes';
-import { useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { checkDecision, type DecisionDraft } from '../../../lib/decision-draft.ts';
 import { DECISION_WORDS } from '../../../lib/decision-words.ts';
 import { useForm } from '../../../lib/use-form.ts';
@@ -13,8 +13,15 @@ import { useRecordDecision } from '../hooks/use-inspection.ts';
 
 const BLANK: DecisionDraft = { decision: null, words: '', comments: '', name: '', title: '' };
 
+interface DecisionFormProps {
+  letter: string;
+  recipient: string;
+  /** A circuit to be taken up in the comments; each wish has a number of its own. */
+  asked?: { no: number; place: string } | null;
+}
+
 /** Records the inspector’s decision against exactly this revision. */
-export function DecisionForm({ letter, recipient }: { letter: string; recipient: string }) {
+export function DecisionForm({ letter, recipient, asked = null }: DecisionFormProps) {
   const record = useRecordDecision();
   const [id, setId] = useState(newId);
   const [done, setDone] = useState(false);
@@ -32,6 +39,16 @@ export function DecisionForm({ letter, recipient }: { letter: string; recipient:
     },
   });
   const { values, set, errors } = form;
+  const comments = useRef<HTMLTextAreaElement>(null);
+  const taken = useRef(0);
+  useEffect(() => {
+    const field = comments.current;
+    if (!asked || !field || taken.current === asked.no) return;
+    taken.current = asked.no;
+    const before = field.value.trimEnd();
+    set('comments', `${before}${before === '' ? '' : '\n'}${asked.place}: `);
+    field.focus();
+  }, [asked, set]);
   return (
     <form
       noValidate
@@ -65,6 +82,7 @@ export function DecisionForm({ letter, recipient }: { letter: string; recipient:
       )}
       <Field label="Comments" hint="Name the run where you can, as LP-2-20." error={errors.comments}>
         <TextArea
+          ref={comments}
           rows={3}
           maxLength={8000}
           value={values.comments}

@@ -1,61 +1,102 @@
-import type { ReportDigest } from '@farlug/contract/routes';
-import { digitsAgainst, formatFixed } from '@farlug/solver/units';
-import { RowHead, Table, Td, Th } from '../../../ui/table.tsx';
-import { Tally, Verdict } from '../../../ui/verdict.tsx';
+import type { InspectionView } from '@farlug/contract/routes';
+import { formatPercentAgainst } from '@farlug/solver/units';
+import { useState } from 'react';
+import { formatCount } from '../../../lib/format.ts';
+import { Button } from '../../../ui/button.tsx';
+import { Verdict, VerdictFigure, VerdictSentence } from '../../../ui/verdict.tsx';
+import { type Finding, reasonsOf, runOf, verdictOf } from '../finding-words.ts';
 
-const percent = (value: number | null, limit: number | null = null): string =>
-  value === null ? '' : formatFixed(value, digitsAgainst(value, limit));
+const SHOWN_FIRST = 8;
 
-/** What the report found: counts by circuit, then what exceeds or is near a limit, worst first. */
-export function Findings({ digest }: { digest: ReportDigest }) {
+interface FindingsProps {
+  view: InspectionView;
+  /** Takes a circuit up in the comments of the decision. */
+  onComment: (place: string) => void;
+}
+
+/** The verdict of the report in one sentence, then what exceeds or is near a limit, the worst first. */
+export function Findings({ view, onComment }: FindingsProps) {
+  const [all, setAll] = useState(false);
+  const { digest, input } = view;
+  const { exceed, lead, rest } = verdictOf(digest);
+  const shown = all ? digest.findings : digest.findings.slice(0, SHOWN_FIRST);
+  const more = digest.findings.length - shown.length;
   return (
-    <section aria-labelledby="findings">
-      <h2 id="findings" className="text-label font-normal text-ink-soft">
-        What it found, by circuit
-      </h2>
-      <div className="my-1">
-        <Tally counts={digest.counts} />
-      </div>
-      {digest.findings.length === 0 ? (
-        <p className="text-grid">No circuit exceeds a limit or is near one.</p>
-      ) : (
-        <Table caption="What exceeds or is near a limit, worst first" stacked>
-          <thead>
-            <tr>
-              <Th className="pl-0!">Circuit</Th>
-              <Th>Verdict</Th>
-              <Th numeric>Feeder %</Th>
-              <Th numeric>Branch %</Th>
-              <Th numeric>Total %</Th>
-              <Th className="pr-0!">Beyond its limit</Th>
-            </tr>
-          </thead>
-          <tbody>
-            {digest.findings.map((finding) => (
-              <tr key={`${finding.place} ${finding.load}`}>
-                <RowHead className="pl-0!">
-                  {finding.place} <span className="font-normal">{finding.serves}</span>
-                </RowHead>
-                <Td label="Verdict">
-                  <Verdict kind={finding.shown} />
-                </Td>
-                <Td numeric label="Feeder %">
-                  {percent(finding.feederPercent)}
-                </Td>
-                <Td numeric label="Branch %">
-                  {percent(finding.branchPercent)}
-                </Td>
-                <Td numeric label="Total %">
-                  {percent(finding.totalPercent, finding.limitPercent)}
-                </Td>
-                <Td label="Beyond its limit" className="pr-0!">
-                  {finding.reasons.join(', ')}
-                </Td>
-              </tr>
+    <>
+      <section aria-label="Verdict">
+        <VerdictSentence kind={exceed > 0 ? 'over' : 'within'} lead={lead}>
+          {rest}
+        </VerdictSentence>
+        <p className="mt-1 text-grid text-ink-soft">
+          {input.job.limits.force === 'recommendation'
+            ? 'A recommendation: a miss is not a violation.'
+            : 'Limits that the adopted code makes mandatory, as the firm states it.'}
+        </p>
+      </section>
+      {digest.findings.length > 0 && (
+        <section aria-label="What exceeds or is near">
+          <h2 className="mb-1 text-label font-normal text-ink-soft">
+            What exceeds or is near a limit, worst first
+          </h2>
+          <ul>
+            {shown.map((finding) => (
+              <Line
+                key={`${finding.place} ${finding.load}`}
+                finding={finding}
+                view={view}
+                onComment={onComment}
+              />
             ))}
-          </tbody>
-        </Table>
+          </ul>
+          {more > 0 && (
+            <Button look="bare" onClick={() => setAll(true)}>
+              {formatCount(more, 'more circuit')}
+            </Button>
+          )}
+        </section>
       )}
-    </section>
+    </>
+  );
+}
+
+function Line({ finding, view, onComment }: FindingsProps & { finding: Finding }) {
+  const { place, serves, shown, totalPercent, limitPercent } = finding;
+  const run = runOf(finding, view.input);
+  return (
+    <li className="border-t border-hair py-2 first:border-t-0">
+      <div className="flex items-baseline gap-3">
+        <span className="min-w-0">
+          <VerdictFigure kind={shown} bold>
+            {place}
+          </VerdictFigure>{' '}
+          {serves}
+        </span>
+        {totalPercent === null ? (
+          <Verdict kind={shown} className="ml-auto" />
+        ) : (
+          <span
+            className={
+              shown === 'near' ? 'ml-auto whitespace-nowrap' : 'ml-auto font-bold whitespace-nowrap text-over'
+            }
+          >
+            {formatPercentAgainst(totalPercent, limitPercent)}
+          </span>
+        )}
+      </div>
+      <div className="flex flex-wrap items-baseline gap-x-4 text-grid">
+        <span className="text-ink-soft">{run}</span>
+        <span className={shown === 'near' ? 'text-ink-soft' : undefined}>
+          {reasonsOf(finding).join(', ')}
+        </span>
+        <Button
+          look="bare"
+          className="ml-auto"
+          aria-label={`Comment on ${place}`}
+          onClick={() => onComment(place)}
+        >
+          Comment
+        </Button>
+      </div>
+    </li>
   );
 }

@@ -1,4 +1,5 @@
 import { downloadInspectionPdf, type InspectionView } from '@farlug/contract/routes';
+import { useState } from 'react';
 import { ApiError } from '../../../lib/api-error.ts';
 import { formatDay, formatMoment, shortHash } from '../../../lib/format.ts';
 import { revisionLetter } from '../../../lib/revision-letter.ts';
@@ -49,6 +50,7 @@ function Report({ view }: { view: InspectionView }) {
   const { input } = view;
   const block = input.titleBlock;
   const letter = revisionLetter(view.revisionNo);
+  const [asked, setAsked] = useState<{ no: number; place: string } | null>(null);
   return (
     <div className="mx-auto max-w-240">
       <header className="border-t-2 border-b border-ink bg-sheet px-4 py-2.5">
@@ -106,13 +108,13 @@ function Report({ view }: { view: InspectionView }) {
             </span>
           </div>
         </section>
-        <Findings digest={view.digest} />
+        <Findings
+          view={view}
+          onComment={(place) => setAsked((last) => ({ no: (last?.no ?? 0) + 1, place }))}
+        />
         <section aria-label="What it stands on">
           <h2 className="mb-1 text-label font-normal text-ink-soft">What it stands on</h2>
           <Particulars items={basisOf(input)} />
-          {input.job.limits.force === 'recommendation' && (
-            <p className="mt-1 text-grid text-ink-soft">A recommendation: a miss is not a violation.</p>
-          )}
         </section>
         {input.note && (
           <section aria-label="Note">
@@ -136,7 +138,7 @@ function Report({ view }: { view: InspectionView }) {
           <Cautions texts={input.notices} firmWording={input.firmWording} />
         </section>
       </main>
-      <DecisionForm letter={letter} recipient={view.recipientName} />
+      <DecisionForm letter={letter} recipient={view.recipientName} asked={asked} />
     </div>
   );
 }
