@@ -7,7 +7,8 @@ import { SMTPServer } from 'smtp-server';
 export interface MailFaults {
   recipient?: number;
   message?: number;
-  dropAt?: 'recipient' | 'message' | 'login' | 'taken';
+  /** `never`: the message is read and no answer ever comes. */
+  dropAt?: 'recipient' | 'message' | 'login' | 'taken' | 'never';
 }
 
 export interface TestMailServer {
@@ -16,6 +17,8 @@ export interface TestMailServer {
   mails: ParsedMail[];
   /** How many connections there were. */
   connections: () => number;
+  /** How many messages wait for an answer that does not come. */
+  hanging: () => number;
   fail: (faults: MailFaults) => void;
   close: () => Promise<void>;
 }
@@ -30,6 +33,7 @@ export async function startTestMailServer(port = 0): Promise<TestMailServer> {
   const mails: ParsedMail[] = [];
   const sockets = new Set<Socket>();
   let count = 0;
+  let hanging = 0;
   let faults: MailFaults = {};
   const drop = () => {
     for (const socket of sockets) socket.destroy();
@@ -57,6 +61,10 @@ export async function startTestMailServer(port = 0): Promise<TestMailServer> {
       stream.once('error', () => {});
       stream.once('end', () => {
         if (faults.dropAt === 'message') return;
+        if (faults.dropAt === 'never') {
+          hanging += 1;
+          return;
+        }
         if (faults.message) {
           done(answer(faults.message));
           return;
@@ -82,6 +90,7 @@ export async function startTestMailServer(port = 0): Promise<TestMailServer> {
     url: `smtp://127.0.0.1:${(server.server.address() as AddressInfo).port}`,
     mails,
     connections: () => count,
+    hanging: () => hanging,
     fail: (wanted) => {
       faults = wanted;
     },
