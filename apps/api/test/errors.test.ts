@@ -18,6 +18,7 @@ import {
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { mountFeatures } from '../src/app.ts';
 import { type ErrorWorld, exerciseErrors, type ProvokeTable, paramsFor } from './exercise-errors.ts';
+import { REPORT_ERRORS } from './report-errors.ts';
 import { startTestApi } from './start-test-api.ts';
 import { invitationToken, joinFirm, PASSWORD, signUpFirm } from './test-firm.ts';
 import { emptyRows, withRevision } from './test-job.ts';
@@ -200,11 +201,8 @@ const OWN: ProvokeTable = {
   },
 };
 
-const REPORTS = /\/(revisions|deliveries)\b|^\/api\/inspection\b/;
-const ROUTES = ALL_ROUTES.filter(({ path: address }) => !REPORTS.test(address));
-
 describe('every code', () => {
-  exerciseErrors(() => world, ROUTES, OWN);
+  exerciseErrors(() => world, ALL_ROUTES, { ...OWN, ...REPORT_ERRORS });
 });
 
 describe('every route', () => {

@@ -14,11 +14,20 @@ import {
   revokeLink,
 } from '@farlug/contract/routes';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { linkToken } from '../src/platform/link-token.ts';
 import { startTestApi, type TestApi } from './start-test-api.ts';
 import type { TestClient } from './test-client.ts';
 import { signUpFirm, type TestFirm } from './test-firm.ts';
-import { type DeliveryPlace, demoJob, issueBody, issued, pdfSaying, queuedDelivery } from './test-report.ts';
+import {
+  type DeliveryPlace,
+  decisionBody,
+  demoJob,
+  inspectorOf,
+  issueBody,
+  issued,
+  pdfSaying,
+  queuedDelivery,
+  tokenOf,
+} from './test-report.ts';
 
 let api: TestApi;
 let firm: TestFirm;
@@ -29,28 +38,11 @@ beforeAll(async () => {
 });
 afterAll(() => api.close());
 
-const tokenOf = ({ firm: firmId, job: jobId, delivery: deliveryId }: DeliveryPlace, epoch = 1) =>
-  linkToken(api.deps.config.linkSecret, { firmId, jobId, deliveryId, epoch });
 const open = (client: TestClient, token: string) => client.call(openInspection, { body: { token } });
 
-async function inspector(at: DeliveryPlace): Promise<TestClient> {
-  const client = api.client();
-  const { status } = await open(client, tokenOf(at));
-  if (status !== 200) throw new Error(`opening the link answered ${status}`);
-  return client;
-}
+const inspector = (at: DeliveryPlace) => inspectorOf(api, at);
 const revisionOf = async (at: DeliveryPlace) =>
   (await firm.admin.call(listRevisions, { params: at })).body.revisions.find(({ id }) => id === at.revision)!;
-const decision = (more: object = {}) => ({
-  id: randomUUID(),
-  decision: 'corrections-needed' as const,
-  words: '',
-  comments: 'DC-1-7: show the length.',
-  name: 'R. Osei',
-  title: 'Electrical inspector',
-  ...more,
-});
-
 describe('the link', () => {
   it('is exchanged for a cookie, with which report and basis are read without an account', async () => {
     const at = await queuedDelivery(api, firm);
@@ -86,13 +78,13 @@ describe('the link', () => {
     expect((await client.call(listRevisions, { params: at })).error.code).toBe('sign_in_needed');
     const other = await queuedDelivery(api, firm);
     expect((await client.call(getInspection)).body.sha256).toBe((await revisionOf(at)).sha256);
-    await open(client, tokenOf(other));
+    await open(client, tokenOf(api, other));
     expect((await client.call(getInspection)).body.sha256).toBe((await revisionOf(other)).sha256);
   });
 
   it('marks the report as opened only when it is exchanged; nothing that is read changes anything', async () => {
     const at = await queuedDelivery(api, firm);
-    const token = tokenOf(at);
+    const token = tokenOf(api, at);
     const get = await api.client().agent.get(openInspection.path).query({ token });
     expect(get.status).toBe(404);
     expect((await revisionOf(at)).deliveries[0]?.openedAt).toBeNull();
@@ -110,14 +102,14 @@ describe('the link', () => {
     const answer = await api
       .client()
       .agent.post(openInspection.path)
-      .send({ token: tokenOf(at) });
+      .send({ token: tokenOf(api, at) });
     expect(answer.status).toBe(403);
     expect((await revisionOf(at)).deliveries[0]?.openedAt).toBeNull();
   });
 
   it('that is made up, or of another epoch, leads nowhere', async () => {
     const at = await queuedDelivery(api, firm);
-    for (const token of ['x'.repeat(43), tokenOf(at, 2), tokenOf({ ...at, firm: randomUUID() })])
+    for (const token of ['x'.repeat(43), tokenOf(api, at, 2), tokenOf(api, { ...at, firm: randomUUID() })])
       expect(await open(api.client(), token)).toMatchObject({ status: 410, error: { code: 'link_gone' } });
     expect((await open(api.client(), 'short')).error.code).toBe('invalid');
   });
@@ -134,8 +126,8 @@ describe('the link', () => {
     expect((await end(at)).status).toBe(200);
     for (const route of [getInspection, downloadInspectionPdf])
       expect((await client.call(route)).error.code).toBe('link_gone');
-    expect((await client.call(recordDecision, { body: decision() })).error.code).toBe('link_gone');
-    expect((await open(api.client(), tokenOf(at))).error.code).toBe('link_gone');
+    expect((await client.call(recordDecision, { body: decisionBody() })).error.code).toBe('link_gone');
+    expect((await open(api.client(), tokenOf(api, at))).error.code).toBe('link_gone');
     expect((await revisionOf(at)).decisions).toEqual([]);
   });
 
@@ -147,12 +139,12 @@ describe('the link', () => {
       expect((await client.call(getInspection)).status).toBe(200);
       ahead = 30 * 86_400_000 + 60_000;
       expect((await client.call(getInspection)).error.code).toBe('link_gone');
-      expect((await client.call(recordDecision, { body: decision() })).error.code).toBe('link_gone');
-      expect((await open(api.client(), tokenOf(at))).error.code).toBe('link_gone');
+      expect((await client.call(recordDecision, { body: decisionBody() })).error.code).toBe('link_gone');
+      expect((await open(api.client(), tokenOf(api, at))).error.code).toBe('link_gone');
       expect((await revisionOf(at)).deliveries[0]?.link).toBe('expired');
       await firm.admin.call(renewLink, { params: at, body: { linkDays: 2 } });
       expect((await revisionOf(at)).deliveries[0]?.link).toBe('open');
-      expect((await open(client, tokenOf(at, 2))).status).toBe(200);
+      expect((await open(client, tokenOf(api, at, 2))).status).toBe(200);
     } finally {
       ahead = 0;
     }
@@ -193,7 +185,7 @@ describe('the decision', () => {
     const at = await queuedDelivery(api, firm);
     await firm.admin.call(issueRevision, { params: at, body: issueBody() });
     const client = await inspector(at);
-    const given = decision();
+    const given = decisionBody();
     const decide = (body: typeof given) => client.call(recordDecision, { body });
     expect((await decide(given)).body).toEqual({ ok: true });
     expect((await Promise.all([decide(given), decide(given)])).map(({ status }) => status)).toEqual([
@@ -222,7 +214,7 @@ describe('the decision', () => {
 
   it('in the authority’s own words needs them', async () => {
     const client = await inspector(await queuedDelivery(api, firm));
-    const decide = (more: object) => client.call(recordDecision, { body: decision(more) });
+    const decide = (more: object) => client.call(recordDecision, { body: decisionBody(more) });
     expect((await decide({ decision: 'other' })).error).toMatchObject({
       code: 'invalid',
       details: [{ path: 'words', message: 'must say what was decided' }],
@@ -240,9 +232,9 @@ describe('the decision', () => {
     const at = await queuedDelivery(api, firm);
     const second = await queuedDelivery(api, firm, at);
     const [one, other] = [await inspector(at), await inspector(second)];
-    await one.call(recordDecision, { body: decision() });
-    await one.call(recordDecision, { body: decision({ decision: 'no-exceptions', comments: '' }) });
-    await other.call(recordDecision, { body: decision({ comments: 'Mine.' }) });
+    await one.call(recordDecision, { body: decisionBody() });
+    await one.call(recordDecision, { body: decisionBody({ decision: 'no-exceptions', comments: '' }) });
+    await other.call(recordDecision, { body: decisionBody({ comments: 'Mine.' }) });
     const kinds = async (client: TestClient) =>
       (await client.call(getInspection)).body.decisions.map((given) => given.decision);
     expect(await kinds(one)).toEqual(['corrections-needed', 'no-exceptions']);

@@ -15,13 +15,13 @@ import {
   recordPaperDecision,
   saveFirmSettings,
 } from '@farlug/contract/routes';
-import type { JobRowLists } from '@farlug/contract/rows';
 import { SOLVER_VERSION } from '@farlug/solver/version';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { renderRevision } from '../src/worker/render-report.ts';
 import { startTestApi, type TestApi } from './start-test-api.ts';
 import { joinFirm, signUpFirm, type TestFirm } from './test-firm.ts';
 import {
+  decisionBody,
   demoJob,
   FIRST,
   issueBody,
@@ -30,6 +30,8 @@ import {
   LAST,
   pdfSaying,
   queuePayload,
+  tooHeavy,
+  withoutLength,
   workerDeps,
 } from './test-report.ts';
 
@@ -54,16 +56,6 @@ const rename = (place: JobPlace, was: string, set: string) =>
       ops: [{ table: 'job', row: place.job, was: { name: was }, set: { name: set } }],
     },
   });
-const withoutLength = (rows: JobRowLists): JobRowLists => ({
-  ...rows,
-  run: rows.run.map((run) => (run.code === 'DC-1-3' ? { ...run, length: null } : run)),
-});
-const tooHeavy = (rows: JobRowLists): JobRowLists => ({
-  ...rows,
-  load: rows.load.map((load) =>
-    load.code === 'DC-1-3' ? { ...load, size: '5 kW', behaviour: 'power' as const } : load,
-  ),
-});
 
 /** RFC 8785 for data without exotic numbers or keys: members sorted, no white space. */
 const sorted = (value: unknown): unknown =>
@@ -351,14 +343,7 @@ describe('the printed form', () => {
 });
 
 describe('a decision on paper', () => {
-  const decision = () => ({
-    id: randomUUID(),
-    decision: 'no-exceptions' as const,
-    words: '',
-    comments: 'Stamped at the counter.',
-    name: 'R. Osei',
-    title: 'Electrical inspector',
-  });
+  const decision = () => decisionBody({ decision: 'no-exceptions', comments: 'Stamped at the counter.' });
 
   it('is entered on its revision with who entered it, once', async () => {
     const at = await issued(firm, await demoJob(firm));

@@ -1,12 +1,20 @@
 import { randomUUID } from 'node:crypto';
 import { rowsFromJob } from '@farlug/contract/job';
-import { createJob, issueRevision, sendRevision } from '@farlug/contract/routes';
+import {
+  createJob,
+  issueRevision,
+  openInspection,
+  type recordDecision,
+  sendRevision,
+} from '@farlug/contract/routes';
 import type { JobRowLists } from '@farlug/contract/rows';
 import type { Attempt } from '@farlug/db';
 import type { z } from 'zod';
+import { linkToken } from '../src/platform/link-token.ts';
 import { renderRevision } from '../src/worker/render-report.ts';
 import type { WorkerDeps } from '../src/worker/worker-deps.ts';
 import type { TestApi } from './start-test-api.ts';
+import type { TestClient } from './test-client.ts';
 import type { TestFirm } from './test-firm.ts';
 import { demoFile } from './test-job.ts';
 
@@ -65,6 +73,20 @@ export async function demoJob(
   if (status !== 200) throw new Error(`the job was not made: ${error.message}`);
   return { firm, job: rows.job[0]!.id };
 }
+
+/** A circuit whose length nobody has measured yet. */
+export const withoutLength = (rows: JobRowLists): JobRowLists => ({
+  ...rows,
+  run: rows.run.map((run) => (run.code === 'DC-1-3' ? { ...run, length: null } : run)),
+});
+
+/** More power than 38 ft of 14 AWG can carry at 48 V, whatever the current. */
+export const tooHeavy = (rows: JobRowLists): JobRowLists => ({
+  ...rows,
+  load: rows.load.map((load) =>
+    load.code === 'DC-1-3' ? { ...load, size: '5 kW', behaviour: 'power' as const } : load,
+  ),
+});
 
 type IssueBody = z.input<typeof issueRevision.body>;
 
@@ -134,4 +156,29 @@ export async function queuedDelivery(api: TestApi, firm: TestFirm, at?: IssuedPl
   const { status, error } = await firm.admin.call(sendRevision, { params, body });
   if (status !== 200) throw new Error(`nothing was sent: ${error.message}`);
   return { ...params, delivery: body.delivery };
+}
+
+export const tokenOf = (api: TestApi, { firm, job, delivery }: DeliveryPlace, epoch = 1): string =>
+  linkToken(api.deps.config.linkSecret, { firmId: firm, jobId: job, deliveryId: delivery, epoch });
+
+/** The browser of somebody who opened the delivery's link. */
+export async function inspectorOf(api: TestApi, at: DeliveryPlace): Promise<TestClient> {
+  const client = api.client();
+  const { status } = await client.call(openInspection, { body: { token: tokenOf(api, at) } });
+  if (status !== 200) throw new Error(`opening the link answered ${status}`);
+  return client;
+}
+
+type DecisionBody = z.input<typeof recordDecision.body>;
+
+export function decisionBody(more: Partial<DecisionBody> = {}): DecisionBody {
+  return {
+    id: randomUUID(),
+    decision: 'corrections-needed',
+    words: '',
+    comments: 'DC-1-7: show the length.',
+    name: 'R. Osei',
+    title: 'Electrical inspector',
+    ...more,
+  };
 }
