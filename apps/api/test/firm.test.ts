@@ -71,6 +71,10 @@ describe('the firm', () => {
     await firm.admin.call(saveFirmDefaults, { params, body: { b: '3' } });
     const seen = (await estimator.client.call(getFirm, { params })).body;
     expect(seen).toMatchObject({ settings, defaults: { b: '3' }, role: 'estimator' });
+    for (const body of [{ a: '1\0' }, { 'a\0': '1' }, { a: '\ud800' }]) {
+      const { error } = await firm.admin.call(saveFirmDefaults, { params, body: body as never });
+      expect(error).toMatchObject({ code: 'invalid', details: [{ path: expect.stringMatching(/^a/) }] });
+    }
     const wrong = { ...settings, currency: 'dollars' };
     expect((await firm.admin.call(saveFirmSettings, { params, body: wrong })).error.details).toEqual([
       { path: 'currency', message: 'Use a three-letter currency code, as USD.' },

@@ -271,6 +271,20 @@ describe('an edit', () => {
   });
 });
 
+it('refuses a character that no database holds, wherever text is taken', async () => {
+  const params = await aJob();
+  const NUL = 'a\0b';
+  const copy = await firm.admin.call(duplicateJob, { params, body: { id: randomUUID(), name: NUL } });
+  expect(copy.error).toMatchObject({ code: 'invalid', details: [{ path: 'name' }] });
+  const search = await firm.admin.call(listJobs, { params: { firm: firm.firm }, query: { search: NUL } });
+  expect(search.error).toMatchObject({ code: 'bad_request', details: [{ path: 'search' }] });
+  const verdict = await firm.admin.call(reportVerdict, {
+    params,
+    body: { atSeq: 0, solverVersion: NUL, worstPercent: null, over: 0, near: 0, within: 0, leftOut: 0 },
+  });
+  expect(verdict.error).toMatchObject({ code: 'invalid', details: [{ path: 'solverVersion' }] });
+});
+
 it('asks for a number where the address must hold one', async () => {
   const params = await aJob();
   const answer = await firm.admin.call(listEdits, { params, query: { since: 'yesterday' } });

@@ -25,3 +25,5 @@ export const firmParams = z.strictObject({ firm: z.uuid() });
 export const jobParams = z.strictObject({ firm: z.uuid(), job: z.uuid() });
 export const freeText = (max: number) =>
   z.string().trim().max(max, `Use at most ${max} characters.`).refine(isStorable, NO_TEXT);
+/** Kept or looked for as it is, blanks and all. */
+export const exactText = (max: number) => z.string().max(max).refine(isStorable, NO_TEXT);

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { ADMIN, FIRM_ROLES, MEMBER, route } from '../route.ts';
 import { conductorRow, limitRow } from '../rows/index.ts';
-import { email, empty, firmParams, freeText, instant, name, none } from './common.ts';
+import { email, empty, exactText, firmParams, freeText, instant, name, none } from './common.ts';
 
 /** A named set of limits; `clause` says where it stands, `force` whether it binds. */
 export const presetBody = z.strictObject({
@@ -27,7 +27,7 @@ export const firmSettings = z.strictObject({
 });
 
 /** Values that new circuits start from; decimals as typed. Keys are those of the contract's `DEFAULTS`. */
-export const defaultValues = z.record(z.string().max(60), z.string().max(80));
+export const defaultValues = z.record(exactText(60), exactText(80));
 
 export const memberView = z.strictObject({
   personId: z.uuid(),

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { edit, editConflict } from '../edit/index.ts';
 import { MEMBER, route } from '../route.ts';
 import { jobRowLists } from '../rows/index.ts';
-import { empty, firmParams, instant, jobParams, none, ok } from './common.ts';
+import { empty, exactText, firmParams, freeText, instant, jobParams, none, ok } from './common.ts';
 
 /** What the list shows of a job without opening it; the figures are of the last solve that a browser reported. */
 export const jobSummary = z.strictObject({
@@ -18,7 +18,7 @@ export const jobSummary = z.strictObject({
   verdict: z
     .strictObject({
       atSeq: z.int(),
-      solverVersion: z.string(),
+      solverVersion: exactText(40),
       worstPercent: z.number().nullable(),
       over: z.int(),
       near: z.int(),
@@ -39,7 +39,7 @@ export const listJobs = route({
   idempotent: true,
   params: firmParams,
   query: z.strictObject({
-    search: z.string().max(200).optional(),
+    search: exactText(200).optional(),
     archived: z.enum(['no', 'yes']).optional(),
   }),
   body: empty,
@@ -151,7 +151,7 @@ export const duplicateJob = route({
   idempotent: true,
   params: jobParams,
   query: none,
-  body: z.strictObject({ id: z.uuid(), name: z.string().trim().min(1).max(400) }),
+  body: z.strictObject({ id: z.uuid(), name: freeText(400).min(1, 'Enter a name.') }),
   response: z.strictObject({ id: z.uuid(), headSeq: z.int() }),
   errors: ['invalid', 'conflict', 'not_found'],
 });
