@@ -12,6 +12,7 @@ export function ClosingSection({ figures, facts }: { figures: ReportFigures; fac
     <Sheet
       figures={figures}
       facts={facts}
+      section="tables and decision"
       title="Tables and decision"
       lead="Figures come from these tables as transcribed; confirm them against the adopted edition."
     >

@@ -8,12 +8,17 @@ export interface Column {
   /** Points; the column without one takes what is left. */
   width?: number;
   right?: boolean;
+  /** Its cells hold a drawing beside their text. */
+  drawn?: boolean;
 }
 
-const cellStyle = ({ width, right }: Column) => ({
+const cellStyle = ({ width }: Column) => ({
   ...(width === undefined ? { flexGrow: 1, flexShrink: 1, flexBasis: 0 } : { width, flexShrink: 0 }),
   paddingHorizontal: 2.5,
-  ...(right ? { alignItems: 'flex-end' as const } : {}),
+});
+const textStyle = (column: Column) => ({
+  ...cellStyle(column),
+  textAlign: column.right ? ('right' as const) : ('left' as const),
 });
 
 /** A ruled table whose heading stands again on each page that it goes on to. */
@@ -30,9 +35,9 @@ export function Columns({ columns, children }: { columns: readonly Column[]; chi
         }}
       >
         {columns.map((column) => (
-          <View key={column.key} style={cellStyle(column)}>
-            <Text style={{ fontSize: 7, color: SOFT }}>{column.label}</Text>
-          </View>
+          <Text key={column.key} style={[textStyle(column), { fontSize: 7, color: SOFT }]}>
+            {column.label}
+          </Text>
         ))}
       </View>
       {children}
@@ -65,14 +70,14 @@ export function Row({
     >
       {columns.map((column) => {
         const cell = cells[column.key];
-        return (
+        return column.drawn ? (
           <View key={column.key} style={cellStyle(column)}>
-            {typeof cell === 'string' ? (
-              <Text style={{ textAlign: column.right ? 'right' : 'left' }}>{cell}</Text>
-            ) : (
-              (cell ?? null)
-            )}
+            {cell}
           </View>
+        ) : (
+          <Text key={column.key} style={textStyle(column)}>
+            {cell}
+          </Text>
         );
       })}
     </View>

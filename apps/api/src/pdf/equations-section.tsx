@@ -16,6 +16,7 @@ export function EquationsSection({ figures, facts }: { figures: ReportFigures; f
     <Sheet
       figures={figures}
       facts={facts}
+      section="node equations"
       title={`Node equations at ${bus}`}
       lead={`Written by inspection at ${STATE[equations.scenario]}: own admittance times own voltage, less each joining admittance times its neighbour’s voltage, equals the current that flows in. Siemens, volts, amperes; closes to ${equations.kclResidual === 0 ? '0' : equations.kclResidual.toExponential(1)} of the largest current.`}
     >
@@ -46,12 +47,14 @@ export function EquationsSection({ figures, facts }: { figures: ReportFigures; f
 
 type Item = { name: string; about: string; value: readonly [number, number] };
 
-/** Three to a line: name and value. */
+/** Two to a line: name and value. */
 function Named({ title, items }: { title: string; items: readonly Item[] }) {
   if (items.length === 0) return null;
   return (
     <View>
-      <Heading title={title} />
+      <View fixed>
+        <Heading title={title} />
+      </View>
       <View style={{ flexDirection: 'row', flexWrap: 'wrap' }}>
         {items.map(({ name, value }) => (
           <View

@@ -6,6 +6,7 @@ import { Glyph, Heading } from './glyph.tsx';
 import type { ReportFigures } from './report-figures.ts';
 import { Sheet } from './sheet.tsx';
 import { HAIR, styles } from './theme.ts';
+import { VoltsBar } from './volts-bar.tsx';
 
 type Done = Extract<HandCheck, { ok: true }>;
 
@@ -23,9 +24,11 @@ export function HandCheckSection({ figures, facts }: { figures: ReportFigures; f
     <Sheet
       figures={figures}
       facts={facts}
+      section="hand check"
       title="Hand check"
       lead="Each radial run by a formula that can be worked with a pencil, lengths one way; branch runs in the turn of their own circuit, others at design demand."
     >
+      <VoltsBar figures={figures} />
       {done.map((check) => {
         const row = rows.get(check.runId);
         return (
@@ -48,26 +51,13 @@ export function HandCheckSection({ figures, facts }: { figures: ReportFigures; f
                 </Text>
               </View>
               <Text style={[styles.small, styles.soft]}>
-                {check.wire}. {check.constants}
+                {check.wire}
+                {row?.override ? ' †' : ''}. {check.constants}
               </Text>
-              <Text style={styles.code}>{check.hand.formula}</Text>
-              <Text style={styles.code}>{check.hand.filled}</Text>
+              <Text style={styles.code}>{`${check.hand.formula}\n${check.hand.filled}`}</Text>
             </View>
             <View style={{ width: 176, flexShrink: 0 }}>
-              <Result word="By hand" volts={check.hand.volts} percent={check.hand.percent} />
-              {check.byCircularMils && (
-                <Result
-                  word="By 2·K·I·D/cmil"
-                  volts={check.byCircularMils.volts}
-                  percent={check.byCircularMils.percent}
-                />
-              )}
-              <Result
-                word={`Node equations, ${check.nodal.pair}`}
-                volts={check.nodal.volts}
-                percent={check.nodal.percent}
-                strong
-              />
+              <Results check={check} />
               {check.reasons.length > 0 && (
                 <Text style={[styles.soft, { fontSize: 7.2, lineHeight: 1.3 }]}>
                   {`${signed(check.difference.percent)} %: ${check.reasons.map(({ words }) => words).join('; ')}`}
@@ -93,31 +83,26 @@ export function HandCheckSection({ figures, facts }: { figures: ReportFigures; f
 
 const signed = (percent: number): string => `${percent >= 0 ? '+' : '−'}${formatFixed(Math.abs(percent), 2)}`;
 
-function Result({
-  word,
-  volts,
-  percent,
-  strong = false,
-}: {
-  word: string;
-  volts: number;
-  percent: number;
-  strong?: boolean;
-}) {
-  const style = strong ? styles.bold : {};
+/** By hand above, the node equations below them in bold: three texts side by side, so that a line stays a line. */
+function Results({ check: { hand, byCircularMils, nodal } }: { check: Done }) {
+  const byHand = [
+    { word: 'By hand', ...hand },
+    ...(byCircularMils ? [{ word: 'By 2·K·I·D/cmil', ...byCircularMils }] : []),
+  ];
   return (
-    <View
-      style={{
-        flexDirection: 'row',
-        borderBottomWidth: 0.5,
-        borderBottomColor: HAIR,
-        paddingVertical: 0.8,
-        fontSize: 8,
-      }}
-    >
-      <Text style={[{ flexGrow: 1, flexShrink: 1, flexBasis: 0 }, style]}>{word}</Text>
-      <Text style={[{ width: 42, textAlign: 'right' }, style]}>{formatFixed(volts, 2)} V</Text>
-      <Text style={[{ width: 44, textAlign: 'right' }, style]}>{formatFixed(percent, 2)} %</Text>
+    <View style={[styles.row, { fontSize: 8, lineHeight: 1.35 }]}>
+      <Text style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0 }}>
+        {byHand.map(({ word }) => `${word}\n`)}
+        <Text style={styles.bold}>Node equations, {nodal.pair}</Text>
+      </Text>
+      <Text style={{ width: 42, textAlign: 'right' }}>
+        {byHand.map(({ volts }) => `${formatFixed(volts, 2)} V\n`)}
+        <Text style={styles.bold}>{formatFixed(nodal.volts, 2)} V</Text>
+      </Text>
+      <Text style={{ width: 44, textAlign: 'right' }}>
+        {byHand.map(({ percent }) => `${formatFixed(percent, 2)} %\n`)}
+        <Text style={styles.bold}>{formatFixed(nodal.percent, 2)} %</Text>
+      </Text>
     </View>
   );
 }

@@ -13,7 +13,7 @@ import {
   type Solution,
 } from '@farlug/solver/job';
 import { circuitsOf, type ShownVerdict, shownVerdicts, summarise } from '@farlug/solver/judge';
-import { loadText, runWords } from './words.ts';
+import { loadText, powerFactorText, runWords } from './words.ts';
 
 /** One row of a panel's schedule as it is printed. */
 export interface PrintedRow {
@@ -28,6 +28,7 @@ export interface PrintedRow {
   lengthAssumed: boolean;
   load: string;
   loadAssumed: boolean;
+  powerFactor: string;
   powerFactorAssumed: boolean;
   override: string | null;
   kind: string;
@@ -35,7 +36,14 @@ export interface PrintedRow {
   worst: LoadResult | null;
   run: Run | null;
   /** Of a row that feeds a panel: the feeder part there, at design demand. */
-  feeds: { feederPercent: number | null; shown: ShownVerdict } | null;
+  feeds: FedPanel | null;
+}
+export interface FedPanel {
+  bus: string;
+  feederPercent: number | null;
+  /** Lowest between its lines, or to neutral where it has one. */
+  volts: number | null;
+  shown: ShownVerdict;
 }
 export interface PrintedPanel {
   bus: string;
@@ -105,11 +113,12 @@ export function reportFigures(
       serves: facts.serves || run?.name || own[0]?.name || '',
       room: facts.room,
       breaker: run?.breaker ? `${run.breaker.amps}/${run.breaker.poles}` : '',
-      wire: run ? runWords(run) : '',
+      wire: run ? `${runWords(run)}${overrides.has(run.id) ? ' †' : ''}` : '',
       length: run ? `${run.length} ${job.lengthUnit}` : '',
       lengthAssumed: run ? assumed.has(`run ${run.id} length`) : false,
       load: own.length === 1 ? loadText(own[0]!) : own.length > 1 ? `${own.length} loads` : '',
       loadAssumed: has('size'),
+      powerFactor: job.frequency === 0 ? '' : powerFactorText(own),
       powerFactorAssumed: has('powerFactor'),
       override: run ? (overrides.get(run.id) ?? null) : null,
       kind: facts.kind,
@@ -139,7 +148,7 @@ export function reportFigures(
       return {
         ...row,
         serves: row.serves || `panel ${run.to}`,
-        feeds: verdict ? { feederPercent: buses.get(run.to)?.feederPercent ?? null, shown: verdict } : null,
+        feeds: verdict ? fedPanel(run.to, buses.get(run.to), verdict) : null,
       };
     });
     const figures = buses.get(panel.bus) ?? null;
@@ -194,6 +203,18 @@ export function reportFigures(
     panelsOver: panels.filter((panel) => panel.shown === 'over').length,
     equations: equations?.ok ? { bus: equationsBus!, equations } : null,
     handChecks: checks.ok ? checks.checks : [],
+  };
+}
+
+function fedPanel(bus: string, figures: BusResult | undefined, shown: ShownVerdict): FedPanel {
+  const volts = Object.entries(figures?.volts ?? {});
+  const toNeutral = volts.filter(([pair]) => /^L\d-N$/.test(pair));
+  const between = toNeutral.length > 0 ? toNeutral : volts.filter(([pair]) => pair !== 'N');
+  return {
+    bus,
+    feederPercent: figures?.feederPercent ?? null,
+    volts: between.length === 0 ? null : Math.min(...between.map(([, value]) => value)),
+    shown,
   };
 }
 

@@ -2,24 +2,25 @@ import { formatFixed } from '@farlug/solver/units';
 import { Text, View } from '@react-pdf/renderer';
 import type { RevisionFacts } from '../worker/worker-deps.ts';
 import { Columns, Row } from './columns.tsx';
+import { Fed, OtherReasons, Part } from './figure-cells.tsx';
 import { Assumed, Glyph, Verdict } from './glyph.tsx';
 import type { PrintedPanel, PrintedRow, ReportFigures } from './report-figures.ts';
 import { Sheet } from './sheet.tsx';
-import { Part } from './summary-section.tsx';
 import { COLOURS, styles } from './theme.ts';
 
 const COLUMNS = [
   { key: 'space', label: 'Space', width: 38 },
   { key: 'line', label: 'Line', width: 24 },
   { key: 'serves', label: 'Serves' },
-  { key: 'breaker', label: 'Breaker', width: 34 },
-  { key: 'wire', label: 'Wire', width: 72 },
-  { key: 'length', label: 'Length', width: 42, right: true },
-  { key: 'load', label: 'Load', width: 46, right: true },
-  { key: 'feeder', label: 'Feeder', width: 34, right: true },
-  { key: 'branch', label: 'Branch', width: 34, right: true },
-  { key: 'total', label: 'Total', width: 36, right: true },
-  { key: 'verdict', label: 'Verdict', width: 52 },
+  { key: 'breaker', label: 'Breaker', width: 31 },
+  { key: 'wire', label: 'Wire', width: 66 },
+  { key: 'length', label: 'Length', width: 38, right: true },
+  { key: 'load', label: 'Load', width: 42, right: true },
+  { key: 'pf', label: 'pf', width: 28, right: true },
+  { key: 'feeder', label: 'Feeder', width: 33, right: true },
+  { key: 'branch', label: 'Branch', width: 33, right: true },
+  { key: 'total', label: 'Total', width: 33, right: true },
+  { key: 'verdict', label: '  Verdict', width: 52, drawn: true },
 ];
 
 /** Every panel's schedule as it was judged. */
@@ -28,6 +29,7 @@ export function ScheduleSection({ figures, facts }: { figures: ReportFigures; fa
     <Sheet
       figures={figures}
       facts={facts}
+      section="schedules"
       title="Schedules"
       lead="Each circuit by its worst load, percent of nominal volts. A raised a marks what was assumed; * the figure that exceeds."
     >
@@ -96,33 +98,27 @@ function ScheduleRow({ row }: { row: PrintedRow }) {
         space: row.spaces || row.code,
         line: row.line,
         serves: (
-          <Text>
+          <>
             {row.serves || (idle ? row.kind : '')}
             {row.room !== '' && <Text style={styles.soft}>{`  ${row.room}`}</Text>}
+            <OtherReasons row={row} />
             {row.override !== null && (
-              <Text style={{ color: COLOURS.over }}>{'  below the ampacity floor by decision'}</Text>
+              <Text
+                style={{ color: COLOURS.over }}
+              >{`  † below the ampacity floor by decision: ${row.override}`}</Text>
             )}
-          </Text>
+          </>
         ),
         breaker: row.breaker,
         wire: row.wire,
         length: <Assumed when={row.lengthAssumed}>{row.length}</Assumed>,
-        load: <Assumed when={row.loadAssumed || row.powerFactorAssumed}>{row.load}</Assumed>,
-        feeder: row.feeds ? <Fed row={row} /> : <Part row={row} part="feeder" />,
+        load: <Assumed when={row.loadAssumed}>{row.load}</Assumed>,
+        pf: <Assumed when={row.powerFactorAssumed}>{row.powerFactor}</Assumed>,
+        feeder: row.feeds ? <Fed panel={row.feeds} /> : <Part row={row} part="feeder" />,
         branch: <Part row={row} part="branch" />,
         total: <Part row={row} part="total" />,
         verdict: row.feeds ? <Verdict kind={row.feeds.shown} /> : row.shown && <Verdict kind={row.shown} />,
       }}
     />
-  );
-}
-
-/** The feeder part at the panel that a row feeds. */
-function Fed({ row }: { row: PrintedRow }) {
-  const { feeds } = row;
-  if (feeds?.feederPercent == null) return null;
-  const over = feeds.shown === 'over';
-  return (
-    <Text style={over ? styles.bold : {}}>{`${formatFixed(feeds.feederPercent, 2)}${over ? '*' : ''}`}</Text>
   );
 }

@@ -9,6 +9,8 @@ import { day } from './words.ts';
 interface SheetProps {
   figures: ReportFigures;
   facts: RevisionFacts;
+  /** Two words at the foot of each page, which a heading on the first does not reach. */
+  section: string;
   title: string;
   lead?: string;
   aside?: readonly (readonly [string, string])[];
@@ -23,7 +25,7 @@ const COLUMNS = ['1', '2', '3', '4', '5', '6', '7', '8'];
 const ROWS = ['A', 'B', 'C', 'D', 'E', 'F'];
 
 /** A drawing sheet: frame with zones, the title block at the foot of each page, and what flows between. */
-export function Sheet({ figures, facts, title, lead, aside, children }: SheetProps) {
+export function Sheet({ figures, facts, section, title, lead, aside, children }: SheetProps) {
   const letter = figures.input.paper === 'letter';
   const height = letter ? 792 : 842;
   return (
@@ -69,7 +71,7 @@ export function Sheet({ figures, facts, title, lead, aside, children }: SheetPro
             <View style={{ flexShrink: 0, maxWidth: 210 }}>
               {aside.map(([word, text]) => (
                 <View key={word} style={styles.row}>
-                  <Text style={[styles.soft, { width: 48 }]}>{word}</Text>
+                  <Text style={[styles.soft, { width: 46 }]}>{word}</Text>
                   <Text style={{ maxWidth: 160 }}>{text}</Text>
                 </View>
               ))}
@@ -78,7 +80,7 @@ export function Sheet({ figures, facts, title, lead, aside, children }: SheetPro
         </View>
         {children}
       </View>
-      <TitleBlock figures={figures} facts={facts} />
+      <TitleBlock figures={figures} facts={facts} section={section} />
       {/* Laid out anew on each page, where an inherited line height would be applied twice. */}
       <Text
         fixed
@@ -126,7 +128,15 @@ function Zones({ height }: { height: number }) {
   );
 }
 
-function TitleBlock({ figures, facts }: { figures: ReportFigures; facts: RevisionFacts }) {
+function TitleBlock({
+  figures,
+  facts,
+  section,
+}: {
+  figures: ReportFigures;
+  facts: RevisionFacts;
+  section: string;
+}) {
   const { titleBlock } = figures.input;
   return (
     <View
@@ -152,6 +162,7 @@ function TitleBlock({ figures, facts }: { figures: ReportFigures; facts: Revisio
         <View>
           <Text style={styles.bold}>Farlug</Text>
           <Text style={{ fontSize: 7.5 }}>voltage drop report</Text>
+          <Text style={{ fontSize: 6.5, color: SOFT }}>{section}</Text>
         </View>
       </View>
       <Cell word="Job" text={titleBlock.job} grow />

@@ -1,24 +1,25 @@
 import { formatFixed, formatNumber } from '@farlug/solver/units';
 import { Text, View } from '@react-pdf/renderer';
 import type { RevisionFacts } from '../worker/worker-deps.ts';
-import { Columns, Row } from './columns.tsx';
-import { Assumed, Glyph, Heading } from './glyph.tsx';
-import type { PrintedRow, ReportFigures } from './report-figures.ts';
+import { ExceedingTable } from './exceeding-table.tsx';
+import { Glyph, Heading } from './glyph.tsx';
+import type { ReportFigures } from './report-figures.ts';
 import { Sheet } from './sheet.tsx';
 import { COLOURS, HAIR, INK, styles } from './theme.ts';
-import { limitsText, notCounted, SCENARIO_TEXT, sourceText, transformerText } from './words.ts';
+import { day, limitsText, notCounted, SCENARIO_TEXT, sourceText, transformerText } from './words.ts';
 
 /** The first sheets: the verdict, what it stands on, what exceeds, the panels, the cautions. */
 export function SummarySection({ figures, facts }: { figures: ReportFigures; facts: RevisionFacts }) {
-  const { titleBlock } = figures.input;
+  const { input } = figures;
+  const { titleBlock } = input;
   return (
     <Sheet
       figures={figures}
       facts={facts}
+      section="verdict and basis"
       title={titleBlock.heading || 'Voltage drop report'}
-      lead={[titleBlock.job, titleBlock.building, titleBlock.area, titleBlock.address]
-        .filter(Boolean)
-        .join(', ')}
+      lead={`${[titleBlock.job, titleBlock.building, titleBlock.area, titleBlock.address].filter(Boolean).join(', ')}
+Issued by ${titleBlock.issuedBy}, ${day(facts.issuedAt)}, from edit ${input.seq}`}
       aside={[
         ['Code', titleBlock.codeEdition ? `${titleBlock.codeEdition}, as entered` : 'not stated'],
         ['Authority', titleBlock.authority ?? 'not stated'],
@@ -26,11 +27,9 @@ export function SummarySection({ figures, facts }: { figures: ReportFigures; fac
       ]}
     >
       <VerdictSentence figures={figures} />
-      {figures.input.note.trim() !== '' && (
-        <Text style={{ marginBottom: 4 }}>{figures.input.note.trim()}</Text>
-      )}
+      {input.note.trim() !== '' && <Text style={{ marginBottom: 4 }}>{input.note.trim()}</Text>}
       <Basis figures={figures} />
-      <Exceeding figures={figures} />
+      <ExceedingTable figures={figures} />
       <Panels figures={figures} />
       <Overrides figures={figures} />
       <Notices figures={figures} />
@@ -91,10 +90,6 @@ function Basis({ figures }: { figures: ReportFigures }) {
     ],
     ['Not counted', notCounted(job)],
     ['Scenario', SCENARIO_TEXT[scenario]],
-    [
-      'Method',
-      'node-voltage equations of the whole network, each conductor and neutral a node; solved together',
-    ],
   ];
   const right: [string, string][] = [
     ...job.sources.map((source): [string, string] => ['Service', sourceText(source)]),
@@ -103,6 +98,7 @@ function Basis({ figures }: { figures: ReportFigures }) {
       'Conductors',
       `${job.basis === 'impedance' && job.frequency > 0 ? 'R and X' : 'R'} at ${job.frequency === 0 ? 'direct current' : `${formatNumber(job.frequency)} Hz`}; tables are listed at the end and must be confirmed against the adopted edition`,
     ],
+    ['Method', 'node-voltage equations, each conductor and neutral a node'],
     [
       'Assumed',
       assumed.length === 0 ? 'nothing' : `${assumed.join(', ')}; each is marked a where it is printed`,
@@ -125,68 +121,6 @@ function Basis({ figures }: { figures: ReportFigures }) {
       </View>
     </View>
   );
-}
-
-function Exceeding({ figures }: { figures: ReportFigures }) {
-  const { exceeding, input } = figures;
-  if (exceeding.length === 0) return null;
-  const columns = [
-    { key: 'run', label: 'Run', width: 74 },
-    { key: 'serves', label: 'Serves' },
-    { key: 'wire', label: 'Wire', width: 72 },
-    { key: 'length', label: input.job.lengthUnit, width: 34, right: true },
-    { key: 'load', label: 'Load', width: 44, right: true },
-    { key: 'volts', label: 'Volts', width: 34, right: true },
-    { key: 'feeder', label: 'Feeder', width: 36, right: true },
-    { key: 'branch', label: 'Branch', width: 36, right: true },
-    { key: 'total', label: 'Total', width: 36, right: true },
-    { key: 'limit', label: 'Limit', width: 28, right: true },
-  ];
-  return (
-    <View>
-      <Heading
-        title="What exceeds, worst first"
-        aside="* the figure that exceeds; percent of nominal volts"
-      />
-      <Columns columns={columns}>
-        {exceeding.map((row, i) => (
-          <Row
-            key={`${row.code} ${i}`}
-            columns={columns}
-            cells={{
-              run: (
-                <View style={{ flexDirection: 'row', alignItems: 'center', gap: 3 }}>
-                  <Glyph kind={row.shown ?? 'over'} />
-                  <Text style={{ color: COLOURS.over, fontWeight: 600 }}>{row.code}</Text>
-                </View>
-              ),
-              serves: row.serves,
-              wire: row.wire,
-              length: <Assumed when={row.lengthAssumed}>{row.length.split(' ')[0] ?? ''}</Assumed>,
-              load: <Assumed when={row.loadAssumed}>{row.load}</Assumed>,
-              volts: row.worst?.volts == null ? '' : formatFixed(row.worst.volts, 1),
-              feeder: <Part row={row} part="feeder" />,
-              branch: <Part row={row} part="branch" />,
-              total: <Part row={row} part="total" />,
-              limit: row.worst?.limitPercent == null ? '' : formatNumber(row.worst.limitPercent, 2),
-            }}
-          />
-        ))}
-      </Columns>
-    </View>
-  );
-}
-
-/** One part of a drop: bold and starred where it is the figure that exceeds. */
-export function Part({ row, part }: { row: PrintedRow; part: 'feeder' | 'branch' | 'total' }) {
-  const { worst } = row;
-  if (!worst) return null;
-  const value = { feeder: worst.feederPercent, branch: worst.branchPercent, total: worst.totalPercent }[part];
-  if (value === null) return null;
-  const missed = worst.reasons.find((reason) => reason.startsWith(part));
-  // The reason has as many digits as tell the figure from its limit.
-  const text = missed ? (/ ([\d.]+) %/.exec(missed)?.[1] ?? formatFixed(value, 2)) : formatFixed(value, 2);
-  return <Text style={missed ? { fontWeight: 600 } : {}}>{missed ? `${text}*` : text}</Text>;
 }
 
 function Panels({ figures }: { figures: ReportFigures }) {
@@ -229,7 +163,7 @@ function Overrides({ figures }: { figures: ReportFigures }) {
   if (overrides.length === 0) return null;
   return (
     <View>
-      <Heading title="Below the ampacity floor by decision" />
+      <Heading title="† Below the ampacity floor by decision" />
       {overrides.map(({ run, reason }) => (
         <Text key={run} style={styles.small}>
           <Text style={styles.bold}>{run}</Text>: {reason}

@@ -1,5 +1,6 @@
 import type { Job, Load, Run, Scenario, Source, System, Transformer } from '@farlug/solver/job';
 import type { ShownVerdict } from '@farlug/solver/judge';
+import { MOTOR_POWER_FACTOR } from '@farlug/solver/tables';
 import { formatNumber, formatSize } from '@farlug/solver/units';
 
 export const VERDICT_WORDS: Record<ShownVerdict, string> = {
@@ -46,6 +47,17 @@ export function loadText(load: Load): string {
   if (load.watts !== null) return `${many}${formatNumber(load.watts, 0)} W`;
   if (load.kw !== null) return `${many}${formatNumber(load.kw, 3)} kW`;
   return `${many}${formatNumber(load.hp ?? 0, 2)} hp`;
+}
+
+/** The power factor that the loads of a circuit have in common. */
+export function powerFactorText(loads: readonly Load[]): string {
+  const factors = new Set(
+    loads.map(
+      (load) =>
+        `${formatNumber(load.powerFactor ?? (load.hp === null ? 1 : MOTOR_POWER_FACTOR), 2)}${load.leading ? ' lead' : ''}`,
+    ),
+  );
+  return factors.size === 1 ? [...factors].join('') : '';
 }
 
 export function sourceText(source: Source): string {
