@@ -52,7 +52,7 @@ describe('results by row', () => {
     };
     const result = resultOf(huge);
     expect(result.state).toBe('stopped');
-    expect(result.trouble[0]).toMatchObject({ at: { table: 'load' } });
+    expect(result.trouble[0]).toMatchObject({ at: { table: 'load', row: load!.id } });
     expect(result.trouble[0]!.text).toMatch(/cannot be served/);
   });
 

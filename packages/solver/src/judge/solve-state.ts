@@ -1,4 +1,4 @@
-import { solve } from '../linear/index.ts';
+import { pathSolver, solve } from '../linear/index.ts';
 import { type Refusal, refusal, type Sink, type Stamped, stamp } from '../network/index.ts';
 import type { Core } from './core.ts';
 import type { Credits } from './credits.ts';
@@ -130,7 +130,7 @@ export function solveState(
   }
   let iterations = 1;
   while (!(moved <= SETTLED)) {
-    if (iterations === ROUNDS || Number.isNaN(moved)) return notServed(core, following, volts);
+    if (iterations === ROUNDS || Number.isNaN(moved)) return notServed(core, stamped, following);
     moved = round();
     iterations++;
   }
@@ -142,18 +142,29 @@ export function solveState(
   return { demand, volts, stamped, iterations };
 }
 
-/** The load whose voltage is furthest gone. */
-function notServed(core: Core, flows: Flow[], volts: Volts): Refusal {
-  const { referenceRe, referenceIm } = core.network.nodes;
+/**
+ * The load that asks for the most by itself: its nominal current times the impedance that it sees, as a share of its
+ * volts. The one whose voltage is lowest may be only its victim.
+ */
+function notServed(core: Core, stamped: Stamped, flows: readonly Flow[]): Refusal {
+  const { unknownOf } = stamped.layout;
+  const path = pathSolver(stamped.factor);
   let worst = flows[0]!;
-  let lowest = Number.POSITIVE_INFINITY;
+  let largest = -1;
   for (const flow of flows) {
-    const { a, b, nominal } = flow.sink;
-    const re = referenceRe[a]! - referenceRe[b]! + volts.re[a]! - volts.re[b]!;
-    const im = referenceIm[a]! - referenceIm[b]! + volts.im[a]! - volts.im[b]!;
-    const share = Math.sqrt(re * re + im * im) / nominal;
-    if (!(share >= lowest)) {
-      lowest = Number.isNaN(share) ? -1 : share;
+    const { a, b, nominal, share } = flow.sink;
+    const from = unknownOf[a]!;
+    const to = unknownOf[b]!;
+    path.reach([from, to].filter((unknown) => unknown >= 0));
+    path.clear();
+    if (from >= 0) path.add(from, 1, 0);
+    if (to >= 0) path.add(to, -1, 0);
+    path.solve();
+    const re = (from < 0 ? 0 : path.re(from)) - (to < 0 ? 0 : path.re(to));
+    const im = (from < 0 ? 0 : path.im(from)) - (to < 0 ? 0 : path.im(to));
+    const asked = (Math.abs(flow.drawn.amps * share) * Math.sqrt(re * re + im * im)) / nominal;
+    if (asked > largest) {
+      largest = asked;
       worst = flow;
     }
   }
