@@ -8,13 +8,16 @@ export interface Column {
   /** Points; the column without one takes what is left. */
   width?: number;
   right?: boolean;
+  /** Points between it and the column before it, where more than usual. */
+  gap?: number;
   /** Its cells hold a drawing beside their text. */
   drawn?: boolean;
 }
 
-const cellStyle = ({ width }: Column) => ({
+const cellStyle = ({ width, gap }: Column) => ({
   ...(width === undefined ? { flexGrow: 1, flexShrink: 1, flexBasis: 0 } : { width, flexShrink: 0 }),
   paddingHorizontal: 2.5,
+  ...(gap === undefined ? {} : { paddingLeft: gap }),
 });
 const textStyle = (column: Column) => ({
   ...cellStyle(column),

@@ -12,7 +12,7 @@ export function ExceedingTable({ figures }: { figures: ReportFigures }) {
   const { exceeding, panels, input } = figures;
   const fed = panels.flatMap(({ rows }) => rows).filter(({ feeds }) => feeds?.shown === 'over');
   if (exceeding.length + fed.length === 0) return null;
-  const columns: Column[] = [
+  const all: Column[] = [
     { key: 'run', label: 'Run', width: 74, drawn: true },
     { key: 'serves', label: 'Serves' },
     { key: 'wire', label: 'Wire', width: 66 },
@@ -25,6 +25,7 @@ export function ExceedingTable({ figures }: { figures: ReportFigures }) {
     { key: 'total', label: 'Total', width: 33, right: true },
     { key: 'limit', label: 'Limits', width: 34, right: true },
   ];
+  const columns = all.filter(({ key }) => key !== 'pf' || input.job.frequency > 0);
   const common = (row: PrintedRow) => ({
     wire: row.wire,
     length: <Assumed when={row.lengthAssumed}>{row.length.split(' ')[0] ?? ''}</Assumed>,

@@ -13,15 +13,22 @@ export function Part({ row: { worst }, part }: { row: PrintedRow; part: (typeof 
   const missed = worst.reasons.find((reason) => reason.startsWith(`${part} `));
   if (!missed) return <Text>{formatFixed(value, 2)}</Text>;
   // The reason has as many digits as tell the figure from its limit.
-  return <Text style={styles.bold}>{`${/ ([\d.]+) %/.exec(missed)?.[1] ?? formatFixed(value, 2)}*`}</Text>;
+  return <Exceeding>{/ ([\d.]+) %/.exec(missed)?.[1] ?? formatFixed(value, 2)}</Exceeding>;
 }
 
 /** The feeder part at the panel that a row feeds. */
 export function Fed({ panel: { feederPercent, shown } }: { panel: FedPanel }) {
   if (feederPercent === null) return null;
-  const over = shown === 'over';
-  return <Text style={over ? styles.bold : {}}>{`${formatFixed(feederPercent, 2)}${over ? '*' : ''}`}</Text>;
+  const text = formatFixed(feederPercent, 2);
+  return shown === 'over' ? <Exceeding>{text}</Exceeding> : <Text>{text}</Text>;
 }
+
+const Exceeding = ({ children }: { children: string }) => (
+  <Text style={styles.bold}>
+    {children}
+    <Text style={{ letterSpacing: -3.4 }}>*</Text>
+  </Text>
+);
 
 const byPart = (reason: string): boolean => PARTS.some((part) => reason.startsWith(`${part} `));
 
@@ -29,7 +36,7 @@ const byPart = (reason: string): boolean => PARTS.some((part) => reason.startsWi
 export function OtherReasons({ row }: { row: PrintedRow }) {
   const others = row.worst?.reasons.filter((reason) => !byPart(reason)) ?? [];
   if (others.length === 0) return null;
-  return <Text style={{ color: COLOURS.over }}>{`  ${others.join('; ')}`}</Text>;
+  return <Text style={{ color: COLOURS.over }}>{`\n${others.join('; ')}`}</Text>;
 }
 
 /** The limits of the parts that a row exceeds, in the order of the columns: `3, 5`. */

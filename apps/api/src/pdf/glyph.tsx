@@ -31,12 +31,14 @@ export function Verdict({ kind, word = true }: { kind: ShownVerdict; word?: bool
   );
 }
 
-/** A figure that was assumed: a raised a behind it. */
+/** A figure that was assumed: a raised a behind it, which hangs into the gap so that the digits stay in line. */
 export function Assumed({ when, children }: { when: boolean; children: string }) {
   return (
     <Text>
       {children}
-      {when && <Text style={{ color: COPPER, fontSize: 6, verticalAlign: 'super' }}>a</Text>}
+      {when && (
+        <Text style={{ color: COPPER, fontSize: 6, verticalAlign: 'super', letterSpacing: -3 }}>a</Text>
+      )}
     </Text>
   );
 }

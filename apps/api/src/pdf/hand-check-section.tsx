@@ -26,7 +26,7 @@ export function HandCheckSection({ figures, facts }: { figures: ReportFigures; f
       facts={facts}
       section="hand check"
       title="Hand check"
-      lead="Each radial run by a formula that can be worked with a pencil, lengths one way; branch runs in the turn of their own circuit, others at design demand."
+      lead="Each radial run by a formula to work with a pencil, lengths one way. Branch runs in their own turn, others at design demand."
     >
       <VoltsBar figures={figures} />
       {done.map((check) => {

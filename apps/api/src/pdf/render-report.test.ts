@@ -3,15 +3,29 @@ import { describe, expect, it } from 'vitest';
 import { sampleRevision } from '../../test/sample-revision.ts';
 import { renderReport } from './render-report.tsx';
 
+interface Printed {
+  text: string;
+  /** Where its outermost text ends. */
+  right: number;
+  width: number;
+  height: number;
+}
+
 /** The text of every page, as another program reads it. */
-async function pagesOf(bytes: Buffer): Promise<{ text: string; width: number; height: number }[]> {
+async function pagesOf(bytes: Buffer): Promise<Printed[]> {
   const document = await getDocument({ data: new Uint8Array(bytes), verbosity: 0 }).promise;
   const pages = [];
   for (let number = 1; number <= document.numPages; number += 1) {
     const page = await document.getPage(number);
     const { items } = await page.getTextContent();
     const [, , width = 0, height = 0] = page.view;
-    pages.push({ text: items.map((item) => ('str' in item ? item.str : '')).join(' '), width, height });
+    const texts = items.flatMap((item) => ('str' in item && item.str.trim() !== '' ? [item] : []));
+    pages.push({
+      text: texts.map(({ str }) => str).join(' '),
+      right: Math.max(...texts.map((item) => Number(item.transform[4]) + item.width)),
+      width,
+      height,
+    });
   }
   await document.destroy();
   return pages;
@@ -47,6 +61,27 @@ describe('the printed report', () => {
     says(all, 'mm²');
     says(all, 'ρ1');
     for (const panel of input.job.panels) says(all, panel.bus);
+  }, 60_000);
+
+  it('prints each figure that exceeds with its limit, and every other reason in words', async () => {
+    const { input, facts } = sampleRevision('ridge-cabin');
+    const limits = { ...input.job.limits, branch: 3, total: 4, lowestVolts: 47.9 };
+    const { bytes } = await renderReport({ ...input, job: { ...input.job, limits } }, facts);
+    const [first] = await pagesOf(bytes);
+    expect(first?.text).toMatch(/3\.02\s*\*\s+4\.98\s*\*\s+3, 4/);
+    expect(first?.text).toMatch(/lowest volts 47\.\d+ V\s+< 47\.9 V/);
+  }, 60_000);
+
+  it('keeps long names inside their places', async () => {
+    const { input, facts } = sampleRevision('ridge-cabin');
+    const long = 'Ridge cabin, shed and well house of the upper pasture, second phase of the works';
+    const titleBlock = { ...input.titleBlock, job: long, authority: long, codeEdition: long };
+    const read = await pagesOf((await renderReport({ ...input, titleBlock }, facts)).bytes);
+    for (const { text, right, width } of read) {
+      expect(right).toBeLessThan(width - 29);
+      says(text, '…');
+    }
+    says(read[0]!.text.replace(/\s+/g, ' '), long);
   }, 60_000);
 
   it('prints the reason beside a size below the ampacity floor, and marks what was assumed', async () => {

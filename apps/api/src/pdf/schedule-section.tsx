@@ -1,14 +1,14 @@
 import { formatFixed } from '@farlug/solver/units';
 import { Text, View } from '@react-pdf/renderer';
 import type { RevisionFacts } from '../worker/worker-deps.ts';
-import { Columns, Row } from './columns.tsx';
+import { type Column, Columns, Row } from './columns.tsx';
 import { Fed, OtherReasons, Part } from './figure-cells.tsx';
 import { Assumed, Glyph, Verdict } from './glyph.tsx';
 import type { PrintedPanel, PrintedRow, ReportFigures } from './report-figures.ts';
 import { Sheet } from './sheet.tsx';
 import { COLOURS, styles } from './theme.ts';
 
-const COLUMNS = [
+const COLUMNS: readonly Column[] = [
   { key: 'space', label: 'Space', width: 38 },
   { key: 'line', label: 'Line', width: 24 },
   { key: 'serves', label: 'Serves' },
@@ -20,11 +20,12 @@ const COLUMNS = [
   { key: 'feeder', label: 'Feeder', width: 33, right: true },
   { key: 'branch', label: 'Branch', width: 33, right: true },
   { key: 'total', label: 'Total', width: 33, right: true },
-  { key: 'verdict', label: '  Verdict', width: 52, drawn: true },
+  { key: 'verdict', label: 'Verdict', width: 56, gap: 8, drawn: true },
 ];
 
 /** Every panel's schedule as it was judged. */
 export function ScheduleSection({ figures, facts }: { figures: ReportFigures; facts: RevisionFacts }) {
+  const columns = COLUMNS.filter(({ key }) => key !== 'pf' || figures.input.job.frequency > 0);
   return (
     <Sheet
       figures={figures}
@@ -34,14 +35,14 @@ export function ScheduleSection({ figures, facts }: { figures: ReportFigures; fa
       lead="Each circuit by its worst load, percent of nominal volts. A raised a marks what was assumed; * the figure that exceeds."
     >
       {figures.panels.map((panel) => (
-        <PanelTable key={panel.bus} panel={panel} />
+        <PanelTable key={panel.bus} columns={columns} panel={panel} />
       ))}
       {figures.looseRows.length > 0 && (
         <View>
           <Title name="In no panel" about="" />
-          <Columns columns={COLUMNS}>
+          <Columns columns={columns}>
             {figures.looseRows.map((row, i) => (
-              <ScheduleRow key={`${row.code} ${i}`} row={row} />
+              <ScheduleRow key={`${row.code} ${i}`} columns={columns} row={row} />
             ))}
           </Columns>
         </View>
@@ -50,7 +51,7 @@ export function ScheduleSection({ figures, facts }: { figures: ReportFigures; fa
   );
 }
 
-function PanelTable({ panel }: { panel: PrintedPanel }) {
+function PanelTable({ columns, panel }: { columns: readonly Column[]; panel: PrintedPanel }) {
   const percent = panel.figures?.feederPercent;
   return (
     <View style={{ marginBottom: 8 }}>
@@ -71,9 +72,9 @@ function PanelTable({ panel }: { panel: PrintedPanel }) {
       {panel.rows.length === 0 ? (
         <Text style={[styles.small, styles.soft]}>No circuit in its schedule.</Text>
       ) : (
-        <Columns columns={COLUMNS}>
+        <Columns columns={columns}>
           {panel.rows.map((row, i) => (
-            <ScheduleRow key={`${row.spaces} ${row.code} ${i}`} row={row} />
+            <ScheduleRow key={`${row.spaces} ${row.code} ${i}`} columns={columns} row={row} />
           ))}
         </Columns>
       )}
@@ -88,11 +89,11 @@ const Title = ({ name, about }: { name: string; about: string }) => (
   </Text>
 );
 
-function ScheduleRow({ row }: { row: PrintedRow }) {
+function ScheduleRow({ columns, row }: { columns: readonly Column[]; row: PrintedRow }) {
   const idle = row.run === null && row.worst === null;
   return (
     <Row
-      columns={COLUMNS}
+      columns={columns}
       idle={idle}
       cells={{
         space: row.spaces || row.code,
@@ -100,12 +101,10 @@ function ScheduleRow({ row }: { row: PrintedRow }) {
         serves: (
           <>
             {row.serves || (idle ? row.kind : '')}
-            {row.room !== '' && <Text style={styles.soft}>{`  ${row.room}`}</Text>}
+            {row.room !== '' && <Text style={styles.soft}>{`, ${row.room}`}</Text>}
             <OtherReasons row={row} />
             {row.override !== null && (
-              <Text
-                style={{ color: COLOURS.over }}
-              >{`  † below the ampacity floor by decision: ${row.override}`}</Text>
+              <Text style={{ color: COLOURS.over }}>{'\n† below the ampacity floor by decision'}</Text>
             )}
           </>
         ),

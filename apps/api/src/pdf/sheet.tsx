@@ -63,16 +63,16 @@ export function Sheet({ figures, facts, section, title, lead, aside, children }:
             marginBottom: 6,
           }}
         >
-          <View style={{ flexShrink: 1, paddingRight: 14 }}>
+          <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0, paddingRight: 14 }}>
             <Text style={styles.h1}>{title}</Text>
             {lead && <Text>{lead}</Text>}
           </View>
           {aside && (
-            <View style={{ flexShrink: 0, maxWidth: 210 }}>
+            <View style={{ flexShrink: 0, width: asideWidth(aside) }}>
               {aside.map(([word, text]) => (
                 <View key={word} style={styles.row}>
                   <Text style={[styles.soft, { width: 46 }]}>{word}</Text>
-                  <Text style={{ maxWidth: 160 }}>{text}</Text>
+                  <Text style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0 }}>{text}</Text>
                 </View>
               ))}
             </View>
@@ -98,6 +98,10 @@ export function Sheet({ figures, facts, section, title, lead, aside, children }:
     </Page>
   );
 }
+
+/** As wide as its longest text needs, up to two fifths of the sheet. */
+const asideWidth = (aside: readonly (readonly [string, string])[]): number =>
+  46 + Math.min(160, Math.max(...aside.map(([, text]) => text.length * 4.6)));
 
 function Zones({ height }: { height: number }) {
   const zone = { position: 'absolute' as const, fontFamily: 'Sans', fontSize: 6.5, color: SOFT };
@@ -179,6 +183,11 @@ function TitleBlock({
   );
 }
 
+const CELL_LETTERS = 44;
+/** What two small lines of a cell hold, cut between words: the whole stands at the head of the first sheet. */
+const cut = (text: string): string =>
+  text.length <= CELL_LETTERS ? text : `${text.slice(0, CELL_LETTERS).replace(/\s+\S*$/, '')} …`;
+
 function Cell({
   word,
   text,
@@ -202,7 +211,7 @@ function Cell({
       }}
     >
       <Text style={{ fontSize: 6.5, color: SOFT }}>{word}</Text>
-      <Text style={{ maxLines: 1, textOverflow: 'ellipsis' }}>{text}</Text>
+      <Text style={text.length > 22 ? { fontSize: 7, lineHeight: 1.1, maxLines: 2 } : {}}>{cut(text)}</Text>
     </View>
   );
 }

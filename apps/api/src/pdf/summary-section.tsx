@@ -19,7 +19,7 @@ export function SummarySection({ figures, facts }: { figures: ReportFigures; fac
       section="verdict and basis"
       title={titleBlock.heading || 'Voltage drop report'}
       lead={`${[titleBlock.job, titleBlock.building, titleBlock.area, titleBlock.address].filter(Boolean).join(', ')}
-Issued by ${titleBlock.issuedBy}, ${day(facts.issuedAt)}, from edit ${input.seq}`}
+Issued by ${titleBlock.issuedBy}, ${titleBlock.firm}, ${day(facts.issuedAt)}, from edit ${input.seq}`}
       aside={[
         ['Code', titleBlock.codeEdition ? `${titleBlock.codeEdition}, as entered` : 'not stated'],
         ['Authority', titleBlock.authority ?? 'not stated'],
@@ -46,10 +46,10 @@ function VerdictSentence({ figures }: { figures: ReportFigures }) {
   const kind = over + panelsOver > 0 ? 'over' : counts.near > 0 ? 'near' : 'within';
   const lead =
     over + panelsOver > 0
-      ? `${over} of ${judged} judged circuits${panels} exceed ${what}.`
+      ? `${over} of ${judged} judged circuits${panels} ${over === 1 && panelsOver === 0 ? 'exceeds' : 'exceed'} ${what}.`
       : `None of ${judged} judged circuits exceeds ${what}.`;
   const rest = [
-    `${counts.near} are near a limit, ${counts.within} within.`,
+    `${counts.near === 0 ? 'None is' : counts.near === 1 ? '1 is' : `${counts.near} are`} near a limit, ${counts.within} within.`,
     counts.unjudged > 0 ? `${counts.unjudged} have no limit.` : '',
     counts.unserved > 0 ? `${counts.unserved} are not served: a run is open or a source off.` : '',
     'No row is left out.',
@@ -96,9 +96,9 @@ function Basis({ figures }: { figures: ReportFigures }) {
     ...job.transformers.map((t): [string, string] => ['Transformer', transformerText(t)]),
     [
       'Conductors',
-      `${job.basis === 'impedance' && job.frequency > 0 ? 'R and X' : 'R'} at ${job.frequency === 0 ? 'direct current' : `${formatNumber(job.frequency)} Hz`}; tables are listed at the end and must be confirmed against the adopted edition`,
+      `${job.basis === 'impedance' && job.frequency > 0 ? 'R and X' : 'R'} at ${job.frequency === 0 ? 'direct current' : `${formatNumber(job.frequency)} Hz`}; tables at the end`,
     ],
-    ['Method', 'node-voltage equations, each conductor and neutral a node'],
+    ['Method', 'node-voltage equations of the whole network'],
     [
       'Assumed',
       assumed.length === 0 ? 'nothing' : `${assumed.join(', ')}; each is marked a where it is printed`,

@@ -86,7 +86,7 @@ export function limitsText({ limits }: Job): string {
     limit === null
       ? null
       : typeof limit === 'number'
-        ? `${word} ${formatNumber(limit, 1)} V`
+        ? `${word} ${formatNumber(limit, 1)}\u00a0V`
         : `${word} ${Object.entries(limit)
             .map(([at, value]) => `${formatNumber(value ?? 0, 1)} V at ${at} V`)
             .join(', ')}`;
@@ -114,9 +114,7 @@ export function notCounted({ limits }: Job): string {
     limits.includeService ? null : 'service',
     limits.includeTransformer ? null : 'transformers',
   ].filter(Boolean);
-  return left.length === 0
-    ? 'nothing: source, service and transformers count'
-    : `${left.join(', ')}; shown beside`;
+  return left.length === 0 ? 'nothing: source, service and transformers count' : left.join(', ');
 }
 
 export const day = (instant: string): string => {
