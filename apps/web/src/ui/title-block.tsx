@@ -44,7 +44,7 @@ export function TitleCell({
   shrink = false,
 }: TitleCellProps) {
   const shown = phone
-    ? 'flex border-b border-b-hair py-1.5 desk:border-b-0 desk:py-0'
+    ? 'flex grow border-b border-b-hair py-1.5 desk:grow-0 desk:border-b-0 desk:py-0'
     : from === 'wide'
       ? 'hidden wide:flex'
       : 'hidden desk:flex';
@@ -53,7 +53,7 @@ export function TitleCell({
       className={cx(
         'flex-col justify-center border-l border-l-rule px-3 whitespace-nowrap first:w-full first:border-l-0 first:pl-4 desk:first:w-auto',
         shown,
-        shrink ? 'min-w-26 shrink' : 'max-w-64 flex-none',
+        shrink ? 'min-w-26 shrink' : 'shrink-0 desk:max-w-64',
       )}
     >
       <span className="truncate text-label text-ink-soft">{label}</span>
