@@ -53,7 +53,7 @@ export function TitleCell({
       className={cx(
         'flex-col justify-center border-l border-l-rule px-3 whitespace-nowrap first:w-full first:border-l-0 first:pl-4 desk:first:w-auto',
         shown,
-        shrink ? 'min-w-26 shrink' : 'shrink-0 desk:max-w-64',
+        shrink ? 'min-w-26 shrink' : 'max-w-full shrink-0 desk:max-w-64',
       )}
     >
       <span className="truncate text-label text-ink-soft">{label}</span>
