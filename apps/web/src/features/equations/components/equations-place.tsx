@@ -3,7 +3,7 @@ import type { Equations } from '@farlug/solver/equations';
 import { type ReactNode, useMemo, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { useReplica } from '../../../job/open-job.tsx';
-import { useAnswer } from '../../../job/use-result.ts';
+import { useAnswer, useResult } from '../../../job/use-result.ts';
 import { usePageTitle } from '../../../lib/use-page-title.ts';
 import { EmptyState } from '../../../ui/empty-state.tsx';
 import { Field } from '../../../ui/field.tsx';
@@ -39,6 +39,7 @@ export function EquationsPlace({
   handCheckFor?: (runs: string[]) => ReactNode;
 }) {
   const { rows } = useReplica();
+  const { fault } = useResult();
   const [params, setParams] = useSearchParams();
   const [form, setForm] = useState<Form>('numbers');
   const panels = useMemo(() => scheduleView(rows).panels, [rows]);
@@ -80,7 +81,11 @@ export function EquationsPlace({
         </Field>
         <Segmented label="Form" value={form} onValue={setForm} choices={FORMS} />
       </div>
-      {answer === null ? (
+      {fault ? (
+        <Message kind="wrong">
+          The solver stopped: {fault}. Nothing that was typed is lost; reload the page to go on.
+        </Message>
+      ) : answer === null ? (
         <Skeleton rows={8} label="Writing the equations" />
       ) : answer.kind === 'none' ? (
         <Message kind="note">{answer.reason}</Message>

@@ -83,11 +83,11 @@ function Line({ finding, view, onComment }: FindingsProps & { finding: Finding }
           </span>
         )}
       </div>
-      <div className="flex flex-wrap items-baseline gap-x-4 text-grid">
-        <span className="text-ink-soft">{run}</span>
-        <span className={shown === 'near' ? 'text-ink-soft' : undefined}>
-          {reasonsOf(finding).join(', ')}
-        </span>
+      <p className={shown === 'near' ? 'text-grid text-ink-soft' : 'text-grid'}>
+        {reasonsOf(finding).join(', ')}
+      </p>
+      <div className="flex items-baseline gap-4 text-grid text-ink-soft">
+        {run}
         <Button
           look="bare"
           className="ml-auto"
