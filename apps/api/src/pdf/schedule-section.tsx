@@ -100,8 +100,7 @@ function ScheduleRow({ columns, row }: { columns: readonly Column[]; row: Printe
         line: row.line,
         serves: (
           <>
-            {row.serves || (idle ? row.kind : '')}
-            {row.room !== '' && <Text style={styles.soft}>{`, ${row.room}`}</Text>}
+            {[row.serves || (idle ? row.kind : ''), row.room].filter(Boolean).join(', ')}
             <OtherReasons row={row} />
             {row.override !== null && (
               <Text style={{ color: COLOURS.over }}>{'\n† below the ampacity floor by decision'}</Text>

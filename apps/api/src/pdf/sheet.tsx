@@ -183,7 +183,7 @@ function TitleBlock({
   );
 }
 
-const CELL_LETTERS = 44;
+const CELL_LETTERS = 42;
 /** What two small lines of a cell hold, cut between words: the whole stands at the head of the first sheet. */
 const cut = (text: string): string =>
   text.length <= CELL_LETTERS ? text : `${text.slice(0, CELL_LETTERS).replace(/\s+\S*$/, '')} …`;
@@ -211,7 +211,7 @@ function Cell({
       }}
     >
       <Text style={{ fontSize: 6.5, color: SOFT }}>{word}</Text>
-      <Text style={text.length > 22 ? { fontSize: 7, lineHeight: 1.1, maxLines: 2 } : {}}>{cut(text)}</Text>
+      <Text style={text.length > 18 ? { fontSize: 7, lineHeight: 1.1, maxLines: 2 } : {}}>{cut(text)}</Text>
     </View>
   );
 }

@@ -62,7 +62,7 @@ export function powerFactorText(loads: readonly Load[]): string {
 
 export function sourceText(source: Source): string {
   const behind = source.fault
-    ? `${formatNumber(source.fault.amps / 1000, 2)} kA, X/R ${formatNumber(source.fault.xOverR, 2)}`
+    ? `${formatNumber(source.fault.amps / 1000, 2)} kA, X/R\u00a0${formatNumber(source.fault.xOverR, 2)}`
     : source.impedance
       ? `${formatNumber(source.impedance.r, 5)} + j${formatNumber(source.impedance.x, 5)} Ω per line`
       : 'stiff, no impedance stated';
@@ -70,7 +70,7 @@ export function sourceText(source: Source): string {
 }
 
 export const transformerText = (t: Transformer): string =>
-  `${t.id}: ${formatNumber(t.kva, 1)} kVA, ${formatNumber(t.primaryVolts)} to ${formatNumber(t.secondaryVolts)} V, ${t.connection.replace('-', '–')}, ${formatNumber(t.percentZ, 2)} %Z, X/R ${formatNumber(t.xOverR, 2)}${t.tapPercent === 0 ? '' : `, tap ${formatNumber(t.tapPercent, 2)} %`}`;
+  `${t.id}: ${formatNumber(t.kva, 1)} kVA, ${formatNumber(t.primaryVolts)} to ${formatNumber(t.secondaryVolts)} V, ${t.connection.replace('-', '–')}, ${formatNumber(t.percentZ, 2)} %Z, X/R\u00a0${formatNumber(t.xOverR, 2)}${t.tapPercent === 0 ? '' : `, tap ${formatNumber(t.tapPercent, 2)} %`}`;
 
 /** The limits as they were set, in one sentence. */
 export function limitsText({ limits }: Job): string {
