@@ -32,7 +32,7 @@ export function answerSizes(
     job,
     code,
     (laid, of) => {
-      const prepared = prepareJob(laid, { headroom: false, loads });
+      const prepared = prepareJob(laid, { headroom: false, loads, like: { job, run: at } });
       if (prepared.kind !== 'prepared') return prepared;
       const outcome = prepared.solve(of);
       if (outcome.kind !== 'solved') return outcome;

@@ -4,13 +4,17 @@ import {
   buildNetwork,
   type Circuits,
   disjointSets,
+  element,
   findCircuits,
+  isZero,
   type Layout,
   type LoadModel,
   layOut,
   type Network,
   pathFinder,
   type Refusal,
+  runOhms,
+  SLOT,
   type Step,
 } from '../network/index.ts';
 
@@ -38,6 +42,31 @@ export function buildCore(job: Job): Core | Refusal {
   const found = known.get(job);
   if (found) return found;
   const core = newCore(job);
+  known.set(job, core);
+  return core;
+}
+
+/**
+ * The core of a job that differs from another in the size or the length of one run alone: everything but that run's
+ * impedances is shared. Where the change joins or parts nodes, or cannot be followed, the core is built anew.
+ */
+export function coreLike(job: Job, { job: other, run }: { job: Job; run: number }): Core | Refusal {
+  const base = buildCore(other);
+  const ohms = runOhms(job, job.runs[run]!);
+  if ('kind' in base || !ohms.ok || base.operating.includes(run)) return buildCore(job);
+  const { network } = base;
+  const slots = network.ohms.runs[run]!.map((was, slot) =>
+    was === null ? null : (slot === SLOT.N ? ohms.neutral : ohms.line).ohms,
+  );
+  const merges = (z: readonly [number, number] | null) => z !== null && isZero(z);
+  if (slots.some((z, slot) => merges(z) !== merges(network.ohms.runs[run]![slot]!))) return buildCore(job);
+  const elements = network.elements.map((e) => {
+    if (e.kind !== 'run' || e.owner !== run) return e;
+    const [r, x] = slots[e.conductor]!;
+    return element('run', run, e.conductor, e.nodes, e.u, r, x);
+  });
+  const runs = network.ohms.runs.map((was, i) => (i === run ? slots : was));
+  const core = { ...base, job, network: { ...network, job, elements, ohms: { ...network.ohms, runs } } };
   known.set(job, core);
   return core;
 }

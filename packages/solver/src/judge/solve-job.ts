@@ -3,7 +3,7 @@ import { jobWarnings } from '../job/warnings.ts';
 import type { Refusal } from '../network/index.ts';
 import { busResults } from './bus-results.ts';
 import { visitCarried } from './carried.ts';
-import { buildCore, type Core } from './core.ts';
+import { buildCore, type Core, coreLike } from './core.ts';
 import { type Credits, diversityCredits } from './credits.ts';
 import { designDemand, scenarioDemand } from './demand.ts';
 import { type Judge, judgeOf, type LoadFigures } from './load-figures.ts';
@@ -32,7 +32,7 @@ const EVERYTHING: Wanted = { headroom: true, loads: null };
  * job that no solution serves at design demand or in some turn of a circuit.
  */
 export function prepareJob(job: Job, wanted: Wanted = EVERYTHING): Prepared | Refusal {
-  const core = buildCore(job);
+  const core = wanted.like ? coreLike(job, wanted.like) : buildCore(job);
   if ('kind' in core) return core;
   const credits = diversityCredits(core);
   if (credits && 'kind' in credits) return credits;

@@ -1,4 +1,4 @@
-import type { LoadResult, Phasor } from '../job/index.ts';
+import type { Job, LoadResult, Phasor } from '../job/index.ts';
 import type { Refusal, Sink } from '../network/index.ts';
 import type { Core } from './core.ts';
 import { type TurnName, turnsOf } from './demand.ts';
@@ -27,6 +27,8 @@ export interface Wanted {
   headroom: boolean;
   /** Loads by index; the others come back as `unjudged` and without figures. `null`: all. */
   loads: ReadonlySet<number> | null;
+  /** A job that differs in the size or length of this run alone: its network is taken over. */
+  like?: { job: Job; run: number };
 }
 
 const SQRT3 = Math.sqrt(3);
