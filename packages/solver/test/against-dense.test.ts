@@ -7,7 +7,7 @@ describe('random jobs against the dense solver', () => {
   it.each(SYSTEMS)(
     '%s: every number that is printed',
     (system) => {
-      expect(() => againstDense(solveProduct, system, 8)).not.toThrow();
+      expect(againstDense(solveProduct, system, 8)).toBeUndefined();
     },
     120_000,
   );

@@ -20,6 +20,14 @@ export const epsilonOf = (job: JobFile): number => {
   const iterated = job.angle === 'local' || job.loads?.some((load) => load.behaviour === 'power');
   return iterated ? 2e-9 : 1e-9;
 };
+/**
+ * Where a network collapses before a limit trips, headroom ends where the iteration gives up: after 100 rounds here, 600
+ * there, some thousandths to hundredths of the current apart. Compared in deep runs alone: it costs most of the time.
+ */
+const headroomEpsilonOf = (job: JobFile): number | null => {
+  if (epsilonOf(job) === 1e-9) return 1e-9;
+  return DEEP ? 1e-4 : null;
+};
 /** A solution, or null where the network cannot be solved. */
 export const outcomeOf = (act: () => Solution): Solution | null => {
   try {
@@ -39,11 +47,11 @@ export const againstDense = (
   fc.assert(
     fc.property(seeds, fc.constantFrom(...SCENARIOS), (seed, scenario) => {
       const job = randomJob(seed, { system });
-      const withHeadroom = DEEP || epsilonOf(job) === 1e-9;
+      const headroom = headroomEpsilonOf(job);
       const ours = outcomeOf(() => solve(job, scenario));
-      const theirs = outcomeOf(() => solveDense(job, scenario, withHeadroom));
+      const theirs = outcomeOf(() => solveDense(job, scenario, headroom !== null));
       if (ours === null || theirs === null) return;
-      expect(differences(job, ours, theirs, epsilonOf(job), withHeadroom)).toEqual([]);
+      expect(differences(job, ours, theirs, epsilonOf(job), headroom)).toEqual([]);
     }),
     runs(few),
   );

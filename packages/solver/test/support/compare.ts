@@ -3,14 +3,15 @@ import type { JobFile, Solution } from '@farlug/solver/job';
 /**
  * Differences between two solutions of one job, each as a path with both values; empty where they agree.
  * Volts are compared to `epsilon` of the highest volts of the job, percents to the same share of 100, amps, watts and
- * ohms to the same share of the largest in the job; words exactly, reasons by the limit that they name.
+ * ohms to the same share of the largest in the job; words exactly, reasons by the limit that they name. Headroom to
+ * `headroomEpsilon`, and not at all where that is null.
  */
 export const differences = (
   job: JobFile,
   ours: Solution,
   theirs: Solution,
   epsilon: number,
-  withHeadroom = true,
+  headroomEpsilon: number | null = epsilon,
 ): string[] => {
   const found: string[] = [];
   const report = (path: string, a: unknown, b: unknown) =>
@@ -18,12 +19,18 @@ export const differences = (
   const same = (path: string, a: unknown, b: unknown) => {
     if (JSON.stringify(a) !== JSON.stringify(b)) report(path, a, b);
   };
-  const close = (path: string, a: number | null | undefined, b: number | null | undefined, scale: number) => {
+  const close = (
+    path: string,
+    a: number | null | undefined,
+    b: number | null | undefined,
+    scale: number,
+    most = epsilon,
+  ) => {
     if (a == null || b == null) {
       if ((a ?? null) !== (b ?? null)) report(path, a, b);
       return;
     }
-    if (!(Math.abs(a - b) <= epsilon * Math.max(scale, Math.abs(a), Math.abs(b)))) report(path, a, b);
+    if (!(Math.abs(a - b) <= most * Math.max(scale, Math.abs(a), Math.abs(b)))) report(path, a, b);
   };
   const keyed = (
     path: string,
@@ -106,8 +113,14 @@ export const differences = (
     same(`${path} turn`, a.turn, b.turn);
     close(`${path} thevenin re`, a.thevenin?.[0], b.thevenin?.[0], ohms);
     close(`${path} thevenin im`, a.thevenin?.[1], b.thevenin?.[1], ohms);
-    if (withHeadroom)
-      close(`${path} headroomAmps`, a.headroomAmps, b.headroomAmps, headroomScale(b.headroomAmps, amps));
+    if (headroomEpsilon !== null)
+      close(
+        `${path} headroomAmps`,
+        a.headroomAmps,
+        b.headroomAmps,
+        headroomScale(b.headroomAmps, amps),
+        headroomEpsilon,
+      );
   });
   for (const key of ['sourceWatts', 'loadWatts', 'lossWatts'] as const)
     close(`totals.${key}`, ours.totals[key], theirs.totals[key], watts);
