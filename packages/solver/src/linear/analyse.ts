@@ -20,81 +20,48 @@ export interface Symbolic {
   place: Int32Array;
 }
 
-/** Symbolic analysis: once per topology; any set of values can be factored on it. */
+/**
+ * Symbolic analysis: once per topology; any set of values can be factored on it. In the time of the entries of L: for
+ * each row, the columns that reach it are those on the paths of the elimination tree from its earlier neighbours up
+ * to it (Liu 1986; Davis, Algorithm 849, 2005).
+ */
 export function analyse(pattern: Pattern, order: Int32Array = leafFirstOrder(pattern)): Symbolic {
-  const { n, start, neighbour } = pattern;
+  const { n, start, neighbour, edge } = pattern;
   const position = new Int32Array(n);
   for (let k = 0; k < n; k++) position[order[k]!] = k;
 
   const parent = new Int32Array(n).fill(-1);
-  const children: number[][] = [];
-  const structure: Int32Array[] = new Array(n);
   const mark = new Int32Array(n).fill(-1);
   const columns = new Int32Array(n + 1);
   for (let k = 0; k < n; k++) {
     mark[k] = k;
-    const found: number[] = [];
+    const i = order[k]!;
+    for (let p = start[i]!; p < start[i + 1]!; p++)
+      for (let c = position[neighbour[p]!]!; c < k && mark[c] !== k; c = parent[c]!) {
+        if (parent[c] === -1) parent[c] = k;
+        mark[c] = k;
+        columns[c + 1]!++;
+      }
+  }
+  for (let k = 0; k < n; k++) columns[k + 1]! += columns[k]!;
+
+  // Rows arrive in ascending order, so each column's newest one is its last.
+  const rows = new Int32Array(columns[n]!);
+  const next = columns.slice(0, n);
+  const place = new Int32Array(pattern.edgeCount);
+  mark.fill(-1);
+  for (let k = 0; k < n; k++) {
+    mark[k] = k;
     const i = order[k]!;
     for (let p = start[i]!; p < start[i + 1]!; p++) {
-      const row = position[neighbour[p]!]!;
-      if (row > k && mark[row] !== k) {
-        mark[row] = k;
-        found.push(row);
+      const from = position[neighbour[p]!]!;
+      if (from >= k) continue;
+      for (let c = from; mark[c] !== k; c = parent[c]!) {
+        mark[c] = k;
+        rows[next[c]!++] = k;
       }
-    }
-    for (const child of children[k] ?? [])
-      for (const row of structure[child]!)
-        if (mark[row] !== k) {
-          mark[row] = k;
-          found.push(row);
-        }
-    const rows = Int32Array.from(found).sort();
-    structure[k] = rows;
-    columns[k + 1] = columns[k]! + rows.length;
-    if (rows.length > 0) {
-      const up = rows[0]!;
-      parent[k] = up;
-      if (rows.length > 1) {
-        const list = children[up];
-        if (list) list.push(k);
-        else children[up] = [k];
-      }
+      place[edge[p]!] = next[from]! - 1;
     }
   }
-  const rows = new Int32Array(columns[n]!);
-  for (let k = 0; k < n; k++) rows.set(structure[k]!, columns[k]!);
-  return {
-    pattern,
-    n,
-    order,
-    position,
-    parent,
-    columns,
-    rows,
-    place: edgePlaces(pattern, position, columns, rows),
-  };
-}
-
-function edgePlaces(
-  pattern: Pattern,
-  position: Int32Array,
-  columns: Int32Array,
-  rows: Int32Array,
-): Int32Array {
-  const place = new Int32Array(pattern.edgeCount);
-  for (let e = 0; e < pattern.edgeCount; e++) {
-    const a = position[pattern.edgeA[e]!]!;
-    const b = position[pattern.edgeB[e]!]!;
-    const column = Math.min(a, b);
-    const row = Math.max(a, b);
-    let low = columns[column]!;
-    let high = columns[column + 1]! - 1;
-    while (low < high) {
-      const middle = (low + high) >> 1;
-      if (rows[middle]! < row) low = middle + 1;
-      else high = middle;
-    }
-    place[e] = low;
-  }
-  return place;
+  return { pattern, n, order, position, parent, columns, rows, place };
 }
