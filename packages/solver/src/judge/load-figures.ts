@@ -8,7 +8,7 @@ import type { Volts } from './volts.ts';
 
 /** Figures of a load in one solved state, and every limit that holds for it beside its value. */
 export interface LoadFigures {
-  split: Split & { bus: number };
+  split: Split;
   totalPercent: number;
   /** The total limit with what a long path adds. */
   totalLimit: number | null;

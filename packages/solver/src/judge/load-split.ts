@@ -21,12 +21,7 @@ export const judgedPairs = (core: Core, load: number): readonly number[] => {
 };
 
 /** Figures of a load in some state: of the worst of its pairs, and of the worse end of the run it is spread along. */
-export function splitLoad(
-  core: Core,
-  volts: Volts,
-  load: number,
-  begins: readonly Begin[],
-): Split & { bus: number } {
+export function splitLoad(core: Core, volts: Volts, load: number, begins: readonly Begin[]): Split {
   const pairs = judgedPairs(core, load);
   let worst: PairDrop | null = null;
   let at = -1;
@@ -38,5 +33,5 @@ export function splitLoad(
     }
   }
   if (!worst) throw new Error(`load ${core.job.loads[load]!.id} has no terminals`);
-  return { ...splitDrop(core, volts, worst, at, begins), bus: at };
+  return splitDrop(core, volts, worst, at, begins);
 }

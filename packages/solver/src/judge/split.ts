@@ -5,6 +5,8 @@ import type { Volts } from './volts.ts';
 
 /** A drop at some terminals, split into its five parts, in percent of nominal. */
 export interface Split extends PairDrop {
+  /** Where: an index in the network's buses. */
+  bus: number;
   sourcePercent: number;
   servicePercent: number;
   transformerPercent: number;
@@ -74,8 +76,13 @@ export function splitDrop(
     else transformerPercent += lost;
   }
   const sourcePercent = path ? at(path.sourceBus) : 0;
+  // Field by field: headroom asks for thousands of splits, and copying an object costs more than working it out.
   return {
-    ...drop,
+    bus,
+    pair: drop.pair,
+    volts: drop.volts,
+    dropVolts: drop.dropVolts,
+    dropPercent: drop.dropPercent,
     sourcePercent,
     servicePercent,
     transformerPercent,
