@@ -22,11 +22,12 @@ export const epsilonOf = (job: JobFile): number => {
 };
 /**
  * Where a network collapses before a limit trips, headroom ends where the iteration gives up: after 100 rounds here, 600
- * there, some thousandths to hundredths of the current apart. Compared in deep runs alone: it costs most of the time.
+ * there, some thousandths to hundredths of the current apart. Compared for one job in 16 of the
+ * deep runs: the dense solver takes seconds for it.
  */
-const headroomEpsilonOf = (job: JobFile): number | null => {
+const headroomEpsilonOf = (job: JobFile, seed: number): number | null => {
   if (epsilonOf(job) === 1e-9) return 1e-9;
-  return DEEP ? 1e-4 : null;
+  return DEEP && seed % 16 === 0 ? 1e-4 : null;
 };
 /** A solution, or null where the network cannot be solved. */
 export const outcomeOf = (act: () => Solution): Solution | null => {
@@ -47,7 +48,7 @@ export const againstDense = (
   fc.assert(
     fc.property(seeds, fc.constantFrom(...SCENARIOS), (seed, scenario) => {
       const job = randomJob(seed, { system });
-      const headroom = headroomEpsilonOf(job);
+      const headroom = headroomEpsilonOf(job, seed);
       const ours = outcomeOf(() => solve(job, scenario));
       const theirs = outcomeOf(() => solveDense(job, scenario, headroom !== null));
       if (ours === null || theirs === null) return;
