@@ -48,7 +48,8 @@ export const differences = (
     ...(job.transformers ?? []).map((t) => t.secondaryVolts),
   );
   const amps = Math.max(1, ...theirs.runs.flatMap((run) => Object.values(run.amps ?? {})));
-  const watts = Math.max(volts, Math.abs(theirs.totals.sourceWatts), Math.abs(theirs.totals.loadWatts));
+  // The largest power that flows anywhere: between unequal sources it is more than what is consumed.
+  const watts = Math.max(volts * amps, Math.abs(theirs.totals.sourceWatts));
   const ohms = Math.max(
     1e-3,
     ...theirs.loads.flatMap((load) => (load.thevenin ? [Math.hypot(...load.thevenin)] : [])),
