@@ -1,6 +1,6 @@
 import { SYSTEMS } from '@farlug/solver/job';
 import { describe, expect, it } from 'vitest';
-import { againstDense } from './support/against-dense.ts';
+import { againstDense, DEEP } from './support/against-dense.ts';
 import { solveProduct } from './support/solvers.ts';
 
 describe('random jobs against the dense solver', () => {
@@ -9,6 +9,6 @@ describe('random jobs against the dense solver', () => {
     (system) => {
       expect(againstDense(solveProduct, system, 8)).toBeUndefined();
     },
-    120_000,
+    DEEP ? 1_800_000 : 120_000,
   );
 });
