@@ -218,7 +218,8 @@ it('killed in the middle of a message leaves the delivery uncertain, and another
   );
   const ended = once(child, 'exit');
   await expect.poll(async () => (await deliveriesOf(at))[0]?.state, SOON).toBe('sending');
-  await expect.poll(() => server.hanging(), SOON).toBe(1);
+  // An account mail of an earlier test may hang beside it.
+  await expect.poll(() => server.hanging(), SOON).toBeGreaterThanOrEqual(1);
   child.kill('SIGKILL');
   await ended;
   server.fail({});
