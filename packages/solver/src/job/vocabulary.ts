@@ -84,6 +84,6 @@ export const PANEL_LAYOUTS = ['two-column', 'sequential', 'three-phase-ways'] as
 export type PanelLayout = (typeof PANEL_LAYOUTS)[number];
 export const CIRCUIT_KINDS = ['branch', 'feeder', 'spare', 'reserved', 'feed-through'] as const;
 export type CircuitKind = (typeof CIRCUIT_KINDS)[number];
-/** Installation methods of IEC 60364-5-52 Table B.52.1 whose ampacities the tables hold. */
+/** Installation methods of IEC 60364-5-52 Table B.52.1. The tables hold no ampacities for E, F and G. */
 export const INSTALLATION_METHODS = ['A1', 'A2', 'B1', 'B2', 'C', 'D1', 'D2', 'E', 'F', 'G'] as const;
 export type InstallationMethod = (typeof INSTALLATION_METHODS)[number];
