@@ -1,9 +1,11 @@
-import { pathSolver, solve } from '../linear/index.ts';
 import { type Refusal, refusal, type Sink, type Stamped, stamp } from '../network/index.ts';
 import type { Core } from './core.ts';
 import type { Credits } from './credits.ts';
 import type { Demand } from './demand.ts';
-import { ampsOf, type Drawn, type SinkRule, sinkAdmittance, sinkCurrent } from './sink-current.ts';
+import { injectionOf } from './injection.ts';
+import { newton } from './newton.ts';
+import { notServed } from './not-served.ts';
+import { ampsOf, type Flow, type SinkRule, sinkAdmittance, sinkCurrent } from './sink-current.ts';
 import { type Volts, zeroVolts } from './volts.ts';
 
 /** A solved state of the whole network. */
@@ -14,19 +16,14 @@ export interface State {
   iterations: number;
 }
 
-/** Rounds stop at this share of the largest voltage; after `ROUNDS` the state counts as not solvable. */
+/** Rounds stop at this share of the largest voltage. */
 const SETTLED = 1e-10;
-const ROUNDS = 100;
+/** After so many plain rounds the rest is reckoned; more than `MANY` to come are left to Newton's method. */
+const RECKONED = 6;
+const MANY = 12;
 /** Further rounds sharpen a settled state until rounding stops them. */
 const SHARPENING = 8;
 const SHARP = 1e-15;
-
-/** A sink that flows as a current in this demand, with its rule. */
-interface Flow {
-  sink: Sink;
-  drawn: Drawn;
-  rule: SinkRule;
-}
 
 /** The current sinks of a demand; impedance loads are stamped instead. */
 export function flowsOf(core: Core, demand: Demand): Flow[] {
@@ -55,8 +52,9 @@ export const admittanceIn = (core: Core, demand: Demand) => (sink: Sink) =>
 
 /**
  * Solves the network for a demand on a matrix that is stamped for it. One solve where every current is fixed; else
- * current injection with the factor kept, to max|ΔV| ≤ 1e-10·max|V|. Refused after 100 rounds, naming the load
- * that is worst off: never a last iterate.
+ * current injection with the factor kept, to max|ΔV| ≤ 1e-10·max|V|: plain rounds while they close in, Newton's method
+ * where they are slow. Refused where the mismatch stops falling, naming the load that asks for the most: never a last
+ * iterate.
  */
 export function solveState(
   core: Core,
@@ -65,115 +63,70 @@ export function solveState(
   credits: Credits | null,
   from: Volts | null = null,
 ): State | Refusal {
-  const { layout, network } = { layout: stamped.layout, network: core.network };
-  const n = layout.nodeOf.length;
+  const { network } = core;
+  const { nodeOf, unknownOf } = stamped.layout;
+  const n = nodeOf.length;
   const flows = flowsOf(core, demand);
-  const fixedRe = stamped.baseRe.slice();
-  const fixedIm = stamped.baseIm.slice();
+  const fixed: Volts = { re: stamped.baseRe.slice(), im: stamped.baseIm.slice() };
   if (demand.credits && credits)
     for (let u = 0; u < n; u++) {
-      fixedRe[u]! += credits.re[layout.nodeOf[u]!]!;
-      fixedIm[u]! += credits.im[layout.nodeOf[u]!]!;
+      fixed.re[u]! += credits.re[nodeOf[u]!]!;
+      fixed.im[u]! += credits.im[nodeOf[u]!]!;
     }
   const current = new Float64Array(2);
-  const draw = (flow: Flow, volts: Volts, re: Float64Array, im: Float64Array) => {
-    sinkCurrent(flow.sink, flow.drawn, flow.rule, network, volts, current);
-    const a = layout.unknownOf[flow.sink.a]!;
-    const b = layout.unknownOf[flow.sink.b]!;
+  for (const { sink, drawn, rule } of flows) {
+    if (rule !== 'nominal') continue;
+    sinkCurrent(sink, drawn, rule, network, null, current);
+    const a = unknownOf[sink.a]!;
+    const b = unknownOf[sink.b]!;
     if (a >= 0) {
-      re[a]! -= current[0]!;
-      im[a]! -= current[1]!;
+      fixed.re[a]! -= current[0]!;
+      fixed.im[a]! -= current[1]!;
     }
     if (b >= 0) {
-      re[b]! += current[0]!;
-      im[b]! += current[1]!;
+      fixed.re[b]! += current[0]!;
+      fixed.im[b]! += current[1]!;
     }
-  };
-  const volts = from ? { re: from.re.slice(), im: from.im.slice() } : zeroVolts(network);
+  }
   const following = flows.filter((flow) => flow.rule !== 'nominal');
-  for (const flow of flows) if (flow.rule === 'nominal') draw(flow, volts, fixedRe, fixedIm);
+  const volts = from ? { re: from.re.slice(), im: from.im.slice() } : zeroVolts(network);
+  const injection = injectionOf(network, stamped, following, fixed, volts);
 
-  const re = new Float64Array(n);
-  const im = new Float64Array(n);
-  /** One round; returns max|ΔV| ÷ max|V|. */
-  const round = (): number => {
-    re.set(fixedRe);
-    im.set(fixedIm);
-    for (const flow of following) draw(flow, volts, re, im);
-    solve(stamped.factor, re, im);
-    let largest = 0;
-    let moved = 0;
-    for (let u = 0; u < n; u++) {
-      const node = layout.nodeOf[u]!;
-      const dRe = re[u]! - volts.re[node]!;
-      const dIm = im[u]! - volts.im[node]!;
-      const vRe = network.nodes.referenceRe[node]! + re[u]!;
-      const vIm = network.nodes.referenceIm[node]! + im[u]!;
-      const change = dRe * dRe + dIm * dIm;
-      const square = vRe * vRe + vIm * vIm;
-      if (!(change <= moved)) moved = change;
-      if (!(square <= largest)) largest = square;
-      volts.re[node] = re[u]!;
-      volts.im[node] = im[u]!;
-    }
-    return n === 0 ? 0 : Math.sqrt(moved) / Math.sqrt(largest);
-  };
-
-  let moved = round();
+  let moved = injection.round();
   if (following.length === 0) {
-    if (!Number.isFinite(moved) && n > 0 && Number.isNaN(volts.re[layout.nodeOf[0]!]!))
+    if (!Number.isFinite(moved) && n > 0 && Number.isNaN(volts.re[nodeOf[0]!]!))
       return refusal(
         'network',
         'its voltages are not finite: an impedance or a load is out of all proportion',
       );
     return { demand, volts, stamped, iterations: 1 };
   }
-  let iterations = 1;
+  let plain = 1;
   while (!(moved <= SETTLED)) {
-    if (iterations === ROUNDS || Number.isNaN(moved)) return notServed(core, stamped, following);
-    moved = round();
-    iterations++;
+    const before = moved;
+    moved = injection.round();
+    plain++;
+    if (plain < RECKONED || moved <= SETTLED) continue;
+    const closing = moved < before;
+    if (closing && Math.log(SETTLED / moved) / Math.log(moved / before) <= MANY) continue;
+    if (!closing) {
+      volts.re.fill(0);
+      volts.im.fill(0);
+    }
+    const x = new Float64Array(2 * n);
+    injection.write(x);
+    const { ok, mismatch } = newton(injection.fixedPoint, x, SETTLED);
+    injection.read(x);
+    if (!ok) return notServed(core, stamped, following, volts, mismatch);
+    return { demand, volts, stamped, iterations: injection.solves() };
   }
+  const iterations = injection.solves();
   for (let k = 0; k < SHARPENING && moved > SHARP; k++) {
-    const next = round();
+    const next = injection.round();
     if (!(next < moved)) break;
     moved = next;
   }
   return { demand, volts, stamped, iterations };
-}
-
-/**
- * The load that asks for the most by itself: its nominal current times the impedance that it sees, as a share of its
- * volts. The one whose voltage is lowest may be only its victim.
- */
-function notServed(core: Core, stamped: Stamped, flows: readonly Flow[]): Refusal {
-  const { unknownOf } = stamped.layout;
-  const path = pathSolver(stamped.factor);
-  let worst = flows[0]!;
-  let largest = -1;
-  for (const flow of flows) {
-    const { a, b, nominal, share } = flow.sink;
-    const from = unknownOf[a]!;
-    const to = unknownOf[b]!;
-    path.reach([from, to].filter((unknown) => unknown >= 0));
-    path.clear();
-    if (from >= 0) path.add(from, 1, 0);
-    if (to >= 0) path.add(to, -1, 0);
-    path.solve();
-    const re = (from < 0 ? 0 : path.re(from)) - (to < 0 ? 0 : path.re(to));
-    const im = (from < 0 ? 0 : path.im(from)) - (to < 0 ? 0 : path.im(to));
-    const asked = (Math.abs(flow.drawn.amps * share) * Math.sqrt(re * re + im * im)) / nominal;
-    if (asked > largest) {
-      largest = asked;
-      worst = flow;
-    }
-  }
-  const load = core.job.loads[worst.sink.load]!;
-  const where = load.bus === null ? `run ${load.along}` : `bus ${load.bus}`;
-  return refusal(
-    `load ${load.id}`,
-    `the load cannot be served: no solution at ${where} was found in ${ROUNDS} rounds; its conductors are too long or too thin for it, or its size is wrong`,
-  );
 }
 
 /** Stamps for a demand and solves it. */

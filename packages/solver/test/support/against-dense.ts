@@ -21,8 +21,8 @@ export const epsilonOf = (job: JobFile): number => {
   return iterated ? 2e-9 : 1e-9;
 };
 /**
- * Where a network collapses before a limit trips, headroom ends where the iteration gives up: after 100 rounds here, 600
- * there, up to a tenth of the current apart. Compared for one job in 16 of the
+ * Where a network collapses before a limit trips, headroom ends at the collapse here, and there where 600 plain rounds
+ * do not settle any more: up to a tenth of the current apart. Compared for one job in 16 of the
  * deep runs: the dense solver takes seconds for it.
  */
 const headroomEpsilonOf = (job: JobFile, seed: number): number | null => {
