@@ -1,6 +1,6 @@
 export { type Beyond, beyondFinder } from './beyond.ts';
 export { radialRuns } from './bridges.ts';
-export { CAUTION } from './caution.ts';
+export { CAUTION, NEUTRAL_CAUTION } from './caution.ts';
 export { type LoadRating, loadRating } from './load-rating.ts';
 export { parseJob } from './parse.ts';
 export * from './run-ratings.ts';
