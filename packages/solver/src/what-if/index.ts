@@ -1,3 +1,5 @@
+export { lossFactorOf, type YearOptions } from './loss-factor.ts';
+export { type Losses, type LossesRefused, losses, type PartLoss, type YearlyLoss } from './losses.ts';
 export {
   type LostNeutral,
   type LostNeutralLoad,
