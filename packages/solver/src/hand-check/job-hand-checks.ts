@@ -86,10 +86,10 @@ const CONDUCTOR_OF = Object.fromEntries(Object.entries(SLOT).map(([c, slot]) => 
 const runState = (core: Core, state: State, elements: readonly Element[], index: number): RunState => {
   const { nodes, buses } = core.network;
   const run = core.job.runs[index]!;
-  const leadsToIt = core
-    .pathTo(buses.index.get(run.to)!)
-    ?.some((step) => step.kind !== 'transformer' && step.index === index);
-  const [nearBus, otherBus] = leadsToIt === false ? [run.to, run.from] : [run.from, run.to];
+  const to = buses.index.get(run.to)!;
+  const last = core.treeOf(to)?.[to];
+  const leadsToIt = last === undefined || (last && last.kind !== 'transformer' && last.index === index);
+  const [nearBus, otherBus] = leadsToIt ? [run.from, run.to] : [run.to, run.from];
   const volts = (bus: string, c: Conductor): Phasor | null => {
     const node = nodes.at[4 * buses.index.get(bus)! + SLOT[c]]!;
     if (node < 0) return null;

@@ -52,12 +52,12 @@ export function beyondFinder(job: Job): (run: number) => Beyond | null {
     const along = loadsAlong.get(run.id) ?? [];
     const loads = [...along];
     for (const bus of buses) {
-      loads.push(...(loadsAt.get(bus) ?? []));
+      for (const load of loadsAt.get(bus) ?? []) loads.push(load);
       for (const i of runsAt.get(bus) ?? []) {
         if (i === index || runs.has(i)) continue;
         const { id, from, to } = job.runs[i]!;
         runs.add(i);
-        loads.push(...(loadsAlong.get(id) ?? []));
+        for (const load of loadsAlong.get(id) ?? []) loads.push(load);
         buses.add(from).add(to);
       }
       for (const i of transformersAt.get(bus) ?? [])

@@ -23,7 +23,7 @@ export function parseJob(json: unknown): ParseOutcome<Job> {
   const report = (path: string, message: string) => problems.push({ path, message });
   const parsed = jobSchema.safeParse(json);
   if (!parsed.success) {
-    problems.push(...schemaProblems(parsed.error.issues, json));
+    for (const problem of schemaProblems(parsed.error.issues, json)) problems.push(problem);
     const draft = draftOf(json);
     checkReferences(json, draft, report);
     checkEntries(draft, frequencyOf(json), report);

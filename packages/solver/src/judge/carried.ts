@@ -1,12 +1,12 @@
 import type { Core } from './core.ts';
 
 /**
- * Loads that each run carries: those whose power can come through it. A run that is the only way to its far side
- * carries what lies beyond; a run inside a loop carries whatever hangs on the loop away from the source.
- * Found on the block tree of the network with all sources joined at a virtual bus (Hopcroft and Tarjan 1973).
- * `visit(run, load)` is called for each pair once.
+ * The lowest rank among the loads that each run carries, those whose power can come through it; infinity where it
+ * carries none. A run that is the only way to its far side carries what lies beyond; a run inside a loop carries
+ * whatever hangs on the loop away from the source. Found on the block tree of the network with all sources joined at a
+ * virtual bus (Hopcroft and Tarjan 1973), in the time of one search of it.
  */
-export function visitCarried(core: Core, visit: (run: number, load: number) => void): void {
+export function lowestCarried(core: Core, rankOf: (load: number) => number): Float64Array {
   const { job, network } = core;
   const { buses, feeding } = network;
   const count = buses.ids.length;
@@ -69,8 +69,7 @@ export function visitCarried(core: Core, visit: (run: number, load: number) => v
     }
   }
 
-  const runsIn: number[][] = headOf.map(() => []);
-  for (const [edge, run] of runOf.entries()) if (blockOf[edge]! >= 0) runsIn[blockOf[edge]!]!.push(run);
+  const lowest = new Float64Array(headOf.length).fill(Number.POSITIVE_INFINITY);
   for (const [i, load] of core.loads.entries()) {
     if (!load.served) continue;
     let bus = load.bus;
@@ -80,7 +79,15 @@ export function visitCarried(core: Core, visit: (run: number, load: number) => v
       const other = buses.index.get(to)!;
       bus = order[one]! > order[other]! ? one : other;
     }
-    for (let block = blockAbove[bus]!; block >= 0; block = blockAbove[headOf[block]!]!)
-      for (const run of runsIn[block]!) visit(run, i);
+    const block = blockAbove[bus]!;
+    if (block >= 0) lowest[block] = Math.min(lowest[block]!, rankOf(i));
   }
+  // A block is numbered when all that hangs on it is done: before the one that it hangs on itself.
+  for (const [block, head] of headOf.entries()) {
+    const above = blockAbove[head]!;
+    if (above >= 0) lowest[above] = Math.min(lowest[above]!, lowest[block]!);
+  }
+  const byRun = new Float64Array(job.runs.length).fill(Number.POSITIVE_INFINITY);
+  for (const [edge, run] of runOf.entries()) if (blockOf[edge]! >= 0) byRun[run] = lowest[blockOf[edge]!]!;
+  return byRun;
 }

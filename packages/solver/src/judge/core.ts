@@ -11,7 +11,9 @@ import {
   type LoadModel,
   layOut,
   type Network,
-  pathFinder,
+  type PathTree,
+  pathIn,
+  pathTrees,
   type Refusal,
   runOhms,
   SLOT,
@@ -27,7 +29,9 @@ export interface Core {
   layout: Layout;
   /** Buses with one label are joined by closed runs: they are in the same system. */
   systemLabel: Int32Array;
-  /** From the source bus of `bus`'s system to it; `null` where it is not reached. */
+  /** Paths from the source bus of a bus's system; `null` where it has none. */
+  treeOf: (bus: number) => PathTree | null;
+  /** From that source bus to it; `null` where it is not reached. */
   pathTo: (bus: number) => Step[] | null;
   /** Runs whose resistance follows their current. */
   operating: number[];
@@ -82,7 +86,11 @@ function newCore(job: Job): Core | Refusal {
   const { find, join } = disjointSets(buses.ids.length);
   for (const [i, run] of job.runs.entries())
     if (feeding.runLive[i]) join(buses.index.get(run.from)!, buses.index.get(run.to)!);
-  const find1 = pathFinder(network);
+  const trees = pathTrees(network);
+  const treeOf = (bus: number) => {
+    const system = buses.system[bus];
+    return system ? trees(buses.index.get(system.origin.sourceBus)!) : null;
+  };
   const operating = job.runs.flatMap((run, i) =>
     run.temperature === 'operating' && !run.ohms && run.length > 0 && feeding.runLive[i] ? [i] : [],
   );
@@ -98,9 +106,10 @@ function newCore(job: Job): Core | Refusal {
     circuits: findCircuits(job, buses, loads),
     layout: layOut(network, impedanceSinks),
     systemLabel: Int32Array.from(buses.ids, (_, i) => find(i)),
+    treeOf,
     pathTo: (bus) => {
-      const system = buses.system[bus];
-      return system ? find1(buses.index.get(system.origin.sourceBus)!, bus) : null;
+      const tree = treeOf(bus);
+      return tree && pathIn(tree, bus);
     },
     operating,
     iterates: follows || operating.length > 0,

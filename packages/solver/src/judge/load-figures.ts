@@ -1,7 +1,7 @@
-import { lengthMOf } from '../network/index.ts';
+import { alongPaths, lengthMOf } from '../network/index.ts';
 import type { Core } from './core.ts';
 import { type LoadLimits, limitsFor, longRunPercent } from './limits.ts';
-import { splitLoad } from './load-split.ts';
+import { judgedBuses, splitLoad } from './load-split.ts';
 import { type Begin, beginsOf, type Split } from './split.ts';
 import { type Judged, judge, totalPercent } from './verdict.ts';
 import type { Volts } from './volts.ts';
@@ -22,6 +22,8 @@ export interface Judge {
   figures: (volts: Volts, load: number, startingPercent: number | null) => LoadFigures;
   /** Nodes whose volts the figures of a circuit's loads need. */
   nodesOf: (circuit: number) => number[];
+  /** Nodes whose volts the figures of one load need. */
+  nodesOfLoad: (load: number) => number[];
 }
 
 export function judgeOf(core: Core): Judge {
@@ -32,16 +34,27 @@ export function judgeOf(core: Core): Judge {
     beginsKnown[circuit] ??= beginsOf(core, circuits.list[circuit]!.begins);
     return beginsKnown[circuit];
   };
-  const pathM = new Map<number, number>();
+  const metres = alongPaths(
+    () => 0,
+    (before, step) => (step.kind === 'transformer' ? before : before + lengthMOf(job, job.runs[step.index]!)),
+  );
   const pathMOf = (bus: number): number => {
-    let metres = pathM.get(bus);
-    if (metres === undefined) {
-      metres = 0;
-      for (const step of core.pathTo(bus) ?? [])
-        if (step.kind !== 'transformer') metres += lengthMOf(job, job.runs[step.index]!);
-      pathM.set(bus, metres);
+    const tree = core.treeOf(bus);
+    return tree && tree[bus] !== undefined ? metres(tree, bus) : 0;
+  };
+  const nodesAt = (at: readonly number[], from: readonly Begin[]): number[] => {
+    const wanted = new Set(at);
+    for (const begin of from) {
+      wanted.add(begin.bus).add(begin.sourceBus);
+      for (const step of begin.steps) wanted.add(step.near).add(step.far);
     }
-    return metres;
+    const list: number[] = [];
+    for (const bus of wanted)
+      for (let slot = 0; slot < 4; slot++) {
+        const node = nodes.at[4 * bus + slot]!;
+        if (node >= 0) list.push(node);
+      }
+    return list;
   };
   const limitsKnown: (LoadLimits | undefined)[] = [];
   return {
@@ -70,19 +83,7 @@ export function judgeOf(core: Core): Judge {
       );
       return { split, totalPercent: total, totalLimit, judged };
     },
-    nodesOf: (circuit) => {
-      const at = new Set(circuits.list[circuit]!.buses);
-      for (const begin of begins(circuit)) {
-        at.add(begin.bus).add(begin.sourceBus);
-        for (const step of begin.steps) at.add(step.near).add(step.far);
-      }
-      const list: number[] = [];
-      for (const bus of at)
-        for (let slot = 0; slot < 4; slot++) {
-          const node = nodes.at[4 * bus + slot]!;
-          if (node >= 0) list.push(node);
-        }
-      return list;
-    },
+    nodesOf: (circuit) => nodesAt(circuits.list[circuit]!.buses, begins(circuit)),
+    nodesOfLoad: (load) => nodesAt(judgedBuses(core, load), begins(circuits.ofLoad[load]!)),
   };
 }

@@ -67,6 +67,14 @@ export class LocalTurns {
     }
   }
 
+  /** Writes what a current alone changes at the watched nodes into `out`, which holds anything elsewhere. */
+  respond(extra: Extra, out: Volts): void {
+    this.solver.clear();
+    for (const sink of extra.sinks) this.putDrawn(sink, extra.drawn, 1);
+    this.solver.solve();
+    this.collect(out);
+  }
+
   /** Writes the watched nodes' volts after the changes into `out`, which holds anything elsewhere. */
   solve(changes: readonly Change[], extra: Extra | null, out: Volts): boolean {
     const { volts } = this.state;

@@ -1,6 +1,6 @@
 import type { Job, Load, LoadResult, Solution, Verdict } from '../job/index.ts';
 import { panelJudged } from './bus-results.ts';
-import { visitCarried } from './carried.ts';
+import { lowestCarried } from './carried.ts';
 import { buildCore } from './core.ts';
 import { limitsFor } from './limits.ts';
 import type { Judged } from './verdict.ts';
@@ -48,11 +48,12 @@ export function shownVerdicts(job: Job, solution: Solution, share = NEAR_SHARE):
       return [[id, shownOf(verdict, judged, share)] as const];
     }),
   );
-  const carried: ShownVerdict[][] = job.runs.map(() => []);
   const core = buildCore(job);
-  if (!('kind' in core))
-    visitCarried(core, (run, load) => carried[run]!.push(loads.get(job.loads[load]!.id)!));
-  const runs = new Map(job.runs.map(({ id }, i) => [id, worstShown(carried[i]!)] as const));
+  const rankOf = (load: number) => SHOWN_ORDER.indexOf(loads.get(job.loads[load]!.id)!);
+  const worst = 'kind' in core ? null : lowestCarried(core, rankOf);
+  const runs = new Map(
+    job.runs.map(({ id }, i) => [id, (worst && SHOWN_ORDER[worst[i]!]) ?? 'unjudged'] as const),
+  );
   return { loads, runs, panels };
 }
 

@@ -1,8 +1,8 @@
-import type { Job, LoadResult, RunResult, Scenario, Solution, SolveOutcome, Verdict } from '../job/index.ts';
+import type { Job, LoadResult, RunResult, Scenario, Solution, SolveOutcome } from '../job/index.ts';
 import { jobWarnings } from '../job/warnings.ts';
 import type { Refusal } from '../network/index.ts';
 import { busResults } from './bus-results.ts';
-import { visitCarried } from './carried.ts';
+import { lowestCarried } from './carried.ts';
 import { buildCore, type Core, coreLike } from './core.ts';
 import { type Credits, diversityCredits } from './credits.ts';
 import { designDemand, scenarioDemand } from './demand.ts';
@@ -14,7 +14,7 @@ import type { State } from './solve-state.ts';
 import { totalsOf } from './totals.ts';
 import { type TurnFigures, turnFigures, type Wanted } from './turn-figures.ts';
 import { turnSolver } from './turn-solver.ts';
-import { reasonsOf, verdictOf, worstVerdict } from './verdict.ts';
+import { reasonsOf, VERDICT_ORDER, verdictOf } from './verdict.ts';
 
 /** A job whose network, design state and turns are found once and serve every scenario. */
 export interface Prepared {
@@ -154,8 +154,7 @@ const withoutFigures = (core: Core, i: number): LoadResult => ({
 /** Runs in one state; each has the worst verdict of the loads that it carries. */
 function runResults(core: Core, state: State, loads: readonly LoadResult[]): RunResult[] {
   const elements = runElements(core, state.stamped.elements);
-  const carried: Verdict[][] = core.job.runs.map(() => []);
-  visitCarried(core, (run, load) => carried[run]!.push(loads[load]!.verdict));
+  const worst = lowestCarried(core, (load) => VERDICT_ORDER.indexOf(loads[load]!.verdict));
   return core.job.runs.map(({ id }, i): RunResult => {
     const flow = runFlow(core, state.volts, i, elements[i]!);
     return {
@@ -164,7 +163,7 @@ function runResults(core: Core, state: State, loads: readonly LoadResult[]): Run
       dropVolts: flow?.dropVolts ?? null,
       dropPercent: flow?.dropPercent ?? null,
       lossWatts: flow?.lossWatts ?? null,
-      verdict: worstVerdict(carried[i]!),
+      verdict: VERDICT_ORDER[worst[i]!] ?? 'unjudged',
     };
   });
 }

@@ -1,4 +1,4 @@
-import type { Step } from '../network/index.ts';
+import { alongPaths, type PathTree, type Step } from '../network/index.ts';
 import type { Core } from './core.ts';
 import { dropAt, meanPercent, type PairDrop } from './drop.ts';
 import type { Volts } from './volts.ts';
@@ -22,18 +22,20 @@ export interface Begin {
   steps: readonly Step[];
 }
 
+/** Of a path: the bus where it starts, and its service runs and transformers. Paths that lack them share one list. */
+const major = alongPaths<Pick<Begin, 'sourceBus' | 'steps'>>(
+  (bus) => ({ sourceBus: bus, steps: [] }),
+  (before, step) =>
+    step.kind === 'service' || step.kind === 'transformer'
+      ? { ...before, steps: [...before.steps, step] }
+      : before,
+);
+
 /** Where a circuit begins, each with its path; the ones that no source reaches are left out. */
 export function beginsOf(core: Core, buses: readonly number[]): Begin[] {
   return buses.flatMap((bus) => {
-    const path = core.pathTo(bus);
-    if (!path) return [];
-    return [
-      {
-        bus,
-        sourceBus: path[0]?.near ?? bus,
-        steps: path.filter((step) => step.kind === 'service' || step.kind === 'transformer'),
-      },
-    ];
+    const tree: PathTree | null = core.treeOf(bus);
+    return tree && tree[bus] !== undefined ? [{ bus, ...major(tree, bus) }] : [];
   });
 }
 

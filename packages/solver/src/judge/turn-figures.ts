@@ -128,10 +128,11 @@ function headroom(
   const perPath = core.job.loads[load]!.terminals === 'three-phase' ? 1 / SQRT3 : 1;
   const started = base.judged.find((j) => j.name === 'starting')?.value ?? null;
   const list = on.map(({ solved, figures }) => ({ solved, sinks: sinksAt(core, load, figures.split.bus) }));
+  const nodes = judge.nodesOfLoad(load);
   return largestBefore((amps) => {
     let worst: LoadFigures | null = null;
     for (const { solved, sinks } of list) {
-      const volts = amps === 0 ? solved.volts : solved.with(load, sinks, amps * perPath);
+      const volts = amps === 0 ? solved.volts : solved.with(load, sinks, amps * perPath, nodes);
       if (!volts) return Number.POSITIVE_INFINITY;
       const figures = judge.figures(volts, load, started);
       if (!worst || figures.split.dropPercent > worst.split.dropPercent + SAME_PERCENT) worst = figures;

@@ -13,8 +13,11 @@ export interface SolvedTurn {
   volts: Volts;
   /** The admittances that it was solved on: at operating temperatures they are its own. */
   elements: readonly Element[];
-  /** The turn with `amps` of one path more through the given paths, at the load's power factor; `null` unserved. */
-  with: (load: number, sinks: readonly Sink[], amps: number) => Volts | null;
+  /**
+   * The turn with `amps` of one path more through the given paths, at the load's power factor, good at `nodes`; `null`
+   * unserved.
+   */
+  with: (load: number, sinks: readonly Sink[], amps: number, nodes: readonly number[]) => Volts | null;
 }
 
 export interface TurnSolver {
@@ -62,6 +65,8 @@ function fullTurns(core: Core, design: State, credits: Credits | null): TurnSolv
 function linearTurns(core: Core, design: State, full: TurnSolver): TurnSolver {
   const { job, loads, network } = core;
   const local = new LocalTurns(core, design);
+  /** Reaches a few nodes of one load at a time. */
+  const narrow = new LocalTurns(core, design);
   // Volts are lent out circuit by circuit: only the watched nodes of them are ever read.
   const pool: Volts[] = [];
   let lent = 0;
@@ -69,7 +74,6 @@ function linearTurns(core: Core, design: State, full: TurnSolver): TurnSolver {
     pool[lent] ??= zeroVolts(network);
     return pool[lent++]!;
   };
-  let watched: number[] = [];
   const admittances = (changes: readonly Change[]) =>
     changes.reduce((sum, { load, stamped }) => sum + (stamped ? loads[load]!.sinks.length : 0), 0);
   const solve = (changes: readonly Change[], extra: Extra | null, out: Volts): boolean =>
@@ -80,8 +84,7 @@ function linearTurns(core: Core, design: State, full: TurnSolver): TurnSolver {
   return {
     open: (_, nodes) => {
       lent = 0;
-      watched = [...new Set(nodes)];
-      local.watch(watched);
+      local.watch(nodes);
     },
     turn: (circuit, turn) => {
       const changes = core.circuits.list[circuit]!.loads.map(
@@ -97,19 +100,33 @@ function linearTurns(core: Core, design: State, full: TurnSolver): TurnSolver {
       const unit = lend();
       const sum = lend();
       let unitOf: readonly Sink[] | null = null;
+      const sameMatrix = !changes.some(
+        ({ stamped, before, after }) => stamped && before?.amps !== after?.amps,
+      );
+      /** What one ampere more through `sinks` changes, into `unit`. */
+      const respond = (load: number, sinks: readonly Sink[], nodes: readonly number[]): boolean => {
+        const extra = extraOf(core, load, sinks, 1);
+        if (sameMatrix) {
+          narrow.watch([...nodes, ...sinks.flatMap(({ a, b }) => [a, b])]);
+          narrow.respond(extra, unit);
+          return true;
+        }
+        if (!solve(changes, extra, unit)) return false;
+        for (const node of nodes) {
+          unit.re[node]! -= volts.re[node]!;
+          unit.im[node]! -= volts.im[node]!;
+        }
+        return true;
+      };
       return {
         volts,
         elements: design.stamped.elements,
-        with: (load, sinks, amps) => {
+        with: (load, sinks, amps, nodes) => {
           if (unitOf !== sinks) {
-            if (!solve(changes, extraOf(core, load, sinks, 1), unit)) return null;
+            if (!respond(load, sinks, nodes)) return null;
             unitOf = sinks;
-            for (const node of watched) {
-              unit.re[node]! -= volts.re[node]!;
-              unit.im[node]! -= volts.im[node]!;
-            }
           }
-          for (const node of watched) {
+          for (const node of nodes) {
             sum.re[node] = volts.re[node]! + amps * unit.re[node]!;
             sum.im[node] = volts.im[node]! + amps * unit.im[node]!;
           }

@@ -72,11 +72,6 @@ export function verdictOf(list: readonly Judged[]): Verdict {
 
 /** Verdicts from worst to best. */
 export const VERDICT_ORDER: readonly Verdict[] = ['over', 'rise', 'within', 'unjudged', 'unserved'];
-export const worstVerdict = (list: Iterable<Verdict>): Verdict => {
-  let worst = VERDICT_ORDER.length;
-  for (const verdict of list) worst = Math.min(worst, VERDICT_ORDER.indexOf(verdict));
-  return VERDICT_ORDER[worst] ?? 'unjudged';
-};
 
 /** Digits that tell a value from its limit: two, and more where two would make them look alike. */
 const shown = (value: number, limit: number): string => {

@@ -10,10 +10,13 @@ export interface Step {
 }
 
 /**
- * Paths with the fewest steps from a source bus, ties by file order (runs before transformers). Searched once per
- * source bus; `pathTo` returns `null` where the bus is not reached.
+ * Paths with the fewest steps from a source bus, ties by file order (runs before transformers): of every bus the last
+ * step to it, whose near end is reached in the same way; `null` at the source, `undefined` where it is not reached.
  */
-export function pathFinder(network: Network): (source: number, to: number) => Step[] | null {
+export type PathTree = readonly (Step | null | undefined)[];
+
+/** Trees by source bus, each searched once. */
+export function pathTrees(network: Network): (source: number) => PathTree {
   const { job, buses, feeding } = network;
   const steps: Step[][] = buses.ids.map(() => []);
   for (const [i, run] of job.runs.entries()) {
@@ -28,8 +31,8 @@ export function pathFinder(network: Network): (source: number, to: number) => St
     const near = buses.index.get(t.from)!;
     steps[near]!.push({ kind: 'transformer', index: i, near, far: buses.index.get(t.to)! });
   }
-  const trees = new Map<number, (Step | null | undefined)[]>();
-  const treeFrom = (source: number) => {
+  const trees = new Map<number, PathTree>();
+  return (source) => {
     const known = trees.get(source);
     if (known) return known;
     const by: (Step | null | undefined)[] = new Array(buses.ids.length);
@@ -44,11 +47,40 @@ export function pathFinder(network: Network): (source: number, to: number) => St
     trees.set(source, by);
     return by;
   };
-  return (source, to) => {
-    const by = treeFrom(source);
-    if (by[to] === undefined) return null;
-    const path: Step[] = [];
-    for (let step = by[to] ?? null; step; step = by[step.near] ?? null) path.push(step);
-    return path.reverse();
+}
+
+/** The whole path to a bus; `null` where it is not reached. As long as it has steps: many of them are better shared. */
+export function pathIn(tree: PathTree, to: number): Step[] | null {
+  if (tree[to] === undefined) return null;
+  const path: Step[] = [];
+  for (let step = tree[to] ?? null; step; step = tree[step.near] ?? null) path.push(step);
+  return path.reverse();
+}
+
+/**
+ * Something of every path of a tree that is known at its source and grows step by step, found once for every bus that
+ * lies on some path asked for.
+ */
+export function alongPaths<T>(atSource: (bus: number) => T, after: (value: T, step: Step) => T) {
+  const known = new WeakMap<PathTree, (T | undefined)[]>();
+  return (tree: PathTree, to: number): T => {
+    let values = known.get(tree);
+    if (!values) {
+      values = [];
+      known.set(tree, values);
+    }
+    const behind: Step[] = [];
+    let bus = to;
+    for (let step = tree[bus]; step && values[bus] === undefined; step = tree[bus]) {
+      behind.push(step);
+      bus = step.near;
+    }
+    values[bus] ??= atSource(bus);
+    let value = values[bus] as T;
+    for (let k = behind.length - 1; k >= 0; k--) {
+      value = after(value, behind[k]!);
+      values[behind[k]!.far] = value;
+    }
+    return value;
   };
 }
