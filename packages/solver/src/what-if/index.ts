@@ -7,3 +7,9 @@ export {
   lostNeutral,
   type VoltBounds,
 } from './lost-neutral.ts';
+export {
+  type LoadSensitivity,
+  type RunSensitivity,
+  type Sensitivities,
+  sensitivities,
+} from './sensitivities.ts';
