@@ -1,9 +1,12 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { runCommand } from './command.ts';
-import { CAUTION, SCENARIOS } from './job/index.ts';
+import { CAUTION, NEUTRAL_CAUTION, SCENARIOS } from './job/index.ts';
 
 const fixture = readFileSync(new URL('../../../fixtures/jobs/ridge-cabin.json', import.meta.url), 'utf8');
+const neutralRun: string = JSON.parse(fixture).runs.find((each: { conductors: string[] }) =>
+  each.conductors.includes('N'),
+).id;
 const run = async (args: string[], file = fixture) => {
   let out = '';
   let err = '';
@@ -50,6 +53,39 @@ describe('solve', () => {
     expect(equations.kclResidual).toBeLessThan(1e-9);
   });
 
+  it('adds what-ifs where asked, and the caution of a lost neutral', async () => {
+    const { code, out, err } = await run([
+      'job.json',
+      '--lost-neutral',
+      neutralRun,
+      '--sensitivities',
+      '--load-factor=0.5',
+      '--price',
+      '0.12',
+    ]);
+    expect(code).toBe(0);
+    const { loads, lostNeutral, sensitivities, losses } = JSON.parse(out);
+    expect(lostNeutral).toMatchObject({ run: neutralRun, caution: NEUTRAL_CAUTION });
+    expect(lostNeutral.loads).toHaveLength(loads.length);
+    expect(sensitivities.loads).toHaveLength(loads.length);
+    expect(losses).toMatchObject({ lossFactor: expect.closeTo(0.325, 12), pricePerKwh: '0.12' });
+    expect(losses.total.costPerYear).toBeGreaterThan(0);
+    expect(err).toContain(`${CAUTION} ${NEUTRAL_CAUTION}`);
+  });
+
+  it('counts losses in watts alone where no year is stated, and says nothing of neutrals', async () => {
+    const { out, err } = await run(['job.json', '--losses']);
+    expect(JSON.parse(out).losses.total).toMatchObject({ kwhPerYear: null, costPerYear: null });
+    expect(JSON.parse(out)).not.toHaveProperty('lostNeutral');
+    expect(err).not.toContain(NEUTRAL_CAUTION);
+  });
+
+  it('says which neutral cannot be lost', async () => {
+    const { code, out, err } = await run(['job.json', '--lost-neutral', 'nowhere']);
+    expect([code, out]).toEqual([2, '']);
+    expect(err).toBe('run nowhere: no run of the job has this id\n');
+  });
+
   it('refuses a file that it cannot read, or that is no JSON', async () => {
     expect(await run(['gone.json'])).toEqual({
       code: 1,
@@ -86,6 +122,16 @@ describe('solve', () => {
     [['a.json', 'b.json'], 'b.json: one job file at a time'],
     [['a.json', '--fast'], '--fast: is not an option'],
     [['a.json', '--scenario', 'noon'], '--scenario: must be one of design, each-circuit'],
+    [['a.json', '--scenario'], '--scenario: must be one of design, each-circuit'],
+    [['a.json', '--lost-neutral'], '--lost-neutral: must be the id of a run, is missing'],
+    [
+      ['a.json', '--load-factor', '1.5'],
+      '--load-factor: must be 0 to 1, average load over peak load; is 1.5',
+    ],
+    [['a.json', '--load-factor='], '--load-factor: must be 0 to 1'],
+    [['a.json', '--price', '0.12'], '--price: must stand beside'],
+    [['a.json', '--load-factor', '0.5', '--price', 'dear'], '--price: must be 0 to 1000000 per kWh'],
+    [['a.json', '--pretty=yes'], '--pretty=yes: is not an option'],
   ])('explains %j', async (args, message) => {
     const { code, out, err } = await run(args);
     expect([code, out]).toEqual([64, '']);

@@ -1,17 +1,26 @@
+import { type CommandOptions, commandOptions } from './command-options.ts';
 import { nodalEquations } from './equations/index.ts';
-import { CAUTION, parseJob, SCENARIOS, type Scenario } from './job/index.ts';
+import { CAUTION, type Job, NEUTRAL_CAUTION, parseJob, SCENARIOS } from './job/index.ts';
 import { solveJob } from './judge/index.ts';
+import type { Refusal } from './network/index.ts';
 import { SOLVER_VERSION } from './version.ts';
+import { losses, lostNeutral, sensitivities } from './what-if/index.ts';
 
 /** Exit codes: solved; the file is refused; the network cannot be solved; the command itself is wrong. */
 export const EXIT = { solved: 0, refused: 1, unsolvable: 2, usage: 64 } as const;
 
-const USAGE = `usage: npm run -s solve -- FILE [--scenario NAME] [--equations] [--pretty]
+const USAGE = `usage: npm run -s solve -- FILE [option …]
 
 Solves one job file and prints one JSON document. FILE - reads standard input.
-  --scenario NAME  one of ${SCENARIOS.join(', ')}; each-circuit unless told
-  --equations      adds the node equations, written out and as a matrix
-  --pretty         indents the document
+  --scenario NAME     one of ${SCENARIOS.join(', ')}; each-circuit unless told
+  --equations         adds the node equations, written out and as a matrix
+  --sensitivities     adds what the drop at each load changes by when a run gets 1 % longer
+  --losses            adds what runs and transformers lose, in watts
+  --load-factor N     and in kWh a year at this load factor, 0 to 1
+  --loss-factor N     or at this loss factor, in place of the one that follows from the load factor
+  --price N           and in money, at this price per kWh
+  --lost-neutral RUN  adds what every load would see without the neutral of this run, on paper
+  --pretty            indents the document
 Exit 0 solved, 1 the file is refused, 2 the network cannot be solved, 64 the command is wrong.
 `;
 
@@ -22,16 +31,9 @@ export interface CommandIo {
   err: (text: string) => void;
 }
 
-interface Options {
-  file: string;
-  scenario: Scenario;
-  equations: boolean;
-  pretty: boolean;
-}
-
 /** Runs `solve` with its arguments; returns the exit code. */
 export async function runCommand(args: readonly string[], io: CommandIo): Promise<number> {
-  const options = optionsOf(args);
+  const options = commandOptions(args);
   if (typeof options === 'string') {
     io.err(options === '' ? USAGE : `${options}\n\n${USAGE}`);
     return EXIT.usage;
@@ -51,33 +53,39 @@ export async function runCommand(args: readonly string[], io: CommandIo): Promis
     io.err(`${outcome.at}: ${outcome.reason}\n`);
     return EXIT.unsolvable;
   }
-  const solution = { ...outcome.solution, warnings: parsed.warnings };
-  const document = options.equations
-    ? { ...solution, equations: nodalEquations(parsed.job, { scenario: options.scenario }) }
-    : solution;
+  const more = additions(parsed.job, options);
+  if ('kind' in more) {
+    io.err(`${more.at}: ${more.reason}\n`);
+    return EXIT.unsolvable;
+  }
+  const document = { ...outcome.solution, warnings: parsed.warnings, ...more.added };
   io.out(`${JSON.stringify(document, null, options.pretty ? 2 : undefined)}\n`);
-  io.err(`farlug solver ${SOLVER_VERSION}. ${CAUTION}\n`);
+  const cautions = options.lostNeutral === null ? CAUTION : `${CAUTION} ${NEUTRAL_CAUTION}`;
+  io.err(`farlug solver ${SOLVER_VERSION}. ${cautions}\n`);
   return EXIT.solved;
 }
 
-/** The options, or what is wrong with them; an empty text asks for the usage alone. */
-function optionsOf(args: readonly string[]): Options | string {
-  const options: Options = { file: '', scenario: 'each-circuit', equations: false, pretty: false };
-  for (let i = 0; i < args.length; i++) {
-    const arg = args[i]!;
-    if (arg === '--help' || arg === '-h') return '';
-    if (arg === '--equations') options.equations = true;
-    else if (arg === '--pretty') options.pretty = true;
-    else if (arg === '--scenario' || arg.startsWith('--scenario=')) {
-      const name = arg === '--scenario' ? args[++i] : arg.slice('--scenario='.length);
-      const scenario = SCENARIOS.find((one) => one === name);
-      if (!scenario) return `--scenario: must be one of ${SCENARIOS.join(', ')}, is ${name ?? 'missing'}`;
-      options.scenario = scenario;
-    } else if (arg.startsWith('--')) return `${arg}: is not an option`;
-    else if (options.file !== '') return `${arg}: one job file at a time`;
-    else options.file = arg;
+/** What stands beside the solution, by its key in the document; or the first that is refused. */
+function additions(job: Job, options: CommandOptions): { added: Record<string, unknown> } | Refusal {
+  const { scenario } = options;
+  const added: Record<string, unknown> = {};
+  if (options.equations) added.equations = nodalEquations(job, { scenario });
+  if (options.sensitivities) {
+    const outcome = sensitivities(job, { scenario });
+    if (outcome.kind === 'unsolvable') return outcome;
+    added.sensitivities = outcome;
   }
-  return options.file === '' ? 'FILE: is missing' : options;
+  if (options.losses) {
+    const outcome = losses(job, { scenario, ...options.losses });
+    if (outcome.kind === 'unsolvable') return outcome;
+    added.losses = outcome;
+  }
+  if (options.lostNeutral !== null) {
+    const outcome = lostNeutral(job, { run: options.lostNeutral });
+    if (outcome.kind === 'unsolvable') return outcome;
+    added.lostNeutral = outcome;
+  }
+  return { added };
 }
 
 async function readJson(

@@ -59,7 +59,10 @@ export function yearOf(options: YearOptions): { ok: true; year: Year } | { ok: f
   if (pricePerKwh !== null && price === null)
     report('pricePerKwh', `must be 0 to ${MOST_PRICE} per kWh, such as 0.12; is ${pricePerKwh}`);
   if (price !== null && loadFactor === null && lossFactor === null)
-    report('pricePerKwh', 'must stand beside loadFactor or lossFactor: a price is of energy, not of watts');
+    report(
+      'pricePerKwh',
+      'must stand beside a load factor or a loss factor: a price is of energy, not of watts',
+    );
   if (problems.length > 0) return { ok: false, problems };
   const follows = loadFactor === null ? null : lossFactorOf(loadFactor);
   return {

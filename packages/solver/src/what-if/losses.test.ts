@@ -143,7 +143,7 @@ describe('what it refuses', () => {
     [{ loadFactor: 0.5, hoursPerYear: 9000 }, 'hoursPerYear', /0 to 8784/],
     [{ loadFactor: 0.5, pricePerKwh: -1 }, 'pricePerKwh', /such as 0.12; is -1/],
     [{ loadFactor: 0.5, pricePerKwh: '12 ct' }, 'pricePerKwh', /is 12 ct/],
-    [{ pricePerKwh: 0.12 }, 'pricePerKwh', /beside loadFactor/],
+    [{ pricePerKwh: 0.12 }, 'pricePerKwh', /beside a load factor/],
   ])('%j', (options, path, message) => {
     const outcome = losses(shed, options);
     if (outcome.kind !== 'refused') throw new Error('was not refused');
