@@ -8,7 +8,7 @@ import { admittanceIn, type State, solveState, stampAndSolve } from './solve-sta
 import type { Volts } from './volts.ts';
 
 /** What the operating temperature of one conductor of a run follows from; `at` is its element. */
-interface Thermal {
+export interface Thermal {
   at: number;
   run: number;
   conductor: Conductor;
@@ -25,7 +25,7 @@ const ROUNDS = 200;
 const HOTTEST_C = 2000;
 
 /** Conductors whose resistance follows their current (model: operating temperature). */
-function thermalsOf(core: Core): Thermal[] | Refusal {
+export function thermalsOf(core: Core): Thermal[] | Refusal {
   const { job, network } = core;
   const wanted = new Set(core.operating);
   const list: Thermal[] = [];

@@ -1,10 +1,8 @@
 import type { Phasor } from '../job/index.ts';
-import type { Core } from '../judge/core.ts';
 import { addScaled, gmres, size } from '../judge/gmres.ts';
-import { type Flow, sinkSlope } from '../judge/sink-current.ts';
-import { flowsOf } from '../judge/solve-state.ts';
 import { type PathSolver, solve } from '../linear/index.ts';
 import type { LoadState } from './load-states.ts';
+import type { Follower } from './slopes.ts';
 
 /** Share of the right side that may be left of the adjoint equations, and how often they are gone over for it. */
 const LEFT = 1e-13;
@@ -43,34 +41,21 @@ export function fixedAdjoint(
   };
 }
 
-/** Currents of a state that follow the voltage. */
-export const followingFlows = (core: Core, { demand }: LoadState): Flow[] =>
-  flowsOf(core, demand).filter(({ rule }) => rule !== 'nominal');
-
 /**
- * The same where loads follow the voltage with the slopes δI = S·δV (real 2 × 2): Y·ν + Σ w·conj(Sᵀ·conj(wᵀν)) = g·e,
- * the transposed Jacobian, by GMRES on the factor of Y. `null` where it does not close in: the state is about to
+ * The same where currents follow the voltage with the slopes δI = S·δV (real 2 × 2): Y·ν + Σ w·conj(Sᵀ·conj(wᵀν)) =
+ * g·e, the transposed Jacobian, by GMRES on the factor of Y. `null` where it does not close in: the state is about to
  * collapse, and no first-order change is left.
  */
 export function followingAdjoint(
-  core: Core,
-  { stamped, volts }: LoadState,
-  following: readonly Flow[],
+  { stamped }: LoadState,
+  following: readonly Follower[],
   gauge: Gauge,
 ): Adjoint | null {
   const { unknownOf, nodeOf } = stamped.layout;
   const n = nodeOf.length;
   const re = new Float64Array(n);
   const im = new Float64Array(n);
-  const out = new Float64Array(2);
-  const ends = following.map(({ sink }) => [unknownOf[sink.a]!, unknownOf[sink.b]!] as const);
-  const slopes = following.map((flow) => {
-    const slope = sinkSlope(flow, core.network, volts);
-    slope(1, 0, out);
-    const [p, q] = [out[0]!, out[1]!];
-    slope(0, 1, out);
-    return [p, q, out[0]!, out[1]!] as const;
-  });
+  const ends = following.map(({ a, b }) => [unknownOf[a]!, unknownOf[b]!] as const);
   const put = (from: number, to: number, x: number, y: number): void => {
     if (from >= 0) {
       re[from]! += x;
@@ -88,7 +73,7 @@ export function followingAdjoint(
     for (const [k, [from, to]] of ends.entries()) {
       const x = part(d, from, 0) - part(d, to, 0);
       const y = part(d, from, n) - part(d, to, n);
-      const [p, q, r, s] = slopes[k]!;
+      const [p, q, r, s] = following[k]!.slope;
       put(from, to, p * x - q * y, s * y - r * x);
     }
     solve(stamped.factor, re, im);

@@ -47,10 +47,9 @@ function groupsOf(core: Core, scenario: Scenario, results: readonly LoadResult[]
 }
 
 /**
- * Visits every load with the state that its figures are of. Where all currents are fixed a turn is the design state and
- * what its own loads change, solved along their paths on the one factor; elsewhere each turn is solved in full.
- * `nodesOf` says at which nodes a load's volts are wanted. Returns the refusal of a state that has no solution, or of a
- * visit.
+ * Visits the loads together that share a state. Where all currents are fixed a turn is the design state and what its
+ * own loads change, solved along their paths on the one factor; elsewhere each turn is solved in full. `nodesOf` says
+ * at which nodes a load's volts are wanted. Returns the refusal of a state that has no solution, or of a visit.
  */
 export function visitLoadStates(
   core: Core,
@@ -59,7 +58,7 @@ export function visitLoadStates(
   scenario: Scenario,
   results: readonly LoadResult[],
   nodesOf: (load: number) => readonly number[],
-  visit: (load: number, state: LoadState, solver: PathSolver) => Refusal | null,
+  visit: (loads: readonly number[], state: LoadState, solver: PathSolver) => Refusal | null,
 ): Refusal | null {
   const whole = scenario === 'everything-on' || scenario === 'light';
   const state = whole ? solveFrom(core, design, scenarioDemand(core, scenario), credits) : design;
@@ -69,7 +68,7 @@ export function visitLoadStates(
   for (const { loads, demand, changed } of groupsOf(core, scenario, results)) {
     let at: LoadState | Refusal = state;
     let own = solver;
-    if (demand && isLinear(core, changed)) {
+    if (demand && isLinear(core) && changed.every((load) => core.job.loads[load]!.behaviour === 'current')) {
       superpose(core, state, solver, demand, changed, loads.flatMap(nodesOf), scratch);
       at = { stamped: state.stamped, volts: scratch, demand };
     } else if (demand) {
@@ -77,18 +76,14 @@ export function visitLoadStates(
       if ('kind' in at) return at;
       own = pathSolver(at.stamped.factor);
     }
-    for (const load of loads) {
-      const refused = visit(load, at, own);
-      if (refused) return refused;
-    }
+    const refused = visit(loads, at, own);
+    if (refused) return refused;
   }
   return null;
 }
 
-const isLinear = (core: Core, changed: readonly number[]): boolean =>
-  !core.iterates &&
-  core.job.angle === 'nominal' &&
-  changed.every((load) => core.job.loads[load]!.behaviour === 'current');
+/** Whether every current is fixed or flows through a fixed admittance, in any state. */
+export const isLinear = (core: Core): boolean => !core.iterates && core.job.angle === 'nominal';
 
 /** Volts at `nodes` in a state that differs from another in the fixed currents of a few loads alone, into `out`. */
 function superpose(

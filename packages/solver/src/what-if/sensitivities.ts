@@ -7,10 +7,12 @@ import { splitLoad } from '../judge/load-split.ts';
 import { solveDemand } from '../judge/operating.ts';
 import { runElements } from '../judge/run-results.ts';
 import type { Volts } from '../judge/volts.ts';
+import type { PathSolver } from '../linear/index.ts';
 import { type Element, PAIR_SLOTS, type Refusal, refusal } from '../network/index.ts';
-import { type Adjoint, fixedAdjoint, followingAdjoint, followingFlows, type Gauge } from './adjoint.ts';
-import { visitLoadStates } from './load-states.ts';
+import { type Adjoint, fixedAdjoint, followingAdjoint, type Gauge } from './adjoint.ts';
+import { type LoadState, visitLoadStates } from './load-states.ts';
 import { relevantRuns } from './relevant-runs.ts';
+import { type Following, followingOf, voltsThrough } from './slopes.ts';
 
 export interface RunSensitivity {
   run: string;
@@ -46,31 +48,23 @@ const COUNTS = 1e-9;
  * How much the drop at every load hangs on every run: d(dropPercent)/d(ln z) ÷ 100, exact, by the adjoint of the node
  * equations. With δV = −Z·(∂Y/∂p)·V and a symmetric Y, the drop of a load changes by Re Σ i·(ν_from − ν_to) over the
  * conductors of a run, ν being one solve for the load on the factor that is there already: in a radial job with fixed
- * currents the time of its path. Loads of constant power or at local angle are differentiated too, by the transposed
- * Jacobian, in the time of a few solves of the whole job for each load. A load's pair, end and turn are held: where two
- * of them tie, the change is that of one side. Credits of diversity are held as well.
- * Where everything is linear and at one angle, the changes for all runs and sources add up to the drop itself.
- * Refused: what `solveJob` refuses; resistance at operating temperature, which follows the current; a load so near to
- * its collapse that it has no first-order change.
+ * currents the time of its path. Loads of constant power or at local angle and resistance at operating temperature are
+ * differentiated too, by the transposed Jacobian, in the time of a few solves of the whole job for each load. A load's
+ * pair, end and turn are held: where two of them tie, the change is that of one side. Credits of diversity are held.
+ * Refused: what `solveJob` refuses; a load so near to its collapse that it has no first-order change.
  */
 export function sensitivities(job: Job, { scenario }: { scenario: Scenario }): Sensitivities | Refusal {
   const outcome = solveJob(job, { scenario, headroom: false });
   if (outcome.kind !== 'solved') return outcome;
   const core = buildCore(job);
   if ('kind' in core) return core;
-  const warm = core.operating[0];
-  if (warm !== undefined)
-    return refusal(
-      `run ${job.runs[warm]!.id}`,
-      'its resistance follows its current: state a temperature in °C to see what a longer run would change',
-    );
   const credits = diversityCredits(core);
   if (credits && 'kind' in credits) return credits;
   const design = solveDemand(core, designDemand(core), credits);
   if ('kind' in design) return design;
 
   const results = outcome.solution.loads;
-  const elements = runElements(core, core.network.elements);
+  let elements = runElements(core, core.network.elements);
   const runsOf = relevantRuns(core);
   const nodesOf = (load: number): number[] => [
     ...core.loads[load]!.sinks.flatMap(({ a, b }) => [a, b]),
@@ -79,33 +73,32 @@ export function sensitivities(job: Job, { scenario }: { scenario: Scenario }): S
   const loads = results.map(
     ({ id, dropPercent, turn }): LoadSensitivity => ({ id, dropPercent, turn, pair: null, runs: [] }),
   );
-  const refused = visitLoadStates(
-    core,
-    design,
-    credits,
-    scenario,
-    results,
-    nodesOf,
-    (load, state, solver) => {
-      const { pair, gauge } = gaugeOf(core, state.volts, load);
-      const following = followingFlows(core, state);
-      const adjoint =
-        following.length === 0
-          ? fixedAdjoint(state, solver, gauge, nodesOf(load))
-          : followingAdjoint(core, state, following, gauge);
+  let known: readonly Element[] | null = null;
+  const visit = (group: readonly number[], state: LoadState, solver: PathSolver): Refusal | null => {
+    if (known !== state.stamped.elements) elements = runElements(core, state.stamped.elements);
+    known = state.stamped.elements;
+    const following = followingOf(core, state);
+    if ('kind' in following) return following;
+    for (const load of group) {
       const own = loads[load]!;
+      const { pair, gauge } = gaugeOf(core, state.volts, load);
+      const adjoint =
+        following.list.length === 0
+          ? fixedAdjoint(state, solver, gauge, nodesOf(load))
+          : followingAdjoint(state, following.list, gauge);
       if (!adjoint)
         return refusal(`load ${own.id}`, 'stands so near to its collapse that no first-order change is left');
       own.pair = PAIRS[pair]!;
       own.runs = counted(
         runsOf(load).map((run) => ({
           run: job.runs[run]!.id,
-          percentPerPercent: changeBy(core, elements[run]!, state.volts, adjoint) / 100,
+          percentPerPercent: changeBy(core, elements[run]!, state, following, adjoint) / 100,
         })),
       );
-      return null;
-    },
-  );
+    }
+    return null;
+  };
+  const refused = visitLoadStates(core, design, credits, scenario, results, nodesOf, visit);
   return refused ?? { kind: 'sensitivities', scenario, loads };
 }
 
@@ -120,16 +113,20 @@ function gaugeOf(core: Core, volts: Volts, load: number): { pair: number; gauge:
   return { pair, gauge: { a, b, g: [scale * re, -scale * im] } };
 }
 
-/** Change of the gauged quantity by d ln z of a run: Re Σ i·(ν_from − ν_to) over its conductors. */
-function changeBy(core: Core, elements: readonly Element[], volts: Volts, adjoint: Adjoint): number {
-  const { referenceRe, referenceIm } = core.network.nodes;
+/** Change of the gauged quantity by d ln z of a run: Re Σ S·v·(ν_from − ν_to) over its conductors, S·v = i at most. */
+function changeBy(
+  core: Core,
+  elements: readonly Element[],
+  state: LoadState,
+  following: Following,
+  adjoint: Adjoint,
+): number {
   let change = 0;
-  for (const { nodes, yRe, yIm } of elements) {
-    const [a, b] = nodes as [number, number];
-    const re = referenceRe[a]! - referenceRe[b]! + (volts.re[a]! - volts.re[b]!);
-    const im = referenceIm[a]! - referenceIm[b]! + (volts.im[a]! - volts.im[b]!);
-    const [from, to] = [adjoint(a), adjoint(b)];
-    change += (yRe * re - yIm * im) * (from[0] - to[0]) - (yRe * im + yIm * re) * (from[1] - to[1]);
+  for (const e of elements) {
+    const [vRe, vIm] = voltsThrough(core, state, e);
+    const [p, q, r, s] = following.ofElement(e);
+    const [from, to] = [adjoint(e.nodes[0]!), adjoint(e.nodes[1]!)];
+    change += (p * vRe + r * vIm) * (from[0] - to[0]) - (q * vRe + s * vIm) * (from[1] - to[1]);
   }
   return change;
 }
