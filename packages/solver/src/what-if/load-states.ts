@@ -1,7 +1,14 @@
 import type { LoadResult, Scenario } from '../job/index.ts';
 import type { Core } from '../judge/core.ts';
 import type { Credits } from '../judge/credits.ts';
-import { type Demand, scenarioDemand, startingDemand, turnDemand, turnsOf } from '../judge/demand.ts';
+import {
+  type Demand,
+  scenarioDemand,
+  startingDemand,
+  turnAmps,
+  turnDemand,
+  turnsOf,
+} from '../judge/demand.ts';
 import { solveFrom } from '../judge/operating.ts';
 import { ampsOf, type Drawn, sinkCurrent } from '../judge/sink-current.ts';
 import type { State } from '../judge/solve-state.ts';
@@ -9,39 +16,53 @@ import { type Volts, zeroVolts } from '../judge/volts.ts';
 import { type PathSolver, pathSolver } from '../linear/index.ts';
 import type { Refusal } from '../network/index.ts';
 
-/** Loads whose figures are of one state of the network. `demand` is `null` where that is the state given. */
+/** Loads whose figures are of one state of the network, and how it differs from the state given. */
 interface Group {
   loads: number[];
-  demand: Demand | null;
-  /** Loads that may draw otherwise than at design demand. */
+  /** `null` where it is the state given. */
+  change: Change | null;
+}
+interface Change {
+  demand: () => Demand;
+  /** Loads that may draw otherwise than at design demand, and what each draws in this state. */
   changed: readonly number[];
+  drawn: (load: number) => Drawn;
 }
 
 /** A state that a load's figures are of; `volts` hold at the nodes that were asked for. */
-export type LoadState = Pick<State, 'stamped' | 'volts' | 'demand'>;
+export interface LoadState extends Pick<State, 'stamped' | 'volts'> {
+  /** `null` where nothing follows the voltage. */
+  demand: Demand | null;
+}
 
 /** Loads by the state that `scenario` takes their figures from; `results` say which turn was the worst. */
 function groupsOf(core: Core, scenario: Scenario, results: readonly LoadResult[]): Group[] {
   const groups = new Map<string, Group>();
-  for (const [load, { served }] of core.loads.entries()) {
-    if (!served) continue;
-    let key = '';
-    let make = (): Omit<Group, 'loads'> => ({ demand: null, changed: [] });
-    if (scenario === 'starting' && core.loads[load]!.starting) {
-      key = `starting ${load}`;
-      make = () => ({ demand: startingDemand(core, load), changed: [load] });
-    } else if (scenario === 'each-circuit') {
-      const circuit = core.circuits.ofLoad[load]!;
-      const turn = turnsOf(core, circuit).find(({ name }) => name === results[load]!.turn)!;
-      key = `${circuit} ${turn.name}`;
-      make = () => ({
-        demand: turnDemand(core, circuit, turn),
-        changed: core.circuits.list[circuit]!.loads,
-      });
-    }
+  const put = (load: number, key: string, change: () => Change | null): void => {
     const found = groups.get(key);
     if (found) found.loads.push(load);
-    else groups.set(key, { loads: [load], ...make() });
+    else groups.set(key, { loads: [load], change: change() });
+  };
+  for (const [load, { served, starting }] of core.loads.entries()) {
+    if (!served) continue;
+    if (scenario === 'starting' && starting)
+      put(load, `starting ${load}`, () => ({
+        demand: () => startingDemand(core, load),
+        changed: [load],
+        drawn: () => starting,
+      }));
+    else if (scenario === 'each-circuit') {
+      const circuit = core.circuits.ofLoad[load]!;
+      const { turn: name } = results[load]!;
+      put(load, `${circuit} ${name}`, () => {
+        const turn = turnsOf(core, circuit).find((each) => each.name === name)!;
+        return {
+          demand: () => turnDemand(core, circuit, turn),
+          changed: core.circuits.list[circuit]!.loads,
+          drawn: (each) => ampsOf(core.loads[each]!, turnAmps(core, each, turn)),
+        };
+      });
+    } else put(load, '', () => null);
   }
   return [...groups.values()];
 }
@@ -65,14 +86,15 @@ export function visitLoadStates(
   if ('kind' in state) return state;
   const solver = pathSolver(state.stamped.factor);
   const scratch = zeroVolts(core.network);
-  for (const { loads, demand, changed } of groupsOf(core, scenario, results)) {
-    let at: LoadState | Refusal = state;
+  const linear = isLinear(core);
+  for (const { loads, change } of groupsOf(core, scenario, results)) {
+    let at: LoadState | Refusal = linear ? { ...state, demand: null } : state;
     let own = solver;
-    if (demand && isLinear(core) && changed.every((load) => core.job.loads[load]!.behaviour === 'current')) {
-      superpose(core, state, solver, demand, changed, loads.flatMap(nodesOf), scratch);
-      at = { stamped: state.stamped, volts: scratch, demand };
-    } else if (demand) {
-      at = solveFrom(core, state, demand, credits);
+    if (change && linear && change.changed.every((load) => core.job.loads[load]!.behaviour === 'current')) {
+      superpose(core, state, solver, change, loads.flatMap(nodesOf), scratch);
+      at = { stamped: state.stamped, volts: scratch, demand: null };
+    } else if (change) {
+      at = solveFrom(core, state, change.demand(), credits);
       if ('kind' in at) return at;
       own = pathSolver(at.stamped.factor);
     }
@@ -83,15 +105,14 @@ export function visitLoadStates(
 }
 
 /** Whether every current is fixed or flows through a fixed admittance, in any state. */
-export const isLinear = (core: Core): boolean => !core.iterates && core.job.angle === 'nominal';
+const isLinear = (core: Core): boolean => !core.iterates && core.job.angle === 'nominal';
 
 /** Volts at `nodes` in a state that differs from another in the fixed currents of a few loads alone, into `out`. */
 function superpose(
   core: Core,
   from: State,
   solver: PathSolver,
-  demand: Demand,
-  changed: readonly number[],
+  { changed, drawn }: Change,
   nodes: readonly number[],
   out: Volts,
 ): void {
@@ -101,9 +122,9 @@ function superpose(
   solver.reach(unknowns);
   solver.clear();
   const current = new Float64Array(2);
-  const put = (load: number, drawn: Drawn, sign: 1 | -1): void => {
+  const put = (load: number, amount: Drawn, sign: 1 | -1): void => {
     for (const sink of core.loads[load]!.sinks) {
-      sinkCurrent(sink, drawn, 'nominal', core.network, null, current);
+      sinkCurrent(sink, amount, 'nominal', core.network, null, current);
       const a = unknownOf[sink.a]!;
       const b = unknownOf[sink.b]!;
       if (a >= 0) solver.add(a, -sign * current[0]!, -sign * current[1]!);
@@ -111,9 +132,8 @@ function superpose(
     }
   };
   for (const load of changed) {
-    const model = core.loads[load]!;
-    put(load, ampsOf(model, from.demand.amps[load]!), -1);
-    put(load, load === demand.starting ? model.starting! : ampsOf(model, demand.amps[load]!), 1);
+    put(load, ampsOf(core.loads[load]!, from.demand.amps[load]!), -1);
+    put(load, drawn(load), 1);
   }
   solver.solve();
   for (const node of nodes) {
