@@ -113,7 +113,7 @@ function gaugeOf(core: Core, volts: Volts, load: number): { pair: number; gauge:
   return { pair, gauge: { a, b, g: [scale * re, -scale * im] } };
 }
 
-/** Change of the gauged quantity by d ln z of a run: Re Σ S·v·(ν_from − ν_to) over its conductors, S·v = i at most. */
+/** Change of the gauged quantity by d ln z of a run: Re Σ S·v·(ν_from − ν_to) over its conductors; S·v is mostly i. */
 function changeBy(
   core: Core,
   elements: readonly Element[],
