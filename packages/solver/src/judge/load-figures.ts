@@ -48,13 +48,14 @@ export function judgeOf(core: Core): Judge {
       wanted.add(begin.bus).add(begin.sourceBus);
       for (const step of begin.steps) wanted.add(step.near).add(step.far);
     }
-    const list: number[] = [];
+    // Buses that a run without impedance joins share nodes: each counts once.
+    const list = new Set<number>();
     for (const bus of wanted)
       for (let slot = 0; slot < 4; slot++) {
         const node = nodes.at[4 * bus + slot]!;
-        if (node >= 0) list.push(node);
+        if (node >= 0) list.add(node);
       }
-    return list;
+    return [...list];
   };
   const limitsKnown: (LoadLimits | undefined)[] = [];
   return {
