@@ -1,16 +1,8 @@
+import { addScaled, dot, size } from './vectors.ts';
+
 /** Directions of one solve, and the share of its right side that may be left. */
 const DIRECTIONS = 40;
 const LEFT = 1e-4;
-
-const dot = (a: Float64Array, b: Float64Array): number => {
-  let sum = 0;
-  for (let i = 0; i < a.length; i++) sum += a[i]! * b[i]!;
-  return sum;
-};
-export const size = (a: Float64Array): number => Math.sqrt(dot(a, a));
-export const addScaled = (to: Float64Array, by: number, a: Float64Array): void => {
-  for (let i = 0; i < a.length; i++) to[i]! += by * a[i]!;
-};
 
 /**
  * x with A·x ≈ b for a real matrix that is known by its products alone, the least |b − A·x| over a Krylov space

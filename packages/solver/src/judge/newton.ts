@@ -1,4 +1,5 @@
-import { addScaled, gmres, size } from './gmres.ts';
+import { gmres } from './gmres.ts';
+import { addScaled, size } from './vectors.ts';
 
 /** x ↦ g(x) whose fixed point is wanted, in real vectors of one length. */
 export interface FixedPoint {

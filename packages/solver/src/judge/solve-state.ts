@@ -2,10 +2,12 @@ import { type Refusal, refusal, type Sink, type Stamped, stamp } from '../networ
 import type { Core } from './core.ts';
 import type { Credits } from './credits.ts';
 import type { Demand } from './demand.ts';
-import { injectionOf } from './injection.ts';
+import { type Injection, injectionOf } from './injection.ts';
+import { Mixer } from './mixer.ts';
 import { newton } from './newton.ts';
 import { notServed } from './not-served.ts';
 import { ampsOf, type Flow, type SinkRule, sinkAdmittance, sinkCurrent } from './sink-current.ts';
+import { addScaled } from './vectors.ts';
 import { type Volts, zeroVolts } from './volts.ts';
 
 /** A solved state of the whole network. */
@@ -18,7 +20,9 @@ export interface State {
 
 /** Rounds stop at this share of the largest voltage. */
 const SETTLED = 1e-10;
-/** After so many plain rounds the rest is reckoned; more than `MANY` to come are left to Newton's method. */
+/** Rounds are mixed with those before once they move by less than this share of the last. */
+const MIXED = 0.5;
+/** After so many rounds the rest is reckoned; more than `MANY` to come are left to Newton's method. */
 const RECKONED = 6;
 const MANY = 12;
 /** Further rounds sharpen a settled state until rounding stops them. */
@@ -52,8 +56,8 @@ export const admittanceIn = (core: Core, demand: Demand) => (sink: Sink) =>
 
 /**
  * Solves the network for a demand on a matrix that is stamped for it. One solve where every current is fixed; else
- * current injection with the factor kept, to max|ΔV| ≤ 1e-10·max|V|: plain rounds while they close in, Newton's method
- * where they are slow. Refused where the mismatch stops falling, naming the load that asks for the most: never a last
+ * current injection with the factor kept, to max|ΔV| ≤ 1e-10·max|V|: rounds while they close in, Newton's method where
+ * they are slow. Refused where the mismatch stops falling, naming the load that asks for the most: never a last
  * iterate.
  */
 export function solveState(
@@ -92,8 +96,8 @@ export function solveState(
   const volts = from ? { re: from.re.slice(), im: from.im.slice() } : zeroVolts(network);
   const injection = injectionOf(network, stamped, following, fixed, volts);
 
-  let moved = injection.round();
   if (following.length === 0) {
+    const moved = injection.round();
     if (!Number.isFinite(moved) && n > 0 && Number.isNaN(volts.re[nodeOf[0]!]!))
       return refusal(
         'network',
@@ -101,32 +105,50 @@ export function solveState(
       );
     return { demand, volts, stamped, iterations: 1 };
   }
-  let plain = 1;
+  const settled = settle(injection, 2 * n);
+  return settled.ok
+    ? { demand, volts, stamped, iterations: settled.iterations }
+    : notServed(core, stamped, following, volts, settled.mismatch);
+}
+
+/** Brings the volts of an injection to rest, or to where their mismatch stops falling. */
+function settle(
+  injection: Injection,
+  length: number,
+): { ok: true; iterations: number } | { ok: false; mismatch: number } {
+  const { fixedPoint } = injection;
+  const x = new Float64Array(length);
+  const f = new Float64Array(length);
+  const mixer = new Mixer();
+  injection.write(x);
+  let before = Number.POSITIVE_INFINITY;
+  let moved = fixedPoint.mismatch(x, f);
   while (!(moved <= SETTLED)) {
-    const before = moved;
-    moved = injection.round();
-    plain++;
-    if (plain < RECKONED || moved <= SETTLED) continue;
     const closing = moved < before;
-    if (closing && Math.log(SETTLED / moved) / Math.log(moved / before) <= MANY) continue;
-    if (!closing) {
-      volts.re.fill(0);
-      volts.im.fill(0);
+    const toCome = Math.log(SETTLED / moved) / Math.log(moved / before);
+    if (injection.solves() >= RECKONED && !(closing && toCome <= MANY)) {
+      if (!closing) x.fill(0);
+      const { ok, mismatch } = newton(fixedPoint, x, SETTLED);
+      injection.read(x);
+      return ok ? { ok, iterations: injection.solves() } : { ok, mismatch };
     }
-    const x = new Float64Array(2 * n);
-    injection.write(x);
-    const { ok, mismatch } = newton(injection.fixedPoint, x, SETTLED);
-    injection.read(x);
-    if (!ok) return notServed(core, stamped, following, volts, mismatch);
-    return { demand, volts, stamped, iterations: injection.solves() };
+    mixer.advance(x, f, !(moved < MIXED * before));
+    before = moved;
+    moved = fixedPoint.mismatch(x, f);
   }
   const iterations = injection.solves();
+  const best = x.slice();
+  addScaled(best, 1, f);
   for (let k = 0; k < SHARPENING && moved > SHARP; k++) {
-    const next = injection.round();
+    mixer.advance(x, f, false);
+    const next = fixedPoint.mismatch(x, f);
     if (!(next < moved)) break;
     moved = next;
+    best.set(x);
+    addScaled(best, 1, f);
   }
-  return { demand, volts, stamped, iterations };
+  injection.read(best);
+  return { ok: true, iterations };
 }
 
 /** Stamps for a demand and solves it. */

@@ -1,5 +1,6 @@
 import type { Phasor } from '../job/index.ts';
-import { addScaled, gmres, size } from '../judge/gmres.ts';
+import { gmres } from '../judge/gmres.ts';
+import { addScaled, size } from '../judge/vectors.ts';
 import { type PathSolver, solve } from '../linear/index.ts';
 import type { LoadState } from './load-states.ts';
 import type { Follower } from './slopes.ts';
