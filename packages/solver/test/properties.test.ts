@@ -2,7 +2,7 @@ import type { JobFile, Solution } from '@farlug/solver/job';
 import { SCENARIOS } from '@farlug/solver/job';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { epsilonOf, outcomeOf, runs, seeds } from './support/against-dense.ts';
+import { outcomeOf, runs, seeds } from './support/against-dense.ts';
 import { randomFrom } from './support/random.ts';
 import { randomJob, type Wanted } from './support/random-job.ts';
 import { SOLVERS } from './support/solvers.ts';
@@ -37,7 +37,7 @@ describe('laws of the solution', () => {
         // The largest power that flows anywhere: between unequal sources it is more than what is consumed.
         const most = Math.max(...solution.runs.flatMap((run) => Object.values(run.amps ?? {})), 1);
         const scale = Math.max(Math.abs(sourceWatts), Math.abs(loadWatts), scaleOf(job) * most);
-        expect(Math.abs(sourceWatts - loadWatts - lossWatts)).toBeLessThan(epsilonOf(job) * scale);
+        expect(Math.abs(sourceWatts - loadWatts - lossWatts)).toBeLessThan(1e-9 * scale);
         expect(kclResidual).toBeLessThan(1e-9);
       }),
       runs(40),

@@ -3,6 +3,7 @@ import { ampacityAwg, ampacityMm2, conductorImpedance, motorAmps } from '@farlug
 import { describe, expect, it } from 'vitest';
 import { thermalOf } from './dense/ampacity.ts';
 import { conductorOhms } from './dense/conductors.ts';
+import { D } from './dense/decimal.ts';
 import { loadSize } from './dense/load-size.ts';
 import { jobFile } from './support/job-file.ts';
 import { reference } from './support/reference.ts';
@@ -78,8 +79,8 @@ describe('conductor ohms beside a second reading of the reference tables', () =>
           });
           if (!ours.ok) throw new Error(`${material} ${size}: ${ours.message}`);
           const second = theirs(size, material, raceway, frequency, temperature);
-          near(ours.rOhmPerM, second.re, `r of ${material} ${size}`);
-          near(ours.xOhmPerM, second.im, `x of ${material} ${size}`);
+          near(ours.rOhmPerM, second.re.toNumber(), `r of ${material} ${size}`);
+          near(ours.xOhmPerM, second.im.toNumber(), `x of ${material} ${size}`);
           compared++;
         }
       }
@@ -113,7 +114,7 @@ describe('full-load amps beside a second reading', () => {
       for (const bundled of [1, 3, 4, 9, 10, 50]) {
         const job = run('2 AWG', null, insulation, bundled);
         const ours = ampacityAwg({ material: 'copper', size: '2 AWG', columnC: insulation, bundled });
-        expect(ours.ok && ours.amps).toBeCloseTo(thermalOf(job, job.runs[0]!, 'L1').fullAmps, 9);
+        expect(ours.ok && ours.amps).toBeCloseTo(thermalOf(job, job.runs[0]!, 'L1').fullAmps.toNumber(), 9);
       }
     for (const insulation of [70, 90] as const)
       for (const circuits of [1, 2, 6, 9]) {
@@ -126,7 +127,7 @@ describe('full-load amps beside a second reading', () => {
           loaded: 3,
           circuits,
         });
-        expect(ours.ok && ours.amps).toBeCloseTo(thermalOf(job, job.runs[0]!, 'L1').fullAmps, 9);
+        expect(ours.ok && ours.amps).toBeCloseTo(thermalOf(job, job.runs[0]!, 'L1').fullAmps.toNumber(), 9);
       }
   });
 
@@ -147,6 +148,6 @@ describe('full-load amps beside a second reading', () => {
       }),
     );
     const ours = motorAmps({ hp: 1.5, phases: three ? 3 : 1, volts });
-    expect(ours.ok && ours.amps).toBe(loadSize(job, job.loads[0]!, volts).amps);
+    expect(ours.ok && ours.amps).toBe(loadSize(job, job.loads[0]!, D(volts)).amps.toNumber());
   });
 });

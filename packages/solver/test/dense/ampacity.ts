@@ -1,6 +1,7 @@
 import type { Conductor, Job, Run } from '@farlug/solver/job';
 import { reference } from '../support/reference.ts';
 import { sizeOf } from './conductors.ts';
+import { D, type Decimal } from './decimal.ts';
 
 type Cell = number | null;
 interface Adjustment {
@@ -25,12 +26,19 @@ const iec = reference<{
 
 /** What the operating-temperature formula of model.md 3 takes from the tables, for one conductor. */
 export interface Thermal {
-  ambient: number;
-  rated: number;
-  referenceAmbient: number;
-  /** Iz·Cg, amps per set. */
-  fullAmps: number;
+  ambient: Decimal;
+  rated: Decimal;
+  referenceAmbient: Decimal;
+  /** Iz·Cg, amps of all sets. */
+  fullAmps: Decimal;
 }
+
+/** T = Ta + (Tr − Tref)·(I/(Iz·Cg))² */
+export const celsiusAt = (thermal: Thermal, amps: Decimal): Decimal =>
+  thermal.rated
+    .minus(thermal.referenceAmbient)
+    .times(amps.div(thermal.fullAmps).pow(2))
+    .plus(thermal.ambient);
 
 export const thermalOf = (job: Job, run: Run, conductor: Conductor): Thermal => {
   const size = sizeOf(run, conductor);
@@ -45,7 +53,12 @@ export const thermalOf = (job: Job, run: Run, conductor: Conductor): Thermal => 
           (run.bundled ?? 1) >= r.ccc_min && (run.bundled ?? 1) <= (r.ccc_max ?? Number.POSITIVE_INFINITY),
       )?.percent ?? 100;
     const full = firm ? firm.ampacity! : row![column]!;
-    return { ambient: run.ambient ?? 30, rated, referenceAmbient: 30, fullAmps: (full * percent) / 100 };
+    return {
+      ambient: D(run.ambient ?? 30),
+      rated: D(rated),
+      referenceAmbient: D(30),
+      fullAmps: D(full).times(percent).div(100).times(run.sets),
+    };
   }
   const rated = run.insulation ?? 70;
   const loaded = run.conductors.filter((c) => c !== 'N').length === 3 ? 3 : 2;
@@ -60,5 +73,10 @@ export const thermalOf = (job: Job, run: Run, conductor: Conductor): Thermal => 
   const grouped = iec.grouping_B_52_17.rows[0]!.factors[String(run.bundled ?? 1)]!;
   const inGround = method === 'D1' || method === 'D2';
   const referenceAmbient = inGround ? 20 : 30;
-  return { ambient: run.ambient ?? 30, rated, referenceAmbient, fullAmps: row[method]! * grouped };
+  return {
+    ambient: D(run.ambient ?? 30),
+    rated: D(rated),
+    referenceAmbient: D(referenceAmbient),
+    fullAmps: D(row[method]!).times(grouped).times(run.sets),
+  };
 };

@@ -1,60 +1,83 @@
-import { mul, polar, scale, unit } from './complex.ts';
+import { mul, scale } from './complex.ts';
+import { D, type Decimal, NIL, UNITY } from './decimal.ts';
+import type { Sink } from './equations.ts';
 import type { ServedLoad } from './sinks.ts';
-import { type FixedSink, NotServed } from './solve.ts';
 
-/** An extra current at a load's own power factor and nominal angle, `amps` per line, at one of its places. */
-export const extraSinks = (item: ServedLoad, place: string, amps: number): FixedSink[] =>
+/** One ampere per line at a load's own power factor and nominal angle, at one of its places. */
+export const extraSinks = (item: ServedLoad, place: string): Sink[] =>
   item.pieces
     .filter((piece) => piece.plus.startsWith(`${place}|`))
-    .map((piece) => ({
-      plus: piece.plus,
-      minus: piece.minus,
-      amps: mul(
-        unit(piece.nominal),
-        scale(polar(1, -item.size.lag), amps * piece.share * item.places.length),
-      ),
+    .map(({ plus, minus, direction, share }) => ({
+      plus,
+      minus,
+      amps: scale(mul(direction, item.size.lag), share.times(item.places.length)),
     }));
 
 const NEVER = 1e7;
+const MOST_ROUNDS = 300;
+/** The amps are known to this share of themselves, or where the excess is as good as nothing. */
+const CLOSE = '1e-22';
+/** How often a step towards where the network can be served no more is halved. */
+const HALVINGS = 12;
+
+/** The largest extra current, and what ends it; `amps` of a collapse are the largest that were seen to be served. */
+export type Headroom =
+  | { edge: 'limit'; amps: Decimal }
+  | { edge: 'collapse'; amps: Decimal; unserved: Decimal }
+  | { edge: 'none' };
 
 /**
- * The amps at which `excess` first reaches zero, by doubling and false position (Illinois); 0 where it is above
- * already, `null` where it never gets there. A network that cannot be solved counts as over.
+ * The amps at which `excess` first reaches zero, by doubling and false position (Illinois); 0 where it is above already.
+ * `excess` is `null` where the network cannot be served.
  */
-export const largestBefore = (excess: (amps: number) => number): number | null => {
-  const measure = (amps: number): number => {
-    try {
-      return excess(amps);
-    } catch (error) {
-      if (error instanceof NotServed) return Number.POSITIVE_INFINITY;
-      throw error;
-    }
-  };
-  let low = 0;
-  let atLow = measure(0);
-  if (atLow >= 0) return 0;
-  let high = 1;
-  let atHigh = measure(high);
-  while (atHigh < 0) {
+export const largestBefore = (excess: (amps: Decimal) => Decimal | null): Headroom => {
+  let low = NIL;
+  let atLow = excess(low)!;
+  if (atLow.gte(0)) return { edge: 'limit', amps: NIL };
+  let high = UNITY;
+  let atHigh = excess(high);
+  while (atHigh?.lt(0)) {
     [low, atLow] = [high, atHigh];
-    high *= 2;
-    if (high > NEVER) return null;
-    atHigh = measure(high);
+    high = high.times(2);
+    if (high.gt(NEVER)) return { edge: 'none' };
+    atHigh = excess(high);
   }
+  for (let halving = 0; atHigh === null || atHigh.lt(0); halving++) {
+    if (halving === HALVINGS) return { edge: 'collapse', amps: low, unserved: high };
+    const middle = low.plus(high).div(2);
+    const value = excess(middle);
+    if (value?.lt(0)) [low, atLow] = [middle, value];
+    else [high, atHigh] = [middle, value];
+  }
+  return { edge: 'limit', amps: between(excess, low, atLow, high, atHigh) };
+};
+
+/** Where the excess changes its sign between two amps. */
+const between = (
+  excess: (amps: Decimal) => Decimal | null,
+  from: Decimal,
+  atFrom: Decimal,
+  to: Decimal,
+  atTo: Decimal,
+): Decimal => {
+  let [low, atLow, high, atHigh] = [from, atFrom, to, atTo];
   let side = 0;
-  for (let round = 0; round < 200 && high - low > 1e-11 * high; round++) {
-    const slope = Number.isFinite(atHigh) && round % 20 !== 19;
-    const middle = slope ? low + ((high - low) * -atLow) / (atHigh - atLow) : (low + high) / 2;
-    const value = measure(middle);
-    if (Math.abs(value) < 1e-13) return middle;
-    if (value >= 0) {
-      [high, atHigh] = [middle, value];
-      if (side === 1) atLow /= 2;
-      side = 1;
-    } else {
+  for (let round = 1; round < MOST_ROUNDS; round++) {
+    const width = high.minus(low);
+    if (width.lte(high.times(CLOSE))) break;
+    const share = round % 8 === 0 ? D('0.5') : atLow.neg().div(atHigh.minus(atLow));
+    const middle = low.plus(width.times(share));
+    const value = excess(middle);
+    if (value === null) throw new Error(`${middle} A cannot be served, ${high} A can`);
+    if (value.abs().lte(CLOSE)) return middle;
+    if (value.lt(0)) {
       [low, atLow] = [middle, value];
-      if (side === -1 && Number.isFinite(atHigh)) atHigh /= 2;
+      if (side === -1) atHigh = atHigh.div(2);
       side = -1;
+    } else {
+      [high, atHigh] = [middle, value];
+      if (side === 1) atLow = atLow.div(2);
+      side = 1;
     }
   }
   return low;

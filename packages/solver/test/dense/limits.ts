@@ -1,4 +1,5 @@
 import type { Job, Load, Verdict } from '@farlug/solver/job';
+import { D, type Decimal, largest, NIL, sumOf } from './decimal.ts';
 import type { Reading, Split } from './split.ts';
 
 export interface Judgement {
@@ -7,31 +8,34 @@ export interface Judgement {
   broken: string[];
   /** Limits that apply, met or not. */
   applied: string[];
-  total: number;
-  totalLimit: number | null;
+  total: Decimal;
+  totalLimit: Decimal | null;
   /** How far the worst limit that more current can break is overstepped, in its own unit; null without one. */
-  excess: number | null;
+  excess: Decimal | null;
 }
 
 /** More than 1e-9 relative above. */
-export const exceeds = (value: number, limit: number): boolean =>
-  value - limit > 1e-9 * Math.max(Math.abs(value), Math.abs(limit));
+export const exceeds = (value: Decimal, limit: Decimal): boolean =>
+  value.minus(limit).gt(largest([value.abs(), limit.abs()]).times('1e-9'));
 
-const voltsLimit = (limit: number | Record<string, number> | null, nominal: number): number | null => {
-  if (limit === null || typeof limit === 'number') return limit;
-  return limit[String(Math.round(nominal))] ?? null;
+const voltsLimit = (limit: number | Record<string, number> | null, nominal: Decimal): Decimal | null => {
+  const volts = limit === null || typeof limit === 'number' ? limit : limit[nominal.toFixed(0)];
+  return volts == null ? null : D(volts);
 };
 
-export const totalOf = (job: Job, split: Split): number => {
+const totalOf = (job: Job, split: Split): Decimal => {
   const { includeService, includeTransformer, includeSource } = job.limits;
-  return (
-    split.feeder +
-    split.branch +
-    (includeService ? split.service : 0) +
-    (includeTransformer ? split.transformer : 0) +
-    (includeSource ? split.source : 0)
-  );
+  return sumOf([
+    split.feeder,
+    split.branch,
+    includeService ? split.service : NIL,
+    includeTransformer ? split.transformer : NIL,
+    includeSource ? split.source : NIL,
+  ]);
 };
+
+/** A limit or a share of rated volts as a figure. */
+const figure = (value: number | null | undefined): Decimal | null => (value == null ? null : D(value));
 
 /** All limits of a load on one set of figures; `starting` is its percent while starting, null where not judged. */
 export const judge = (
@@ -39,32 +43,35 @@ export const judge = (
   load: Load,
   reading: Reading,
   split: Split,
-  pathM: number,
-  starting: number | null,
+  pathM: Decimal,
+  starting: Decimal | null,
 ): Judgement => {
   const { limits } = job;
   const own = limits.byClass[load.class];
-  const feeder = own?.feeder ?? limits.feeder;
-  const branch = own?.branch ?? limits.branch;
-  const base = own?.total ?? limits.total;
-  const longer = limits.longRun ? Math.min(0.5, 0.005 * Math.max(0, pathM - 100)) : 0;
-  const totalLimit = base === null ? null : base + longer;
+  const feeder = figure(own?.feeder ?? limits.feeder);
+  const branch = figure(own?.branch ?? limits.branch);
+  const base = figure(own?.total ?? limits.total);
+  const beyond = largest([NIL, pathM.minus(100)]).times('0.005');
+  const longer = limits.longRun ? (beyond.gt('0.5') ? D('0.5') : beyond) : NIL;
+  const totalLimit = base?.plus(longer) ?? null;
   const total = totalOf(job, split);
   const lowest = voltsLimit(limits.lowestVolts, reading.nominalVolts);
   const highest = voltsLimit(limits.highestVolts, reading.nominalVolts);
-  const rated = load.ratedVolts;
-  const low = rated !== null && limits.rating?.low != null ? (rated * limits.rating.low) / 100 : null;
-  const high = rated !== null && limits.rating?.high != null ? (rated * limits.rating.high) / 100 : null;
+  const rated = (percent: Decimal | null): Decimal | null =>
+    percent === null || load.ratedVolts === null ? null : percent.times(load.ratedVolts).div(100);
+  const low = rated(figure(limits.rating?.low));
+  const high = rated(figure(limits.rating?.high));
+  const atLeast = (limit: Decimal | null) => (limit === null ? null : reading.volts.neg());
 
-  const checks: [name: string, value: number | null, limit: number | null][] = [
+  const checks: [name: string, value: Decimal | null, limit: Decimal | null][] = [
     ['feeder', split.feeder, feeder],
     ['branch', split.branch, branch],
     ['total', total, totalLimit],
-    ['starting', starting, limits.starting],
-    ['rise', -total, limits.rise],
-    ['lowest volts', lowest === null ? null : -reading.volts, lowest === null ? null : -lowest],
+    ['starting', starting, figure(limits.starting)],
+    ['rise', total.neg(), figure(limits.rise)],
+    ['lowest volts', atLeast(lowest), lowest?.neg() ?? null],
     ['highest volts', reading.volts, highest],
-    ['rating', low === null ? null : -reading.volts, low === null ? null : -low],
+    ['rating', atLeast(low), low?.neg() ?? null],
     ['rating', reading.volts, high],
   ];
   const applied = checks.filter(([, value, limit]) => value !== null && limit !== null);
@@ -79,6 +86,6 @@ export const judge = (
           : 'within';
   const breakable = applied.filter(([name]) => name !== 'starting' && name !== 'rise');
   const excess =
-    breakable.length === 0 ? null : Math.max(...breakable.map(([, value, limit]) => value! - limit!));
+    breakable.length === 0 ? null : largest(breakable.map(([, value, limit]) => value!.minus(limit!)));
   return { verdict, broken, applied: applied.map(([name]) => name), total, totalLimit, excess };
 };

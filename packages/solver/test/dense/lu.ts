@@ -1,76 +1,65 @@
-import type { Complex } from './complex.ts';
+import { type Complex, inverse, isZero, mul, neg, sub, ZERO } from './complex.ts';
+import { type Decimal, largest, NIL } from './decimal.ts';
 
-/** A full complex matrix and its factors: Gaussian elimination with partial pivoting, nothing else. */
+/** A full square matrix, row by row; what is missing is zero and costs nothing. */
+export type Matrix = (Complex | undefined)[][];
+
+/** Gaussian elimination: `order` holds the rows as they were taken, `pivots` one over each diagonal entry. */
 export interface Factors {
-  readonly n: number;
-  readonly re: Float64Array;
-  readonly im: Float64Array;
-  readonly rows: number[];
+  readonly rows: Matrix;
+  readonly order: number[];
+  readonly pivots: Complex[];
 }
 
-/** Factors `matrix` (n × n, row by row) in place; throws where it is singular. */
-export const factor = (n: number, re: Float64Array, im: Float64Array): Factors => {
-  const rows = Array.from({ length: n }, (_, k) => k);
+/** A diagonal entry is taken unless another of its column is so many times as large: it keeps zeros where they are. */
+const MUCH_LARGER = 1000;
+/** Below this share of the largest entry nothing is left of fifty digits. */
+const NOTHING = '1e-40';
+
+const size = (a: Complex | undefined): Decimal => (a ? a.re.abs().plus(a.im.abs()) : NIL);
+
+/** Factors `rows` in place; throws where they are singular. */
+export const factor = (rows: Matrix): Factors => {
+  const n = rows.length;
+  const order = rows.map((_, k) => k);
+  const pivots: Complex[] = [];
+  const top = n === 0 ? NIL : largest(rows.flat().map(size));
   for (let k = 0; k < n; k++) {
     let best = k;
+    let most = size(rows[order[k]!]![k]).times(MUCH_LARGER);
     for (let i = k + 1; i < n; i++) {
-      if (size(re, im, rows[i]! * n + k) > size(re, im, rows[best]! * n + k)) best = i;
+      const here = size(rows[order[i]!]![k]);
+      if (here.gt(most)) [best, most] = [i, here];
     }
-    [rows[k], rows[best]] = [rows[best]!, rows[k]!];
-    const pivot = rows[k]! * n;
-    const pr = re[pivot + k]!;
-    const pi = im[pivot + k]!;
-    const square = pr * pr + pi * pi;
-    if (!(square > 0)) throw new Error(`singular at column ${k}`);
+    [order[k], order[best]] = [order[best]!, order[k]!];
+    const pivot = rows[order[k]!]!;
+    if (!size(pivot[k]).gt(top.times(NOTHING))) throw new Error(`singular at column ${k}`);
+    const each = inverse(pivot[k]!);
+    pivots.push(each);
     for (let i = k + 1; i < n; i++) {
-      const row = rows[i]! * n;
-      const ar = re[row + k]!;
-      const ai = im[row + k]!;
-      if (ar === 0 && ai === 0) continue;
-      const lr = (ar * pr + ai * pi) / square;
-      const li = (ai * pr - ar * pi) / square;
-      re[row + k] = lr;
-      im[row + k] = li;
+      const row = rows[order[i]!]!;
+      const entry = row[k];
+      if (!entry || isZero(entry)) continue;
+      const share = mul(entry, each);
+      row[k] = share;
       for (let j = k + 1; j < n; j++) {
-        const ur = re[pivot + j]!;
-        const ui = im[pivot + j]!;
-        re[row + j] = re[row + j]! - (lr * ur - li * ui);
-        im[row + j] = im[row + j]! - (lr * ui + li * ur);
+        const above = pivot[j];
+        if (above) row[j] = row[j] ? sub(row[j]!, mul(share, above)) : neg(mul(share, above));
       }
     }
   }
-  return { n, re, im, rows };
+  return { rows, order, pivots };
 };
 
-const size = (re: Float64Array, im: Float64Array, at: number): number => Math.hypot(re[at]!, im[at]!);
-
-export const backSolve = ({ n, re, im, rows }: Factors, right: readonly Complex[]): Complex[] => {
-  const xr = new Float64Array(n);
-  const xi = new Float64Array(n);
-  for (let i = 0; i < n; i++) {
-    const row = rows[i]! * n;
-    let sr = right[rows[i]!]!.re;
-    let si = right[rows[i]!]!.im;
-    for (let j = 0; j < i; j++) {
-      sr -= re[row + j]! * xr[j]! - im[row + j]! * xi[j]!;
-      si -= re[row + j]! * xi[j]! + im[row + j]! * xr[j]!;
-    }
-    xr[i] = sr;
-    xi[i] = si;
-  }
-  for (let i = n - 1; i >= 0; i--) {
-    const row = rows[i]! * n;
-    let sr = xr[i]!;
-    let si = xi[i]!;
-    for (let j = i + 1; j < n; j++) {
-      sr -= re[row + j]! * xr[j]! - im[row + j]! * xi[j]!;
-      si -= re[row + j]! * xi[j]! + im[row + j]! * xr[j]!;
-    }
-    const dr = re[row + i]!;
-    const di = im[row + i]!;
-    const square = dr * dr + di * di;
-    xr[i] = (sr * dr + si * di) / square;
-    xi[i] = (si * dr - sr * di) / square;
-  }
-  return Array.from({ length: n }, (_, k) => ({ re: xr[k]!, im: xi[k]! }));
+export const backSolve = ({ rows, order, pivots }: Factors, right: readonly Complex[]): Complex[] => {
+  const n = rows.length;
+  const x: Complex[] = Array.from({ length: n }, () => ZERO);
+  const without = (row: Matrix[number], from: number, to: number, start: Complex): Complex => {
+    let sum = start;
+    for (let j = from; j < to; j++) if (row[j] && !isZero(x[j]!)) sum = sub(sum, mul(row[j]!, x[j]!));
+    return sum;
+  };
+  for (let i = 0; i < n; i++) x[i] = without(rows[order[i]!]!, 0, i, right[order[i]!]!);
+  for (let i = n - 1; i >= 0; i--) x[i] = mul(without(rows[order[i]!]!, i + 1, n, x[i]!), pivots[i]!);
+  return x;
 };

@@ -1,9 +1,12 @@
 import type { Conductor, Job, Run, Scenario } from '@farlug/solver/job';
 import { type Circuit, circuitsOf } from './circuits.ts';
 import { type Complex, scale } from './complex.ts';
+import { D, type Decimal, NIL, UNITY } from './decimal.ts';
+import type { Sink } from './equations.ts';
+import { lagOf } from './load-size.ts';
 import { EARTH } from './network.ts';
 import type { Drawn, ServedLoad } from './sinks.ts';
-import { type FixedSink, NotServed, type Solved, type State, solveState } from './solve.ts';
+import { NotServed, type Solved, type State, stateSolver } from './solve.ts';
 import { flood, nodeOf, supplyAt, type Topology } from './topology.ts';
 
 export interface Turn {
@@ -15,39 +18,45 @@ export interface Turn {
 }
 
 export interface Scenarios {
+  /** Some current follows the voltages. */
+  iterated: boolean;
   design: Solved;
-  whole: (scenario: Scenario) => Solved;
+  /** What diversity gives back in `design`. */
+  credits: Sink[];
+  /** The state that buses, runs and totals are of: `design`, or all loads at once. */
+  shown: (scenario: Scenario) => Solved;
   turns: Turn[];
   starting: Map<string, Solved>;
 }
 
-const isGeneration = ({ size }: ServedLoad): boolean => size.amps < 0;
+const isGeneration = ({ size }: ServedLoad): boolean => size.amps.lt(0);
 const behaviourOf = (job: Job, { load }: ServedLoad): Drawn['behaviour'] =>
   load.behaviour === 'current' ? job.angle : load.behaviour;
 
 /** Line amps at design demand: `demandVa` speaks for all quantity and wins over `demand`. */
-const designAmps = (item: ServedLoad): number => {
-  if (isGeneration(item)) return 0;
+const designAmps = (item: ServedLoad): Decimal => {
+  if (isGeneration(item)) return NIL;
   const { load, size } = item;
-  return load.demandVa !== null ? load.demandVa / size.vaPerAmp : size.amps * load.demand;
+  return load.demandVa !== null ? D(load.demandVa).div(size.vaPerAmp) : size.amps.times(load.demand);
 };
-const fullAmps = (item: ServedLoad): number => (isGeneration(item) ? 0 : item.size.amps);
-const lightAmps = (item: ServedLoad): number =>
-  isGeneration(item) ? item.size.amps : item.size.amps * item.load.minimum;
+const fullAmps = (item: ServedLoad): Decimal => (isGeneration(item) ? NIL : item.size.amps);
+const lightAmps = (item: ServedLoad): Decimal =>
+  isGeneration(item) ? item.size.amps : item.size.amps.times(item.load.minimum);
 
 export const scenariosOf = (job: Job, topology: Topology, loads: ServedLoad[]): Scenarios => {
-  const stateOf = (amps: (item: ServedLoad) => number, fixedSinks: FixedSink[]): State => ({
+  const stateOf = (amps: (item: ServedLoad) => Decimal, given: Sink[]): State => ({
     drawn: new Map(
       loads.map((item) => [
         item.load.id,
         { amps: amps(item), lag: item.size.lag, behaviour: behaviourOf(job, item) },
       ]),
     ),
-    fixedSinks,
+    credits: given,
   });
+  const solved = stateSolver(job, topology, loads);
   const solve = (state: State, what: string): Solved => {
     try {
-      return solveState(job, topology, loads, state);
+      return solved(state);
     } catch (error) {
       if (error instanceof NotServed) throw new NotServed(`${error.message} (${what})`);
       throw error;
@@ -66,7 +75,7 @@ export const scenariosOf = (job: Job, topology: Topology, loads: ServedLoad[]): 
     return labels.map((label) => {
       const on = own.filter((item) => label === 'all' || lineOf(item) === null || lineOf(item) === label);
       const amps = (item: ServedLoad) =>
-        on.includes(item) ? fullAmps(item) : own.includes(item) ? 0 : designAmps(item);
+        on.includes(item) ? fullAmps(item) : own.includes(item) ? NIL : designAmps(item);
       return {
         circuit,
         label,
@@ -82,40 +91,45 @@ export const scenariosOf = (job: Job, topology: Topology, loads: ServedLoad[]): 
       .map((item) => {
         const start = item.load.starting!;
         const state = stateOf(designAmps, credits);
-        const pf = job.frequency === 0 ? 1 : start.powerFactor;
         state.drawn.set(item.load.id, {
-          amps: start.amps * item.load.quantity,
-          lag: (Math.acos(pf) * 180) / Math.PI,
+          amps: D(start.amps).times(item.load.quantity),
+          lag: lagOf(job.frequency === 0 ? 1 : start.powerFactor),
           behaviour: job.angle,
         });
         return [item.load.id, solve(state, `starting of ${item.load.id}`)] as const;
       }),
   );
 
+  let whole: Solved | null = null;
+  const iterated =
+    design.elements.some((element) => element.warm) ||
+    loads.some((item) => ['power', 'local'].includes(behaviourOf(job, item)));
   return {
+    iterated,
     design,
+    credits,
     turns,
     starting,
-    whole: (scenario) => {
-      if (scenario === 'everything-on') return solve(stateOf(fullAmps, []), scenario);
-      if (scenario === 'light') return solve(stateOf(lightAmps, []), scenario);
-      return design;
+    shown: (scenario) => {
+      if (scenario !== 'everything-on' && scenario !== 'light') return design;
+      whole ??= solve(stateOf(scenario === 'light' ? lightAmps : fullAmps, []), scenario);
+      return whole;
     },
   };
 };
 
 /** What diversity gives back at the far end of each feeder, feeders nearest the loads first (model.md 5). */
-export const creditsOf = (job: Job, topology: Topology, loads: ServedLoad[]): FixedSink[] => {
+const creditsOf = (job: Job, topology: Topology, loads: ServedLoad[]): Sink[] => {
   const diverse = job.runs
     .filter((run) => run.demand < 1 && !run.open)
     .map((run) => ({ run, ...farSide(job, run) }))
     .filter(({ far }) => topology.supply.has(topology.region.get(far)!))
     .sort((a, b) => a.beyond.size - b.beyond.size);
-  const credits: FixedSink[] = [];
+  const credits: Sink[] = [];
   for (const { run, far, beyond } of diverse) {
     const flow = flowInto(job, topology, loads, run, far, beyond, credits);
     for (const c of run.conductors)
-      credits.push({ plus: EARTH, minus: nodeOf(far, c), amps: scale(flow(c), 1 - run.demand) });
+      credits.push({ plus: EARTH, minus: nodeOf(far, c), amps: scale(flow(c), UNITY.minus(run.demand)) });
   }
   return credits;
 };
@@ -143,7 +157,7 @@ const flowInto = (
   run: Run,
   far: string,
   beyond: Set<string>,
-  credits: FixedSink[],
+  credits: Sink[],
 ): ((conductor: Conductor) => Complex) => {
   const supply = supplyAt(topology, far)!;
   const piece: Job = {
@@ -156,21 +170,21 @@ const flowInto = (
     transformers: job.transformers.filter((t) => beyond.has(t.from)),
   };
   const inside = loads.filter((item) => item.places.every((bus) => beyond.has(bus)));
-  const within = ({ minus }: FixedSink) => beyond.has(minus.slice(0, minus.lastIndexOf('|')));
-  const solved = solveState(
+  const within = ({ minus }: Sink) => beyond.has(minus.slice(0, minus.lastIndexOf('|')));
+  const held = new Map(run.conductors.map((c) => [nodeOf(far, c), supply.nominal[c]!]));
+  const solved = stateSolver(
     piece,
     topology,
     inside,
-    {
-      drawn: new Map(
-        inside.map((item) => [
-          item.load.id,
-          { amps: designAmps(item), lag: item.size.lag, behaviour: 'nominal' },
-        ]),
-      ),
-      fixedSinks: credits.filter(within),
-    },
-    new Map(run.conductors.map((c) => [nodeOf(far, c), supply.nominal[c]!])),
-  );
+    held,
+  )({
+    drawn: new Map(
+      inside.map((item) => [
+        item.load.id,
+        { amps: designAmps(item), lag: item.size.lag, behaviour: 'nominal' },
+      ]),
+    ),
+    credits: credits.filter(within),
+  });
   return (conductor) => solved.takenAt(nodeOf(far, conductor));
 };

@@ -1,5 +1,6 @@
 import type { Conductor, Job, Load } from '@farlug/solver/job';
-import { abs, type Complex, conj, div, mul, polar, scale, unit } from './complex.ts';
+import { abs, type Complex, conj, div, mul, scale, unit } from './complex.ts';
+import { type Decimal, ROOT3, UNITY } from './decimal.ts';
 import { type LoadSize, loadSize } from './load-size.ts';
 import { nodeOf, nominalBetween, supplyAt, type Topology } from './topology.ts';
 
@@ -7,9 +8,11 @@ import { nodeOf, nominalBetween, supplyAt, type Topology } from './topology.ts';
 export interface Piece {
   plus: string;
   minus: string;
-  nominal: Complex;
+  /** Nominal EMF between its ends: its size and its direction. */
+  volts: Decimal;
+  direction: Complex;
   /** Amps in this piece per line amp of the load. */
-  share: number;
+  share: Decimal;
 }
 
 /** A served load with its pieces and its nominal size. */
@@ -41,43 +44,49 @@ export const servedLoads = (job: Job, topology: Topology): ServedLoad[] =>
     if (run?.open || !nodes.every((node) => topology.live.has(node))) return [];
     const supply = supplyAt(topology, places[0]!)!;
     const nominalVolts = abs(nominalBetween(supply, ...sides[0]!));
-    const share = (load.terminals === 'three-phase' ? 1 / Math.sqrt(3) : 1) / places.length;
+    const share = (load.terminals === 'three-phase' ? UNITY.div(ROOT3) : UNITY).div(places.length);
+    const emfs = sides.map(([plus, minus]) => nominalBetween(supply, plus, minus));
     const pieces = places.flatMap((bus) =>
-      sides.map(([plus, minus]) => ({
+      sides.map(([plus, minus], k) => ({
         plus: nodeOf(bus, plus),
         minus: nodeOf(bus, minus),
-        nominal: nominalBetween(supply, plus, minus),
+        volts: abs(emfs[k]!),
+        direction: unit(emfs[k]!),
         share,
       })),
     );
     return [{ load, size: loadSize(job, load, nominalVolts), pieces, places }];
   });
 
-/** What a load does in one solve: its line amps (signed), lag in degrees, and how it follows the voltage. */
+/** What a load does in one solve: its line amps (signed), its lag, and how it follows the voltage. */
 export interface Drawn {
-  amps: number;
-  lag: number;
+  amps: Decimal;
+  lag: Complex;
   behaviour: 'nominal' | 'local' | 'power' | 'impedance';
 }
 
-/** Current out of `plus` of a piece at voltage `v` (impedance pieces sit in Y and draw none here). */
-export const pieceCurrent = (piece: Piece, drawn: Drawn, v: Complex): Complex => {
-  const amps = drawn.amps * piece.share;
+/** Whether the current depends on the voltage in a way that no matrix holds. */
+export const follows = ({ behaviour, amps }: Drawn): boolean =>
+  (behaviour === 'power' || behaviour === 'local') && !amps.isZero();
+
+/** Current out of `plus` of a piece at voltage `v` between its ends (given where the current depends on it). */
+export const pieceCurrent = (piece: Piece, drawn: Drawn, v: Complex | null): Complex => {
+  const amps = drawn.amps.times(piece.share);
   switch (drawn.behaviour) {
     case 'nominal':
-      return mul(unit(piece.nominal), polar(amps, -drawn.lag));
+      return mul(piece.direction, scale(drawn.lag, amps));
     case 'local':
-      return mul(unit(v), polar(amps, -drawn.lag));
+      return mul(unit(v!), scale(drawn.lag, amps));
     case 'power':
-      return conj(div(pieceVa(piece, drawn), v));
+      return conj(div(pieceVa(piece, drawn), v!));
     case 'impedance':
-      return { re: 0, im: 0 };
+      return mul(pieceAdmittance(piece, drawn), v!);
   }
 };
 
 const pieceVa = (piece: Piece, drawn: Drawn): Complex =>
-  polar(abs(piece.nominal) * drawn.amps * piece.share, drawn.lag);
+  scale(conj(drawn.lag), piece.volts.times(drawn.amps).times(piece.share));
 
 /** y = conj(S)/V² at nominal volts. */
 export const pieceAdmittance = (piece: Piece, drawn: Drawn): Complex =>
-  scale(conj(pieceVa(piece, drawn)), 1 / abs(piece.nominal) ** 2);
+  scale(conj(pieceVa(piece, drawn)), UNITY.div(piece.volts.times(piece.volts)));

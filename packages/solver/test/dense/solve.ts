@@ -1,261 +1,164 @@
-import type { Conductor, Job } from '@farlug/solver/job';
-import { type Thermal, thermalOf } from './ampacity.ts';
-import { abs, add, type Complex, mul, scale, sub, ZERO } from './complex.ts';
-import { backSolve, type Factors, factor } from './lu.ts';
-import { EARTH, type Element, type Network, networkOf } from './network.ts';
+import type { Job } from '@farlug/solver/job';
+import { add, type Complex, inverse, mul, scale, sub, ZERO } from './complex.ts';
+import type { Decimal } from './decimal.ts';
+import { type Equations, equationsOf, type Sink, unknownsOf } from './equations.ts';
+import { currentsOf, type Settled, settle } from './followers.ts';
+import { type Element, MINUS, type Network, networkOf, PLUS } from './network.ts';
 import { type Drawn, type Piece, pieceAdmittance, pieceCurrent, type ServedLoad } from './sinks.ts';
-import { flood, type Topology } from './topology.ts';
-
-/** A current that leaves the network at `plus` and returns at `minus`, whatever the voltages. */
-export interface FixedSink {
-  plus: string;
-  minus: string;
-  amps: Complex;
-}
+import type { Topology } from './topology.ts';
 
 export interface State {
   drawn: Map<string, Drawn>;
-  /** Credits of diversity and extra currents. */
-  fixedSinks: FixedSink[];
+  /** Credits of diversity, whatever the voltages. */
+  credits: Sink[];
 }
 
 export class NotServed extends Error {}
 
+/** Above this nothing conducts as its table says. */
+const HOTTEST_C = 2000;
+
+export type VoltageAt = (node: string) => Complex;
+
 export interface Solved {
-  network: Network;
-  voltage: (node: string) => Complex;
+  /** With the ohms of the temperatures that the state brings about. */
+  elements: Element[];
+  fixed: Network['fixed'];
+  voltage: VoltageAt;
   /** Current through an element in the sense of its u. */
   through: (element: Element) => Complex;
-  /** Response of all voltages to unit currents drawn as `sinks`, every EMF and load current set to zero. */
-  respond: (sinks: FixedSink[]) => (node: string) => Complex;
-  /** The same state with `extra` drawn as well, solved again. */
-  again: (extra: FixedSink[]) => Solved;
+  /** Response of all voltages to sinks, every EMF and load current set to zero. */
+  respond: (sinks: Sink[]) => VoltageAt;
+  /** Voltages of the same state with so many times `extra` drawn as well. */
+  with: (extra: Sink[]) => (times: Decimal) => VoltageAt;
   /** What flows from outside into the merged node that `node` belongs to. */
   takenAt: (node: string) => Complex;
   /** Current out of `plus` of a piece of a load, impedance loads included. */
   drawnBy: (load: ServedLoad, piece: Piece) => Complex;
 }
 
-type Celsius = Map<string, number>;
-const MOST_ROUNDS = 600;
-
-/** One network, one state, solved anew from nothing: dense, no superposition, iterated until nothing moves. */
-export const solveState = (
+/**
+ * Readies a job for one solve per state. Currents that follow the voltage, loads' and those that warmth brings about, are
+ * iterated all together until nothing moves in the first 26 digits. Nodes in `alsoHeld` stand at given voltages.
+ */
+export const stateSolver = (
   job: Job,
   topology: Topology,
   loads: ServedLoad[],
-  state: State,
-  held: ReadonlyMap<string, Complex> = new Map(),
-): Solved => {
-  const hot = new Map<string, Thermal>();
-  for (const run of job.runs) {
-    if (run.temperature !== 'operating' || run.open || run.ohms) continue;
-    for (const c of run.conductors) hot.set(`${run.id}|${c}`, thermalOf(job, run, c));
-  }
-  let celsius: Celsius = new Map([...hot].map(([key, thermal]) => [key, thermal.ambient]));
-  for (let round = 0; round < MOST_ROUNDS; round++) {
-    const solved = solveAt(job, topology, loads, state, celsius, held);
-    if (hot.size === 0) return solved;
-    const warm = (at: Celsius): Solved => ({
-      ...solveAt(job, topology, loads, state, at, held),
-      again: (extra) =>
-        solveState(job, topology, loads, { ...state, fixedSinks: [...state.fixedSinks, ...extra] }, held),
+  alsoHeld: ReadonlyMap<string, Complex> = new Map(),
+): ((state: State) => Solved) => {
+  const network = networkOf(job, topology);
+  for (const [node, v] of alsoHeld) network.fixed.set(node, v);
+  const unknowns = unknownsOf(network);
+  const { merged, held, row } = unknowns;
+  const wires = network.elements.filter((element) => element.warm);
+  const known = new Map<string, Equations>();
+
+  const reader =
+    (values: readonly Complex[], heldAt: (root: string) => Complex): VoltageAt =>
+    (node) => {
+      const root = merged.get(node)!;
+      const k = row.get(root);
+      return k === undefined ? heldAt(root) : values[k]!;
+    };
+  const reads = (values: readonly Complex[]) => reader(values, (root) => held.get(root)!);
+  const readsChange = (values: readonly Complex[]) => reader(values, () => ZERO);
+
+  const impedances = (state: State) =>
+    loads.flatMap(({ load, pieces }) => {
+      const drawn = state.drawn.get(load.id)!;
+      if (drawn.behaviour !== 'impedance') return [];
+      return pieces.map((piece) => ({
+        ends: [
+          [piece.plus, PLUS],
+          [piece.minus, MINUS],
+        ] as Element['ends'],
+        y: pieceAdmittance(piece, drawn),
+      }));
     });
-    const next = temperatures(job, solved, hot);
-    const moved = Math.max(...[...next].map(([key, t]) => Math.abs(t - celsius.get(key)!)));
-    celsius = next;
-    if (moved < 2e-8) return warm(celsius);
-    if (!Number.isFinite(moved) || moved > 2000 || round > 120) break;
-  }
-  throw new NotServed('conductor temperatures do not settle');
-};
+  /** Factored once for all states whose impedance loads are the same. */
+  const equationsFor = (state: State): Equations => {
+    const stamped = [...state.drawn].filter(([, drawn]) => drawn.behaviour === 'impedance');
+    const key = stamped.map(([id, { amps }]) => `${id} ${amps}`).join('|');
+    if (!known.has(key)) known.set(key, equationsOf(unknowns, [...network.elements, ...impedances(state)]));
+    return known.get(key)!;
+  };
 
-const temperatures = (job: Job, solved: Solved, hot: Map<string, Thermal>): Celsius => {
-  const next: Celsius = new Map([...hot].map(([key, thermal]) => [key, thermal.ambient]));
-  for (const element of solved.network.elements) {
-    const key = `${element.of.id}|${element.of.conductor}`;
-    const thermal = element.of.kind === 'run' ? hot.get(key) : undefined;
-    if (!thermal) continue;
-    const sets = job.runs.find((run) => run.id === element.of.id)!.sets;
-    const share = abs(solved.through(element)) / sets / thermal.fullAmps;
-    next.set(key, thermal.ambient + (thermal.rated - thermal.referenceAmbient) * share * share);
-  }
-  return next;
-};
-
-const solveAt = (
-  job: Job,
-  topology: Topology,
-  loads: ServedLoad[],
-  state: State,
-  celsius: Celsius,
-  held: ReadonlyMap<string, Complex>,
-): Solved => {
-  const network = networkOf(job, topology, (run: string, c: Conductor) => celsius.get(`${run}|${c}`) ?? null);
-  for (const [node, v] of held) network.fixed.set(node, v);
-  return settle(network, systemOf(network, loads, state), loads, state);
-};
-
-type System = ReturnType<typeof systemOf>;
-
-/** Solves with the factors at hand, and again from the new voltages while any load follows them. */
-const settle = (network: Network, system: System, loads: ServedLoad[], state: State): Solved => {
-  let voltages = system.solve(loads, state, null);
-  const iterated = [...state.drawn.values()].some((d) => d.behaviour === 'power' || d.behaviour === 'local');
-  for (let round = 0; iterated; round++) {
-    const next = system.solve(loads, state, voltages);
-    const moved = Math.max(...next.map((v, k) => abs(sub(v, voltages[k]!))));
-    const top = Math.max(...next.map(abs));
-    voltages = next;
-    if (moved <= 1e-13 * top) break;
-    if (round > MOST_ROUNDS || !Number.isFinite(moved)) {
-      throw new NotServed('no solution');
-    }
-  }
-  const voltage = (node: string) => system.read(voltages, node);
-  const through = (element: Element): Complex =>
-    mul(
-      element.y,
-      element.ends.reduce((sum, [node, u]) => add(sum, scale(voltage(node), u)), ZERO),
+  return (state) => {
+    const equations = equationsFor(state);
+    const { steady, followers } = currentsOf(loads, state, wires);
+    const still = equations.solve(steady);
+    const settled = (also: Sink[], start: Complex[] | null): Settled => {
+      const base = also.length === 0 ? still : equations.solve([...steady, ...also]);
+      const found = settle(followers, wires, start, (sinks) => {
+        const moved = sinks.length === 0 ? null : equations.respond(sinks);
+        return reads(base.map((v, k) => (moved ? add(v, moved[k]!) : v)));
+      });
+      if (!found) throw new NotServed('no solution');
+      if (found.celsius.some((each) => each.gt(HOTTEST_C)))
+        throw new NotServed('conductor temperatures do not settle');
+      return found;
+    };
+    const { amps, voltage, celsius } = settled([], null);
+    const warmed = new Map(
+      wires.map((wire, k) => {
+        const z = wire.warm!.ohms(celsius[k]!);
+        return [wire, { ...wire, y: inverse(z), r: z.re }];
+      }),
     );
-  const drawnBy = (item: ServedLoad, piece: Piece): Complex => {
-    const drawn = state.drawn.get(item.load.id)!;
-    const v = sub(voltage(piece.plus), voltage(piece.minus));
-    return drawn.behaviour === 'impedance'
-      ? mul(pieceAdmittance(piece, drawn), v)
-      : pieceCurrent(piece, drawn, v);
-  };
-  return {
-    network,
-    voltage,
-    through,
-    drawnBy,
-    takenAt: (node) => {
-      const root = system.merged.get(node);
-      let sum = ZERO;
-      const leave = (at: string, amps: Complex) => {
-        if (system.merged.get(at) === root) sum = add(sum, amps);
-      };
-      for (const element of network.elements) {
-        const amps = through(element);
-        for (const [at, u] of element.ends) leave(at, scale(amps, u));
-      }
-      for (const item of loads) {
-        for (const piece of item.pieces) {
-          const amps = drawnBy(item, piece);
-          leave(piece.plus, amps);
-          leave(piece.minus, scale(amps, -1));
-        }
-      }
-      for (const { plus, minus, amps } of state.fixedSinks) {
-        leave(plus, amps);
-        leave(minus, scale(amps, -1));
-      }
-      return sum;
-    },
-    respond: (sinks) => {
-      const answer = system.respond(sinks);
-      return (node) => system.read(answer, node, true);
-    },
-    again: (extra) =>
-      settle(network, system, loads, { ...state, fixedSinks: [...state.fixedSinks, ...extra] }),
-  };
-};
+    const elements = network.elements.map((element) => warmed.get(element) ?? element);
 
-/** The node equations over merged nodes, factored once, with the fixed nodes moved to the right side. */
-const systemOf = (network: Network, loads: ServedLoad[], state: State) => {
-  const neighbours = new Map<string, string[]>();
-  for (const [a, b] of network.joined) {
-    neighbours.set(a, [...(neighbours.get(a) ?? []), b]);
-    neighbours.set(b, [...(neighbours.get(b) ?? []), a]);
-  }
-  const merged = new Map<string, string>();
-  const held = new Map<string, Complex>();
-  const enter = (node: string) => {
-    if (merged.has(node)) return;
-    const group = flood([node], (n) => neighbours.get(n) ?? []);
-    for (const n of group) merged.set(n, node);
-    const anchor = [...group].find((n) => network.fixed.has(n));
-    if (anchor) held.set(node, network.fixed.get(anchor)!);
-  };
-  enter(EARTH);
-  for (const node of network.fixed.keys()) enter(node);
-  for (const element of network.elements) for (const [node] of element.ends) enter(node);
-  for (const [a] of network.joined) enter(a);
-
-  const free = [...new Set(merged.values())].filter((node) => !held.has(node));
-  const place = new Map(free.map((node, k) => [node, k]));
-  const n = free.length;
-  const re = new Float64Array(n * n);
-  const im = new Float64Array(n * n);
-  const injected: Complex[] = free.map(() => ZERO);
-  const stamp = (ends: Element['ends'], y: Complex) => {
-    for (const [a, ua] of ends) {
-      const row = place.get(merged.get(a)!);
-      if (row === undefined) continue;
-      for (const [b, ub] of ends) {
-        const root = merged.get(b)!;
-        const column = place.get(root);
-        const entry = scale(y, ua * ub);
-        if (column === undefined) injected[row] = sub(injected[row]!, mul(entry, held.get(root)!));
-        else {
-          re[row * n + column] = re[row * n + column]! + entry.re;
-          im[row * n + column] = im[row * n + column]! + entry.im;
-        }
-      }
-    }
-  };
-  for (const element of network.elements) stamp(element.ends, element.y);
-  for (const { load, pieces } of loads) {
-    const drawn = state.drawn.get(load.id)!;
-    if (drawn.behaviour !== 'impedance') continue;
-    for (const piece of pieces)
-      stamp(
-        [
-          [piece.plus, 1],
-          [piece.minus, -1],
-        ],
-        pieceAdmittance(piece, drawn),
+    const through = (element: Element): Complex =>
+      mul(
+        element.y,
+        element.ends.reduce((sum, [node, u]) => add(sum, scale(voltage(node), u)), ZERO),
       );
-  }
-  const factors: Factors = factor(n, re, im);
-  const draw = (right: Complex[], node: string, amps: Complex) => {
-    const row = place.get(merged.get(node)!);
-    if (row !== undefined) right[row] = sub(right[row]!, amps);
-  };
-  const read = (values: Complex[], node: string, still = false): Complex => {
-    const root = merged.get(node)!;
-    const k = place.get(root);
-    if (k !== undefined) return values[k]!;
-    return still ? ZERO : held.get(root)!;
-  };
-  return {
-    read,
-    merged,
-    solve: (all: ServedLoad[], now: State, before: Complex[] | null): Complex[] => {
-      const right = injected.slice();
-      for (const { load, pieces } of all) {
-        const drawn = now.drawn.get(load.id)!;
-        for (const piece of pieces) {
-          const v = before ? sub(read(before, piece.plus), read(before, piece.minus)) : piece.nominal;
-          const amps = pieceCurrent(piece, drawn, v);
-          draw(right, piece.plus, amps);
-          draw(right, piece.minus, scale(amps, -1));
+    const drawnBy = (item: ServedLoad, piece: Piece): Complex =>
+      pieceCurrent(piece, state.drawn.get(item.load.id)!, sub(voltage(piece.plus), voltage(piece.minus)));
+    return {
+      elements,
+      fixed: network.fixed,
+      voltage,
+      through,
+      drawnBy,
+      takenAt: (node) => {
+        const root = merged.get(node);
+        let sum = ZERO;
+        const leave = (at: string, current: () => Complex, u: Decimal) => {
+          if (merged.get(at) === root) sum = add(sum, scale(current(), u));
+        };
+        for (const element of elements)
+          for (const [at, u] of element.ends) leave(at, () => through(element), u);
+        const drawn = loads.flatMap((item) =>
+          item.pieces.map((piece) => ({ ...piece, current: () => drawnBy(item, piece) })),
+        );
+        const credits = state.credits.map((each) => ({ ...each, current: () => each.amps }));
+        for (const { plus, minus, current } of [...drawn, ...credits]) {
+          leave(plus, current, PLUS);
+          leave(minus, current, MINUS);
         }
-      }
-      for (const { plus, minus, amps } of now.fixedSinks) {
-        draw(right, plus, amps);
-        draw(right, minus, scale(amps, -1));
-      }
-      return backSolve(factors, right);
-    },
-    respond: (sinks: FixedSink[]): Complex[] => {
-      const right = free.map(() => ZERO);
-      for (const { plus, minus, amps } of sinks) {
-        draw(right, plus, amps);
-        draw(right, minus, scale(amps, -1));
-      }
-      return backSolve(factors, right);
-    },
+        return sum;
+      },
+      respond: (sinks) => {
+        const now =
+          wires.length === 0 ? equations : equationsOf(unknowns, [...elements, ...impedances(state)]);
+        return readsChange(now.respond(sinks));
+      },
+      with: (extra) => {
+        if (followers.length === 0) {
+          const each = readsChange(equations.respond(extra));
+          return (times) => (node) => add(voltage(node), scale(each(node), times));
+        }
+        let start = amps;
+        return (times) => {
+          const more = settled(
+            extra.map((sink) => ({ ...sink, amps: scale(sink.amps, times) })),
+            start,
+          );
+          start = more.amps;
+          return more.voltage;
+        };
+      },
+    };
   };
 };

@@ -1,38 +1,49 @@
 import type { Job, Load } from '@farlug/solver/job';
 import type { Circuit } from './circuits.ts';
-import { abs, sub } from './complex.ts';
+import { abs, conj, mul, sub } from './complex.ts';
+import { metresOf } from './conductors.ts';
+import { D, type Decimal, NIL, sumOf } from './decimal.ts';
 import { type Ends, sidesOf } from './sinks.ts';
-import type { Solved } from './solve.ts';
+import type { VoltageAt } from './solve.ts';
 import { nodeOf, nominalBetween, supplyAt, type Topology } from './topology.ts';
 
 export interface Reading {
   ends: Ends;
   bus: string;
-  volts: number;
-  dropVolts: number;
-  dropPercent: number;
-  nominalVolts: number;
+  volts: Decimal;
+  dropVolts: Decimal;
+  dropPercent: Decimal;
+  nominalVolts: Decimal;
 }
 
 const hasPair = (topology: Topology, bus: string, ends: Ends): boolean =>
   ends.every((c) => topology.live.has(nodeOf(bus, c)));
 
-export const readPair = (topology: Topology, solved: Solved, bus: string, ends: Ends): Reading => {
+export const readPair = (topology: Topology, at: VoltageAt, bus: string, ends: Ends): Reading => {
   const supply = supplyAt(topology, bus)!;
   const nominalVolts = abs(nominalBetween(supply, ...ends));
-  const volts = abs(sub(solved.voltage(nodeOf(bus, ends[0])), solved.voltage(nodeOf(bus, ends[1]))));
-  const dropVolts = nominalVolts * supply.openRatio - volts;
-  return { ends, bus, volts, dropVolts, dropPercent: (100 * dropVolts) / nominalVolts, nominalVolts };
+  const volts = abs(sub(at(nodeOf(bus, ends[0])), at(nodeOf(bus, ends[1]))));
+  const dropVolts = nominalVolts.times(supply.openRatio).minus(volts);
+  const dropPercent = dropVolts.times(100).div(nominalVolts);
+  return { ends, bus, volts, dropVolts, dropPercent, nominalVolts };
+};
+
+/** Whether the voltage at a reading points away from the nominal EMF there. */
+export const pointsAway = (topology: Topology, at: VoltageAt, bus: string, ends: Ends): boolean => {
+  const v = sub(at(nodeOf(bus, ends[0])), at(nodeOf(bus, ends[1])));
+  return mul(v, conj(nominalBetween(supplyAt(topology, bus)!, ...ends))).re.lte(0);
 };
 
 /** Of two ends or turns whose percents differ by rounding alone, the first counts. */
-export const SAME_PERCENT = 1e-11;
+const SAME_PERCENT = D('1e-11');
+export const exceedsPercent = (a: Reading, b: Reading): boolean =>
+  a.dropPercent.gt(b.dropPercent.plus(SAME_PERCENT));
 
 /** The reading that supplies a load's figures: of its sides and places the one with the largest percent. */
-export const readLoad = (topology: Topology, solved: Solved, load: Load, places: string[]): Reading =>
+export const readLoad = (topology: Topology, at: VoltageAt, load: Load, places: string[]): Reading =>
   places
-    .flatMap((bus) => sidesOf(load).map((ends) => readPair(topology, solved, bus, ends)))
-    .reduce((worst, reading) => (reading.dropPercent > worst.dropPercent + SAME_PERCENT ? reading : worst));
+    .flatMap((bus) => sidesOf(load).map((ends) => readPair(topology, at, bus, ends)))
+    .reduce((worst, reading) => (exceedsPercent(reading, worst) ? reading : worst));
 
 /** The pairs of a bus that are live, line-neutral first. */
 export const livePairs = (topology: Topology, bus: string): Ends[] =>
@@ -48,29 +59,28 @@ export const livePairs = (topology: Topology, bus: string): Ends[] =>
   ).filter((ends) => hasPair(topology, bus, ends));
 
 /** q(b) of model.md 6: same pair in the load's own system, else the mean over line-line pairs. */
-const percentAt = (topology: Topology, solved: Solved, bus: string, home: string, ends: Ends): number => {
+const percentAt = (topology: Topology, at: VoltageAt, bus: string, home: string, ends: Ends): Decimal => {
   const same = topology.region.get(bus) === topology.region.get(home);
-  if (same && hasPair(topology, bus, ends)) return readPair(topology, solved, bus, ends).dropPercent;
+  if (same && hasPair(topology, bus, ends)) return readPair(topology, at, bus, ends).dropPercent;
   const pairs = livePairs(topology, bus);
   const lines = pairs.filter(([, minus]) => minus !== 'N');
   const list = lines.length > 0 ? lines : pairs;
-  const percents = list.map((p) => readPair(topology, solved, bus, p).dropPercent);
-  return percents.reduce((sum, q) => sum + q, 0) / percents.length;
+  return sumOf(list.map((p) => readPair(topology, at, bus, p).dropPercent)).div(list.length);
 };
 
 export interface Split {
-  source: number;
-  service: number;
-  transformer: number;
-  feeder: number;
-  branch: number;
+  source: Decimal;
+  service: Decimal;
+  transformer: Decimal;
+  feeder: Decimal;
+  branch: Decimal;
 }
 
 interface Step {
   kind: 'service' | 'feeder' | 'branch' | 'transformer';
   near: string;
   far: string;
-  metres: number;
+  metres: Decimal;
 }
 
 /** Fewest steps from one bus to another over closed runs and transformers, ties in file order. */
@@ -84,12 +94,11 @@ export const pathBetween = (job: Job, from: string, to: string): Step[] => {
 const paths = new WeakMap<Job, Map<string, Map<string, Step[]>>>();
 
 const pathsFrom = (job: Job, from: string): Map<string, Step[]> => {
-  const perUnit = job.lengthUnit === 'ft' ? 0.3048 : 1;
   const edges = [
     ...job.runs
       .filter((run) => !run.open)
-      .map((run) => ({ kind: run.kind, from: run.from, to: run.to, metres: run.length * perUnit })),
-    ...job.transformers.map((t) => ({ kind: 'transformer' as const, from: t.from, to: t.to, metres: 0 })),
+      .map((run) => ({ kind: run.kind, from: run.from, to: run.to, metres: metresOf(job, run.length) })),
+    ...job.transformers.map((t) => ({ kind: 'transformer' as const, from: t.from, to: t.to, metres: NIL })),
   ];
   const arrived = new Map<string, Step[]>([[from, []]]);
   for (const [near, steps] of arrived) {
@@ -106,32 +115,37 @@ const pathsFrom = (job: Job, from: string): Map<string, Step[]> => {
 export const splitOf = (
   job: Job,
   topology: Topology,
-  solved: Solved,
+  at: VoltageAt,
   reading: Reading,
   begins: string[],
 ): Split => {
   const { ends, bus: home } = reading;
   const sourceBus = supplyAt(topology, home)!.sourceBus;
-  const q = (bus: string) => percentAt(topology, solved, bus, home, ends);
+  const read = new Map<string, Decimal>();
+  const q = (bus: string): Decimal => {
+    if (!read.has(bus)) read.set(bus, percentAt(topology, at, bus, home, ends));
+    return read.get(bus)!;
+  };
   const starts = begins
     .filter((bus) => topology.region.get(bus) === topology.region.get(home) && hasPair(topology, bus, ends))
-    .map((bus) => ({ bus, percent: readPair(topology, solved, bus, ends).dropPercent }));
+    .map((bus) => ({ bus, percent: readPair(topology, at, bus, ends).dropPercent }));
   const start = starts.reduce<(typeof starts)[number] | null>(
-    (low, each) => (low === null || each.percent < low.percent ? each : low),
+    (low, each) => (low === null || each.percent.lt(low.percent) ? each : low),
     null,
   );
-  const branch = start ? reading.dropPercent - start.percent : 0;
+  const branch = start ? reading.dropPercent.minus(start.percent) : NIL;
   const path = pathBetween(job, sourceBus, start?.bus ?? home);
   const along = (kind: Step['kind']) =>
-    path.filter((step) => step.kind === kind).reduce((sum, step) => sum + q(step.far) - q(step.near), 0);
+    sumOf(path.filter((step) => step.kind === kind).map((step) => q(step.far).minus(q(step.near))));
   const source = q(sourceBus);
   const service = along('service');
   const transformer = along('transformer');
-  const feeder = reading.dropPercent - source - service - transformer - branch;
+  const feeder = reading.dropPercent.minus(source).minus(service).minus(transformer).minus(branch);
   return { source, service, transformer, feeder, branch };
 };
 
 export const circuitOf = (circuits: Circuit[], load: Load): Circuit =>
   circuits.find((circuit) => circuit.loads.has(load.id))!;
 
-export const belowNominal = (reading: Reading): number => 100 * (1 - reading.volts / reading.nominalVolts);
+export const belowNominal = (reading: Reading): Decimal =>
+  reading.nominalVolts.minus(reading.volts).times(100).div(reading.nominalVolts);

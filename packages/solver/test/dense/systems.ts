@@ -1,26 +1,31 @@
 import type { Conductor, Job, System, Transformer } from '@farlug/solver/job';
-import { add, type Complex, complex, div, mul, polar, scale, sub, unit, ZERO } from './complex.ts';
+import { add, type Complex, complex, conj, div, mul, scale, sub, THIRD, unit, ZERO } from './complex.ts';
+import { D, type Decimal, NIL, ROOT3, UNITY } from './decimal.ts';
 
 export type Phasors = Partial<Record<Conductor, Complex>>;
 
 /** The table of nominal EMF phasors (model.md 2). */
 export const nominalPhasors = (system: System, volts: number): Phasors => {
-  const v = volts;
-  const star = v / Math.sqrt(3);
+  const v = D(volts);
+  const half = complex(v.div(2));
+  const otherHalf = complex(v.div(-2));
+  const star = complex(v.div(ROOT3));
+  const behind = mul(star, conj(THIRD));
+  const ahead = mul(star, THIRD);
   switch (system) {
     case 'dc-2w':
     case '1ph-2w':
       return { L1: complex(v), N: ZERO };
     case '1ph-3w':
-      return { L1: complex(v / 2), L2: complex(-v / 2), N: ZERO };
+      return { L1: half, L2: otherHalf, N: ZERO };
     case '1ph-3w-wye':
-      return { L1: complex(star), L2: polar(star, -120), N: ZERO };
+      return { L1: star, L2: behind, N: ZERO };
     case '3ph-3w':
-      return { L1: complex(star), L2: polar(star, -120), L3: polar(star, 120) };
+      return { L1: star, L2: behind, L3: ahead };
     case '3ph-4w':
-      return { L1: complex(star), L2: polar(star, -120), L3: polar(star, 120), N: ZERO };
+      return { L1: star, L2: behind, L3: ahead, N: ZERO };
     case '3ph-4w-delta':
-      return { L1: complex(v / 2), L3: complex(-v / 2), L2: complex(0, (-Math.sqrt(3) / 2) * v), N: ZERO };
+      return { L1: half, L3: otherHalf, L2: complex(NIL, v.times(ROOT3).div(-2)), N: ZERO };
   }
 };
 
@@ -31,9 +36,15 @@ export type Terminal = Conductor | 'star' | 'earth';
 export interface WindingPair {
   primary: readonly [plus: Terminal, minus: Terminal];
   secondary: readonly [plus: Terminal, minus: Terminal];
-  a: number;
+  a: Decimal;
   z: Complex;
 }
+
+/** Ohms of a given size with a given X/R; all of their resistive part alone on the resistance basis. */
+export const splitOhms = (size: Decimal, xOverR: number, resistive: boolean): Complex => {
+  const r = size.div(D(xOverR).pow(2).plus(1).sqrt());
+  return complex(r, resistive ? NIL : r.times(xOverR));
+};
 
 type Ends = readonly [Terminal, Terminal];
 const CYCLE: Ends[] = [
@@ -51,51 +62,48 @@ const star = (point: Terminal): Ends[] => LINES.map((line) => [line, point] as c
 
 /** The winding pairs of a transformer (model.md 8). */
 export const windingPairs = (t: Transformer, basis: Job['basis']): WindingPair[] => {
-  const tap = 1 + t.tapPercent / 100;
-  const leakage = (windingVolts: number, windingVa: number): Complex => {
-    const size = ((t.percentZ / 100) * windingVolts * windingVolts) / windingVa;
-    const r = size / Math.sqrt(1 + t.xOverR * t.xOverR);
-    return basis === 'resistance' ? complex(r) : complex(r, r * t.xOverR);
+  const tap = D(t.tapPercent).div(100).plus(1);
+  const leakage = (windingVolts: Decimal, windingVa: Decimal): Complex => {
+    const size = windingVolts.times(windingVolts).times(t.percentZ).div(100).div(windingVa);
+    return splitOhms(size, t.xOverR, basis === 'resistance');
   };
-  const pairOf = (primary: Ends, secondary: Ends, vp: number, vs: number, va: number): WindingPair => ({
+  const pairOf = (primary: Ends, secondary: Ends, vp: Decimal, vs: Decimal, va: Decimal): WindingPair => ({
     primary,
     secondary,
-    a: vp / (vs * tap),
+    a: vp.div(vs.times(tap)),
     z: leakage(vs, va),
   });
-  const va = t.kva * 1000;
+  const va = D(t.kva).times(1000);
+  let vp = D(t.primaryVolts);
+  let vs = D(t.secondaryVolts);
   if (t.connection === 'single-phase') {
     const primary = t.primary.split('-') as [Conductor, Conductor];
-    if (t.system === '1ph-2w') return [pairOf(primary, ['L1', 'N'], t.primaryVolts, t.secondaryVolts, va)];
-    const half = t.secondaryVolts / 2;
+    if (t.system === '1ph-2w') return [pairOf(primary, ['L1', 'N'], vp, vs, va)];
     return [
-      pairOf(primary, ['L1', 'N'], t.primaryVolts, half, va / 2),
-      pairOf(primary, ['N', 'L2'], t.primaryVolts, half, va / 2),
+      pairOf(primary, ['L1', 'N'], vp, vs.div(2), va.div(2)),
+      pairOf(primary, ['N', 'L2'], vp, vs.div(2), va.div(2)),
     ];
   }
   const lags = t.primaryVolts >= t.secondaryVolts;
-  const root = Math.sqrt(3);
   const secondaryStar: Terminal = t.system === '3ph-4w' ? 'N' : 'earth';
   let primaries: Ends[];
   let secondaries: Ends[];
-  let vp = t.primaryVolts;
-  let vs = t.secondaryVolts;
   switch (t.connection) {
     case 'delta-wye':
       primaries = lags ? COUNTER : CYCLE;
       secondaries = star(secondaryStar);
-      vs /= root;
+      vs = vs.div(ROOT3);
       break;
     case 'wye-delta':
       primaries = star('star');
       secondaries = lags ? CYCLE : COUNTER;
-      vp /= root;
+      vp = vp.div(ROOT3);
       break;
     case 'wye-wye':
       primaries = star('N');
       secondaries = star('N');
-      vp /= root;
-      vs /= root;
+      vp = vp.div(ROOT3);
+      vs = vs.div(ROOT3);
       break;
     case 'delta-delta':
       primaries = CYCLE;
@@ -105,10 +113,10 @@ export const windingPairs = (t: Transformer, basis: Job['basis']): WindingPair[]
   return primaries.flatMap((primary, k) => {
     const [plus, minus] = secondaries[k]!;
     const splits = t.system === '3ph-4w-delta' && plus !== 'L2' && minus !== 'L2';
-    if (!splits) return [pairOf(primary, [plus, minus], vp, vs, va / 3)];
+    if (!splits) return [pairOf(primary, [plus, minus], vp, vs, va.div(3))];
     return [
-      pairOf(primary, [plus, 'N'], vp, vs / 2, va / 6),
-      pairOf(primary, ['N', minus], vp, vs / 2, va / 6),
+      pairOf(primary, [plus, 'N'], vp, vs.div(2), va.div(6)),
+      pairOf(primary, ['N', minus], vp, vs.div(2), va.div(6)),
     ];
   });
 };
@@ -130,7 +138,7 @@ const at = (phasors: Phasors, terminal: Terminal): Complex => {
   if (terminal === 'star')
     return scale(
       LINES.reduce((sum, line) => add(sum, phasors[line]!), ZERO),
-      1 / 3,
+      UNITY.div(3),
     );
   return phasors[terminal]!;
 };

@@ -1,11 +1,12 @@
 import { CONDUCTORS, type Conductor, type Job, type Run, SYSTEM_CONDUCTORS } from '@farlug/solver/job';
 import { type Complex, sub } from './complex.ts';
+import { D, type Decimal } from './decimal.ts';
 import { nominalPhasors, type Phasors, secondaryPhasors, windingPairs } from './systems.ts';
 
 /** What a separately derived system carries: its nominal EMFs, open-voltage ratio and source bus. */
 export interface Supply {
   nominal: Phasors;
-  openRatio: number;
+  openRatio: Decimal;
   sourceBus: string;
 }
 
@@ -106,7 +107,7 @@ const supplies = (job: Job, region: Map<string, number>): Map<number, Supply> =>
     if (source.off || supply.has(start)) continue;
     supply.set(start, {
       nominal: nominalPhasors(source.system, source.volts),
-      openRatio: (source.openVolts ?? source.volts) / source.volts,
+      openRatio: D(source.openVolts ?? source.volts).div(source.volts),
       sourceBus: source.bus,
     });
     const queue = [start];

@@ -1,17 +1,37 @@
 import type { JobFile, Solution } from '@farlug/solver/job';
+import type { DenseSolution } from '../dense/solve-dense.ts';
+import { note } from './ledger.ts';
+
+/** Of the number itself, or of this share of the largest of its kind in the job where it is smaller than that. */
+const RELATIVE = 1e-9;
+const LEAST_SHARE = 1e-3;
+
+const PERCENTS = [
+  'dropPercent',
+  'sourcePercent',
+  'servicePercent',
+  'transformerPercent',
+  'feederPercent',
+  'branchPercent',
+  'totalPercent',
+  'limitPercent',
+  'startingPercent',
+] as const;
+
+type Figure = number | null | undefined;
 
 /**
- * Differences between two solutions of one job, each as a path with both values; empty where they agree.
- * Volts are compared to `epsilon` of the highest volts of the job, percents to the same share of 100, amps, watts and
- * ohms to the same share of the largest in the job; words exactly, reasons by the limit that they name. Headroom to
- * `headroomEpsilon`, and not at all where that is null.
+ * Differences between two solutions of one job, each as a path with both values; empty where they agree. Numbers to 1e-9
+ * relative: a figure below a thousandth of the largest of its kind (volts, percent, amps, watts, ohms of the job) is held
+ * to 1e-9 of that thousandth, for it is what is left of larger ones. Words exactly, reasons by the limit that they
+ * name. Headroom of the loads in `headroom` alone; where it ends at a collapse, ours must lie between the last extra
+ * current that was served and the first that was not.
  */
 export const differences = (
   job: JobFile,
   ours: Solution,
-  theirs: Solution,
-  epsilon: number,
-  headroomEpsilon: number | null = epsilon,
+  theirs: DenseSolution,
+  headroom: ReadonlySet<string>,
 ): string[] => {
   const found: string[] = [];
   const report = (path: string, a: unknown, b: unknown) =>
@@ -19,28 +39,22 @@ export const differences = (
   const same = (path: string, a: unknown, b: unknown) => {
     if (JSON.stringify(a) !== JSON.stringify(b)) report(path, a, b);
   };
-  const close = (
-    path: string,
-    a: number | null | undefined,
-    b: number | null | undefined,
-    scale: number,
-    most = epsilon,
-  ) => {
+  const close = (of: string, figure: string, a: Figure, b: Figure, largest: number) => {
+    const path = `${of} ${figure}`;
     if (a == null || b == null) {
       if ((a ?? null) !== (b ?? null)) report(path, a, b);
       return;
     }
-    if (!(Math.abs(a - b) <= most * Math.max(scale, Math.abs(a), Math.abs(b)))) report(path, a, b);
+    const size = Math.max(Math.abs(a), Math.abs(b), LEAST_SHARE * largest);
+    const off = size === 0 ? 0 : Math.abs(a - b) / size;
+    note(`${of.split(' ')[0]} ${figure}`, off, RELATIVE);
+    if (!(off <= RELATIVE)) report(path, a, b);
   };
-  const keyed = (
-    path: string,
-    a: Record<string, number> | null,
-    b: Record<string, number> | null,
-    scale: number,
-  ) => {
-    if (a === null || b === null) return same(path, a, b);
-    same(`${path} keys`, Object.keys(a).sort(), Object.keys(b).sort());
-    for (const key of Object.keys(a)) close(`${path}.${key}`, a[key], b[key], scale);
+  type ByConductor = Record<string, number> | null;
+  const keyed = (of: string, figure: string, a: ByConductor, b: ByConductor, largest: number) => {
+    if (a === null || b === null) return same(`${of} ${figure}`, a, b);
+    same(`${of} ${figure} of`, Object.keys(a).sort(), Object.keys(b).sort());
+    for (const key of Object.keys(a)) close(`${of} ${key}`, figure, a[key], b[key], largest);
   };
 
   const volts = Math.max(
@@ -60,17 +74,14 @@ export const differences = (
   for (const b of theirs.buses) {
     const a = ours.buses.find((each) => each.id === b.id);
     if (!a) continue;
-    const path = `bus ${b.id}`;
-    keyed(`${path} volts`, a.volts, b.volts, volts);
-    if (a.phasors === null || b.phasors === null) same(`${path} phasors`, a.phasors, b.phasors);
-    else
-      for (const [c, [re, im]] of Object.entries(b.phasors)) {
-        const mine = a.phasors[c as 'L1'];
-        close(`${path} ${c} re`, mine?.[0], re, volts);
-        close(`${path} ${c} im`, mine?.[1], im, volts);
-      }
-    close(`${path} feederPercent`, a.feederPercent, b.feederPercent, 100);
-    same(`${path} verdict`, a.verdict, b.verdict);
+    const of = `bus ${b.id}`;
+    keyed(of, 'volts', a.volts, b.volts, volts);
+    const parts = (phasors: typeof a.phasors, part: 0 | 1) =>
+      phasors && Object.fromEntries(Object.entries(phasors).map(([c, value]) => [c, value[part]]));
+    keyed(of, 're', parts(a.phasors, 0), parts(b.phasors, 0), volts);
+    keyed(of, 'im', parts(a.phasors, 1), parts(b.phasors, 1), volts);
+    close(of, 'feederPercent', a.feederPercent, b.feederPercent, 100);
+    same(`${of} verdict`, a.verdict, b.verdict);
   }
   same(
     'run ids',
@@ -79,12 +90,12 @@ export const differences = (
   );
   theirs.runs.forEach((b, k) => {
     const a = ours.runs[k]!;
-    const path = `run ${b.id}`;
-    keyed(`${path} amps`, a.amps, b.amps, amps);
-    close(`${path} dropVolts`, a.dropVolts, b.dropVolts, volts);
-    close(`${path} dropPercent`, a.dropPercent, b.dropPercent, 100);
-    close(`${path} lossWatts`, a.lossWatts, b.lossWatts, watts);
-    same(`${path} verdict`, a.verdict, b.verdict);
+    const of = `run ${b.id}`;
+    keyed(of, 'amps', a.amps, b.amps, amps);
+    close(of, 'dropVolts', a.dropVolts, b.dropVolts, volts);
+    close(of, 'dropPercent', a.dropPercent, b.dropPercent, 100);
+    close(of, 'lossWatts', a.lossWatts, b.lossWatts, watts);
+    same(`${of} verdict`, a.verdict, b.verdict);
   });
   same(
     'load ids',
@@ -93,44 +104,26 @@ export const differences = (
   );
   theirs.loads.forEach((b, k) => {
     const a = ours.loads[k]!;
-    const path = `load ${b.id}`;
-    same(`${path} terminals`, a.terminals, b.terminals);
-    close(`${path} volts`, a.volts, b.volts, volts);
-    close(`${path} dropVolts`, a.dropVolts, b.dropVolts, volts);
-    for (const key of [
-      'dropPercent',
-      'sourcePercent',
-      'servicePercent',
-      'transformerPercent',
-      'feederPercent',
-      'branchPercent',
-      'totalPercent',
-      'limitPercent',
-      'startingPercent',
-    ] as const)
-      close(`${path} ${key}`, a[key], b[key], 100);
-    same(`${path} verdict`, a.verdict, b.verdict);
-    same(`${path} reasons`, a.reasons.map(named), b.reasons.map(named));
-    same(`${path} turn`, a.turn, b.turn);
-    close(`${path} thevenin re`, a.thevenin?.[0], b.thevenin?.[0], ohms);
-    close(`${path} thevenin im`, a.thevenin?.[1], b.thevenin?.[1], ohms);
-    if (headroomEpsilon !== null)
-      close(
-        `${path} headroomAmps`,
-        a.headroomAmps,
-        b.headroomAmps,
-        headroomScale(b.headroomAmps, amps),
-        headroomEpsilon,
-      );
+    const of = `load ${b.id}`;
+    same(`${of} terminals`, a.terminals, b.terminals);
+    close(of, 'volts', a.volts, b.volts, volts);
+    close(of, 'dropVolts', a.dropVolts, b.dropVolts, volts);
+    for (const key of PERCENTS) close(of, key, a[key], b[key], 100);
+    same(`${of} verdict`, a.verdict, b.verdict);
+    same(`${of} reasons`, a.reasons.map(named), b.reasons.map(named));
+    same(`${of} turn`, a.turn, b.turn);
+    close(of, 'thevenin re', a.thevenin?.[0], b.thevenin?.[0], ohms);
+    close(of, 'thevenin im', a.thevenin?.[1], b.thevenin?.[1], ohms);
+    if (!headroom.has(b.id)) return;
+    const unserved = theirs.collapses.get(b.id);
+    if (unserved === undefined) close(of, 'headroomAmps', a.headroomAmps, b.headroomAmps, amps);
+    else if (!(a.headroomAmps! >= b.headroomAmps! * (1 - RELATIVE) && a.headroomAmps! <= unserved))
+      report(`${of} headroomAmps`, a.headroomAmps, `a collapse from ${b.headroomAmps} to ${unserved}`);
   });
   for (const key of ['sourceWatts', 'loadWatts', 'lossWatts'] as const)
-    close(`totals.${key}`, ours.totals[key], theirs.totals[key], watts);
+    close('totals', key, ours.totals[key], theirs.totals[key], watts);
   return found;
 };
-
-/** Headroom is where a difference reaches zero: it carries the rounding of volts over a slope of ohms. */
-const headroomScale = (headroom: number | null, amps: number): number =>
-  1000 * Math.max(Math.abs(headroom ?? 0), amps);
 
 /** The limit that a reason names: its words before the first number. */
 const named = (reason: string): string => reason.replace(/\s*[-−]?\d.*$/, '').trim();
