@@ -28,6 +28,16 @@ export function dropAt(core: Core, volts: Volts, bus: number, pair: number): Pai
   return dropOf(pair, emf, dRe, dIm);
 }
 
+/** Whether the voltage of a pair at a bus points away from its EMF. */
+export function pointsAway(core: Core, volts: Volts, bus: number, pair: number): boolean {
+  const { nodes, buses } = core.network;
+  const { open } = buses.system[bus]!.pairs[pair]!;
+  const [a, b] = PAIR_SLOTS[pair]!.map((slot) => nodes.at[4 * bus + slot]!) as [number, number];
+  const re = nodes.referenceRe[a]! + volts.re[a]! - (nodes.referenceRe[b]! + volts.re[b]!);
+  const im = nodes.referenceIm[a]! + volts.im[a]! - (nodes.referenceIm[b]! + volts.im[b]!);
+  return re * open[0] + im * open[1] <= 0;
+}
+
 export function dropOf(
   pair: number,
   emf: { open: readonly [number, number]; openVolts: number; nominal: number },

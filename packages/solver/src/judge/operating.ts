@@ -22,6 +22,7 @@ export interface Thermal {
 /** Rounds end when no temperature moves by more than this, °C: currents then stand far below 1e-8 relative. */
 const SETTLED_C = 1e-9;
 const ROUNDS = 200;
+/** Above this nothing conducts as its table says (copper boils at some 2560 °C): such a state is not served. */
 const HOTTEST_C = 2000;
 
 /** Conductors whose resistance follows their current (model: operating temperature). */
@@ -79,6 +80,7 @@ function solveOperating(core: Core, demand: Demand, credits: Credits | null): St
   let celsius = Float64Array.from(thermals, (t) => t.ambientC);
   let volts: Volts | null = null;
   let iterations = 0;
+  let hottest = [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY];
   for (let round = 0; round < ROUNDS; round++) {
     const elements = atTemperatures(core, thermals, celsius);
     const stamped = stamp(core.layout, elements, admittanceIn(core, demand));
@@ -92,8 +94,11 @@ function solveOperating(core: Core, demand: Demand, credits: Credits | null): St
       return t.ambientC + t.riseC * share * share;
     });
     const moved = next.reduce((most, t, k) => Math.max(most, Math.abs(t - celsius[k]!)), 0);
-    if (moved <= SETTLED_C) return { ...state, iterations };
-    if (!(moved < HOTTEST_C)) break;
+    const top = next.reduce((most, t) => Math.max(most, t), 0);
+    if (moved <= SETTLED_C && top <= HOTTEST_C) return { ...state, iterations };
+    // Rounds on ohms too cold, and every other one after them, are hotter than what they lead to.
+    if (!(top <= HOTTEST_C || top < Math.max(...hottest))) break;
+    hottest = [hottest[1]!, top];
     celsius = next;
   }
   return refusal(

@@ -2,6 +2,7 @@ import type { Job, LoadResult, Phasor } from '../job/index.ts';
 import type { Refusal, Sink } from '../network/index.ts';
 import type { Core } from './core.ts';
 import { type TurnName, turnsOf } from './demand.ts';
+import { pointsAway } from './drop.ts';
 import { excessOf, largestBefore } from './headroom.ts';
 import { startingIsJudged } from './limits.ts';
 import type { Judge, LoadFigures } from './load-figures.ts';
@@ -131,12 +132,17 @@ function headroom(
   const nodes = judge.nodesOfLoad(load);
   return largestBefore((amps) => {
     let worst: LoadFigures | null = null;
+    let away = false;
     for (const { solved, sinks } of list) {
       const volts = amps === 0 ? solved.volts : solved.with(load, sinks, amps * perPath, nodes);
       if (!volts) return Number.POSITIVE_INFINITY;
       const figures = judge.figures(volts, load, started);
-      if (!worst || figures.split.dropPercent > worst.split.dropPercent + SAME_PERCENT) worst = figures;
+      if (worst && !(figures.split.dropPercent > worst.split.dropPercent + SAME_PERCENT)) continue;
+      worst = figures;
+      away = pointsAway(core, volts, figures.split.bus, figures.split.pair);
     }
+    // Beyond no volts at all lie states that no network comes to, which yet may be solved where currents follow them.
+    if (away && core.iterates) return Number.POSITIVE_INFINITY;
     const excess = worst && excessOf(worst.judged);
     return excess === null || Number.isNaN(excess) ? Number.POSITIVE_INFINITY : excess;
   });
