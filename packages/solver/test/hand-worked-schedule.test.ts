@@ -1,6 +1,7 @@
 import type { JobFile, Solution } from '@farlug/solver/job';
 import { describe, expect, it } from 'vitest';
 import { jobFile, type LoadFile, ohmRun } from './support/job-file.ts';
+import './support/ledger.ts';
 import { SOLVERS } from './support/solvers.ts';
 
 /**
@@ -18,7 +19,8 @@ const amps = (id: string, bus: string, terminals: LoadFile['terminals'], size: n
   amps: size,
 });
 const volts = (solution: Solution, id: string): number => solution.loads.find((l) => l.id === id)!.volts!;
-const near = (value: number | null | undefined, hand: number) => expect(value).toBeCloseTo(hand, 9);
+const near = (value: number | null | undefined, hand: number) =>
+  expect((value ?? Number.NaN) - hand).toBeWithin(1e-12, 'figures worked by hand');
 
 describe.each(SOLVERS)('schedule rows worked by hand, by the %s solver', (_, solve) => {
   it('single-pole: a run of line and neutral to one load', () => {

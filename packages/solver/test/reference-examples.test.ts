@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { notePrinted } from './support/ledger.ts';
 import { SOLVERS } from './support/solvers.ts';
 import { alternatingExamples } from './support/worked-alternating.ts';
 import { directExamples } from './support/worked-direct.ts';
@@ -45,6 +46,7 @@ describe('published worked examples', () => {
       expect(Object.keys(ours).sort()).toEqual(wanted.map(({ quantity }) => quantity).sort());
       for (const { quantity, published, tolerance_abs, as_printed, unit } of wanted) {
         const off = Math.abs(ours[quantity]! - published);
+        notePrinted(`${row.id} ${quantity}`, off, tolerance_abs);
         expect(off, `${quantity}: ${ours[quantity]} for ${as_printed} ${unit}`).toBeLessThanOrEqual(
           tolerance_abs + ROUNDING,
         );

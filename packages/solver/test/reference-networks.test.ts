@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import './support/ledger.ts';
 import { reference } from './support/reference.ts';
 import { SOLVERS } from './support/solvers.ts';
 import { type SpiceReference, spiceCases } from './support/spice-networks.ts';
@@ -18,7 +19,7 @@ describe.each(SOLVERS)('networks solved by ngspice, by the %s solver', (_, solve
       const place = nodes[node];
       if (!place) continue;
       const [ours, imaginary] = solution.buses.find((b) => b.id === place[0])!.phasors![place[1]]!;
-      expect(Math.hypot(ours - re, imaginary - im), node).toBeLessThan(1e-9 * top);
+      expect(Math.hypot(ours - re, imaginary - im) / top, node).toBeWithin(1e-9, 'voltage, of the largest');
       compared++;
     }
     expect(compared).toBe(Object.keys(nodes).length);
@@ -27,7 +28,7 @@ describe.each(SOLVERS)('networks solved by ngspice, by the %s solver', (_, solve
     for (const [wire, [run, conductor]] of Object.entries(wires)) {
       const amps = solution.runs.find((r) => r.id === run)!.amps![conductor]!;
       const theirs = results.run_currents.find((i) => i.id === wire)!.i_mag;
-      expect(Math.abs(amps - theirs), wire).toBeLessThan(2e-9 * most);
+      expect((amps - theirs) / most, wire).toBeWithin(2e-9, 'current, of the largest');
     }
     for (const run of solution.runs) {
       const parts = Object.entries(wires).filter(([, [id]]) => id === run.id);
@@ -35,7 +36,7 @@ describe.each(SOLVERS)('networks solved by ngspice, by the %s solver', (_, solve
         (sum, [wire]) => sum + results.run_currents.find((i) => i.id === wire)!.loss_w,
         0,
       );
-      expect(Math.abs(run.lossWatts! - theirs)).toBeLessThan(1e-8 * results.total_run_loss_w);
+      expect((run.lossWatts! - theirs) / results.total_run_loss_w).toBeWithin(1e-9, 'loss, of the sum');
     }
   });
 });

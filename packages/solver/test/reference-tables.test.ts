@@ -6,11 +6,13 @@ import { conductorOhms } from './dense/conductors.ts';
 import { D } from './dense/decimal.ts';
 import { loadSize } from './dense/load-size.ts';
 import { jobFile } from './support/job-file.ts';
+import './support/ledger.ts';
 import { reference } from './support/reference.ts';
 
 /**
  * The product's look-ups beside a second look-up that reads fixtures/reference itself and applies temperature,
- * frequency and skin effect in its own way. Same arithmetic in another order: 1e-12.
+ * frequency and skin effect in its own way. The product's doubles beside fifty digits: 1e-14, some forty
+ * roundings; amperes to 1e-12.
  */
 const awgSizes = [
   ...new Set(
@@ -54,9 +56,7 @@ const theirs = (
 };
 
 const near = (value: number, wanted: number, what: string) =>
-  expect(Math.abs(value - wanted), `${what}: ${value} for ${wanted}`).toBeLessThanOrEqual(
-    1e-12 * Math.abs(wanted),
-  );
+  expect(wanted === 0 ? value : value / wanted - 1, what).toBeWithin(1e-14, 'conductor ohms, relative');
 
 describe('conductor ohms beside a second reading of the reference tables', () => {
   const conditions = [0, 50, 60, 400].flatMap((frequency) =>
@@ -88,6 +88,11 @@ describe('conductor ohms beside a second reading of the reference tables', () =>
   });
 });
 
+const sameAmps = (ours: ReturnType<typeof ampacityAwg>, wanted: number) => {
+  if (!ours.ok) throw new Error(ours.message);
+  expect(ours.amps - wanted).toBeWithin(1e-12, 'ampacity, A');
+};
+
 describe('full-load amps beside a second reading', () => {
   it('agree with what operating temperatures are computed from', () => {
     const run = (size: string, method: 'B1' | 'C' | null, insulation: 60 | 75 | 90 | 70, bundled: number) =>
@@ -114,7 +119,7 @@ describe('full-load amps beside a second reading', () => {
       for (const bundled of [1, 3, 4, 9, 10, 50]) {
         const job = run('2 AWG', null, insulation, bundled);
         const ours = ampacityAwg({ material: 'copper', size: '2 AWG', columnC: insulation, bundled });
-        expect(ours.ok && ours.amps).toBeCloseTo(thermalOf(job, job.runs[0]!, 'L1').fullAmps.toNumber(), 9);
+        sameAmps(ours, thermalOf(job, job.runs[0]!, 'L1').fullAmps.toNumber());
       }
     for (const insulation of [70, 90] as const)
       for (const circuits of [1, 2, 6, 9]) {
@@ -127,7 +132,7 @@ describe('full-load amps beside a second reading', () => {
           loaded: 3,
           circuits,
         });
-        expect(ours.ok && ours.amps).toBeCloseTo(thermalOf(job, job.runs[0]!, 'L1').fullAmps.toNumber(), 9);
+        sameAmps(ours, thermalOf(job, job.runs[0]!, 'L1').fullAmps.toNumber());
       }
   });
 

@@ -29,11 +29,27 @@ export const note = (name: string, difference: number, tolerance: number, printe
   entries.set(name, entry);
 };
 
-/** Expects a difference, taken without its sign, to be at most `tolerance`, and notes both. */
-export const within = (name: string, difference: number, tolerance: number, what = name): void => {
-  note(name, Math.abs(difference), tolerance);
-  expect(Math.abs(difference), what).toBeLessThanOrEqual(tolerance);
-};
+declare module 'vitest' {
+  // biome-ignore lint/suspicious/noExplicitAny: as vitest declares it
+  interface Matchers<T = any> {
+    /** A difference, taken without its sign, is at most `tolerance`; both are noted under `name`. */
+    toBeWithin: (tolerance: number, name: string) => T;
+  }
+}
+
+expect.extend({
+  toBeWithin(difference: number, tolerance: number, name: string) {
+    note(name, Math.abs(difference), tolerance);
+    return {
+      pass: Math.abs(difference) <= tolerance,
+      message: () => `${name}: ${difference} off, ${tolerance} allowed`,
+    };
+  },
+});
+
+/** Notes a difference beside the precision that its source prints. */
+export const notePrinted = (name: string, difference: number, tolerance: number): void =>
+  note(name, Math.abs(difference), tolerance, true);
 
 const line = (name: string, { tolerance, share, difference, count, printed }: Entry): string => {
   const room = share > 0 ? `${(1 / share).toPrecision(2)} times as wide as needed` : 'no difference';
