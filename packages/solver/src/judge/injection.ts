@@ -8,8 +8,8 @@ import type { Volts } from './volts.ts';
 export interface Injection {
   /** By node; every round moves them, from where they were given. */
   volts: Volts;
-  /** Puts volts in place of themselves as they follow from the currents drawn at them. Returns max|ΔV| ÷ max|V|. */
-  round: () => number;
+  /** Puts volts in place of themselves as they follow from the currents drawn at them. */
+  round: () => void;
   /** The same rounds as a fixed point of volts by unknown, real parts before imaginary ones. */
   fixedPoint: FixedPoint;
   read: (x: Float64Array) => void;
@@ -56,24 +56,6 @@ export function injectionOf(
     solve(factor, re, im);
     solves++;
   };
-  /** max|what follows − volts| ÷ max|what follows|; `each` sees every difference. */
-  const compare = (each: (u: number, dRe: number, dIm: number) => void): number => {
-    let largest = 0;
-    let moved = 0;
-    for (let u = 0; u < n; u++) {
-      const node = nodeOf[u]!;
-      const dRe = re[u]! - volts.re[node]!;
-      const dIm = im[u]! - volts.im[node]!;
-      const vRe = referenceRe[node]! + re[u]!;
-      const vIm = referenceIm[node]! + im[u]!;
-      const change = dRe * dRe + dIm * dIm;
-      const square = vRe * vRe + vIm * vIm;
-      if (!(change <= moved)) moved = change;
-      if (!(square <= largest)) largest = square;
-      each(u, dRe, dIm);
-    }
-    return n === 0 ? 0 : Math.sqrt(moved) / Math.sqrt(largest);
-  };
   const read = (x: Float64Array): void => {
     for (let u = 0; u < n; u++) {
       volts.re[nodeOf[u]!] = x[u]!;
@@ -92,19 +74,31 @@ export function injectionOf(
     volts,
     round: () => {
       follow();
-      return compare((u) => {
+      for (let u = 0; u < n; u++) {
         volts.re[nodeOf[u]!] = re[u]!;
         volts.im[nodeOf[u]!] = im[u]!;
-      });
+      }
     },
     fixedPoint: {
       mismatch: (x, out) => {
         read(x);
         follow();
-        return compare((u, dRe, dIm) => {
+        let largest = 0;
+        let moved = 0;
+        for (let u = 0; u < n; u++) {
+          const node = nodeOf[u]!;
+          const dRe = re[u]! - x[u]!;
+          const dIm = im[u]! - x[n + u]!;
+          const vRe = referenceRe[node]! + re[u]!;
+          const vIm = referenceIm[node]! + im[u]!;
+          const change = dRe * dRe + dIm * dIm;
+          const square = vRe * vRe + vIm * vIm;
+          if (!(change <= moved)) moved = change;
+          if (!(square <= largest)) largest = square;
           out[u] = dRe;
           out[n + u] = dIm;
-        });
+        }
+        return n === 0 ? 0 : Math.sqrt(moved) / Math.sqrt(largest);
       },
       linearise: (x) => {
         read(x);

@@ -20,8 +20,9 @@ export interface State {
 
 /** Rounds stop at this share of the largest voltage. */
 const SETTLED = 1e-10;
-/** Rounds are mixed with those before once they move by less than this share of the last. */
-const MIXED = 0.5;
+/** Rounds that move by a share of the last between these two are mixed with those before. */
+const QUICK = 0.03;
+const WILD = 0.5;
 /** After so many rounds the rest is reckoned; more than `MANY` to come are left to Newton's method. */
 const RECKONED = 6;
 const MANY = 12;
@@ -97,8 +98,8 @@ export function solveState(
   const injection = injectionOf(network, stamped, following, fixed, volts);
 
   if (following.length === 0) {
-    const moved = injection.round();
-    if (!Number.isFinite(moved) && n > 0 && Number.isNaN(volts.re[nodeOf[0]!]!))
+    injection.round();
+    if (n > 0 && Number.isNaN(volts.re[nodeOf[0]!]!))
       return refusal(
         'network',
         'its voltages are not finite: an impedance or a load is out of all proportion',
@@ -132,7 +133,8 @@ function settle(
       injection.read(x);
       return ok ? { ok, iterations: injection.solves() } : { ok, mismatch };
     }
-    mixer.advance(x, f, !(moved < MIXED * before));
+    if (moved < QUICK * before) addScaled(x, 1, f);
+    else mixer.advance(x, f, !(moved < WILD * before));
     before = moved;
     moved = fixedPoint.mismatch(x, f);
   }
@@ -140,9 +142,11 @@ function settle(
   const best = x.slice();
   addScaled(best, 1, f);
   for (let k = 0; k < SHARPENING && moved > SHARP; k++) {
-    mixer.advance(x, f, false);
+    if (moved < QUICK * before) addScaled(x, 1, f);
+    else mixer.advance(x, f, false);
     const next = fixedPoint.mismatch(x, f);
     if (!(next < moved)) break;
+    before = moved;
     moved = next;
     best.set(x);
     addScaled(best, 1, f);
