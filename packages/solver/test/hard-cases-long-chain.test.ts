@@ -90,7 +90,7 @@ describe('a circuit of 50,000 equal taps', () => {
   });
 });
 
-it.each(DEEP ? [50_000] : [10_000])('%d feeders in a row: loads far apart, panels on the way', (n) => {
+it.each(DEEP ? [50_000] : [6000])('%d feeders in a row: loads far apart, panels on the way', (n) => {
   const every = n / 10;
   const amps = 2;
   const places = Array.from({ length: 10 }, (_, k) => (k + 1) * every);
@@ -120,7 +120,7 @@ it.each(DEEP ? [50_000] : [10_000])('%d feeders in a row: loads far apart, panel
   }
 });
 
-it.each(DEEP ? [50_000] : [10_000])(
+it.each(DEEP ? [50_000] : [4000])(
   '%d impedance loads on one circuit: a ladder of hyperbolic cosines',
   (n) => {
     // Alike sections, z in series and y across: 2·cosh θ = 2 + z·y, V_k = E·cosh((n − k + ½)θ)/cosh((n + ½)θ).
@@ -144,7 +144,7 @@ it.each(DEEP ? [50_000] : [10_000])(
   },
 );
 
-it.each(DEEP ? [50_000] : [2000])(
+it.each(DEEP ? [50_000] : [1500])(
   '%d constant-power loads on one circuit, worked backwards, and their collapse',
   (n) => {
     // From the volts at the end follow those before each run, up to the source (see the cases of collapse).
