@@ -74,6 +74,34 @@ describe.each(cases)('the largest power, $name', ({ cos, leading, x, direct }) =
   });
 });
 
+describe('three phases, balanced, collapse like one', () => {
+  // A phase of E/√3 behind r + jx: three times E²/3/(2(|z| + r cos φ + x sin φ)) in all.
+  const [r, x, cos] = [0.2, 0.15, 0.9];
+  const sin = Math.sqrt(1 - cos * cos);
+  const largest = (E * E) / (2 * (Math.hypot(r, x) + r * cos + x * sin));
+  const three = (va: number): JobFile =>
+    jobFile({
+      sources: [{ id: 's', bus: 'a', system: '3ph-4w', volts: E }],
+      runs: [ohmRun('r', 'a', 'b', ['L1', 'L2', 'L3', 'N'], r, x)],
+      loads: [{ id: 'm', bus: 'b', terminals: 'three-phase', behaviour: 'power', va, powerFactor: cos }],
+    });
+
+  it.each([0.3, 1e-2, 1e-6])('less %d of the largest power is solved', (ε) => {
+    const solution = solveProduct(three(largest * (1 - ε)), 'design');
+    const along = r * cos + x * sin;
+    const s = largest * (1 - ε);
+    const root = Math.sqrt(ε * E * E * (E * E - 2 * s * (along - Math.hypot(r, x))));
+    const right = Math.sqrt((E * E - 2 * s * along + root) / 2);
+    expect(Math.abs(solution.loads[0]!.volts! / right - 1)).toBeLessThan(2e-14 / Math.sqrt(ε));
+  });
+
+  it.each([1e-6, 0.5])('%d more is refused by the load alone', (beyond) => {
+    expect(() => solveProduct(three(largest * (1 + beyond)), 'design')).toThrow(
+      /load m.*even alone it asks for/,
+    );
+  });
+});
+
 describe('several loads near a collapse', () => {
   /**
    * A radial circuit is exact backwards: from the volts at its end follow the currents of its loads, the volts before

@@ -1,13 +1,13 @@
 import { pathSolver } from '../linear/index.ts';
-import type { Refusal, Sink, Stamped } from '../network/index.ts';
+import type { Refusal, Stamped } from '../network/index.ts';
 import type { Core } from './core.ts';
 import type { Flow } from './sink-current.ts';
 import type { Volts } from './volts.ts';
 
-/** So many flows are looked at: those with the largest product of size and lost volts where the equations stopped. */
+/** So many loads are looked at: those with the largest product of size and lost volts where the equations stopped. */
 const LOOKED_AT = 200;
 
-/** A flow with the share of its volts that its nominal current drops in the impedance that it sees. */
+/** A path of a load, with the share of its volts that the load's nominal current drops in the impedance it sees. */
 interface Asked {
   flow: Flow;
   drop: number;
@@ -68,31 +68,55 @@ const percent = (share: number): string => {
 function mostAsked(core: Core, stamped: Stamped, flows: readonly Flow[], volts: Volts): Asked {
   const { referenceRe, referenceIm } = core.network.nodes;
   const { unknownOf } = stamped.layout;
-  const lost = ({ a, b }: Sink) => Math.hypot(volts.re[a]! - volts.re[b]!, volts.im[a]! - volts.im[b]!);
   const path = pathSolver(stamped.factor);
-  const weight = ({ drawn, sink }: Flow) => Math.abs(drawn.amps * sink.share) / sink.nominal;
+  const at = (node: number): readonly [number, number] => {
+    const unknown = unknownOf[node]!;
+    return unknown < 0 ? [0, 0] : [path.re(unknown), path.im(unknown)];
+  };
   let most: Asked = { flow: flows[0]!, drop: -1, ofLargest: 0 };
-  const likely = flows.map((flow) => ({ flow, of: weight(flow) * lost(flow.sink) }));
-  likely.sort((a, b) => b.of - a.of);
-  for (const { flow } of likely.slice(0, LOOKED_AT)) {
-    const { a, b } = flow.sink;
-    const from = unknownOf[a]!;
-    const to = unknownOf[b]!;
-    path.reach([from, to].filter((unknown) => unknown >= 0));
+  for (const paths of likeliest(flows, volts)) {
+    path.reach(paths.flatMap(({ sink: { a, b } }) => [unknownOf[a]!, unknownOf[b]!]).filter((u) => u >= 0));
     path.clear();
-    if (from >= 0) path.add(from, 1, 0);
-    if (to >= 0) path.add(to, -1, 0);
+    for (const { sink } of paths)
+      for (const [node, sign] of [
+        [sink.a, sink.share],
+        [sink.b, -sink.share],
+      ] as const)
+        if (unknownOf[node]! >= 0) path.add(unknownOf[node]!, sign * sink.unitRe, sign * sink.unitIm);
     path.solve();
-    const re = (from < 0 ? 0 : path.re(from)) - (to < 0 ? 0 : path.re(to));
-    const im = (from < 0 ? 0 : path.im(from)) - (to < 0 ? 0 : path.im(to));
-    const size = Math.sqrt(re * re + im * im);
-    const drop = weight(flow) * size;
-    if (drop <= most.drop) continue;
-    const along = re * flow.drawn.cos + im * flow.drawn.sin;
-    const open = Math.hypot(referenceRe[a]! - referenceRe[b]!, referenceIm[a]! - referenceIm[b]!);
-    const power = weight(flow) * flow.sink.nominal ** 2;
-    const ofLargest = flow.rule === 'power' ? (2 * power * (size + along)) / open ** 2 : 0;
-    most = { flow, drop, ofLargest };
+    for (const flow of paths) {
+      const { a, b, unitRe, unitIm, nominal } = flow.sink;
+      const [aRe, aIm] = at(a);
+      const [bRe, bIm] = at(b);
+      const re = (aRe - bRe) * unitRe + (aIm - bIm) * unitIm;
+      const im = (aIm - bIm) * unitRe - (aRe - bRe) * unitIm;
+      const size = Math.hypot(re, im);
+      const drop = (Math.abs(flow.drawn.amps) * size) / nominal;
+      if (drop <= most.drop) continue;
+      const along = Math.sign(flow.drawn.amps) * (re * flow.drawn.cos + im * flow.drawn.sin);
+      const open = Math.hypot(referenceRe[a]! - referenceRe[b]!, referenceIm[a]! - referenceIm[b]!);
+      const power = Math.abs(flow.drawn.amps) * nominal;
+      const ofLargest = flow.rule === 'power' ? (2 * power * (size + along)) / open ** 2 : 0;
+      most = { flow, drop, ofLargest };
+    }
   }
   return most;
+}
+
+/** Paths of each of some loads. */
+function likeliest(flows: readonly Flow[], volts: Volts): Flow[][] {
+  const byLoad = new Map<number, { paths: Flow[]; of: number }>();
+  for (const flow of flows) {
+    const { load, a, b, nominal } = flow.sink;
+    const lost = Math.hypot(volts.re[a]! - volts.re[b]!, volts.im[a]! - volts.im[b]!);
+    const of = (Math.abs(flow.drawn.amps) * lost) / nominal;
+    const known = byLoad.get(load);
+    if (!known) byLoad.set(load, { paths: [flow], of });
+    else {
+      known.paths.push(flow);
+      known.of = Math.max(known.of, of);
+    }
+  }
+  const list = [...byLoad.values()].sort((a, b) => b.of - a.of);
+  return list.slice(0, LOOKED_AT).map(({ paths }) => paths);
 }
