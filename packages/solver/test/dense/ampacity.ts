@@ -1,7 +1,7 @@
 import type { Conductor, Job, Run } from '@farlug/solver/job';
 import { reference } from '../support/reference.ts';
 import { sizeOf } from './conductors.ts';
-import { D, type Decimal } from './decimal.ts';
+import { D, type Decimal, UNITY } from './decimal.ts';
 
 type Cell = number | null;
 interface Adjustment {
@@ -42,23 +42,23 @@ export const celsiusAt = (thermal: Thermal, amps: Decimal): Decimal =>
 
 export const thermalOf = (job: Job, run: Run, conductor: Conductor): Thermal => {
   const size = sizeOf(run, conductor);
+  const thermal = (rated: number, reference: number, amps: number, factor: Decimal): Thermal => ({
+    ambient: D(run.ambient ?? reference),
+    rated: D(rated),
+    referenceAmbient: D(reference),
+    fullAmps: D(amps).times(factor).times(run.sets),
+  });
+  const bundled = run.bundled ?? 1;
+  const firm = job.conductorRows.find((row) => row.name === size && row.material === run.material);
+  if (firm) return thermal(run.insulation ?? 75, 30, firm.ampacity!, UNITY);
   if (!size.endsWith(' mm2')) {
     const rated = run.insulation ?? 75;
-    const firm = job.conductorRows.find((row) => row.name === size && row.material === run.material);
-    const row = awg.rows.find((r) => r.size === size.split(' ')[0]);
+    const row = awg.rows.find((r) => r.size === size.split(' ')[0])!;
+    const percent = awg.adjustment_more_than_three_ccc.rows.find(
+      (r) => bundled >= r.ccc_min && bundled <= (r.ccc_max ?? Number.POSITIVE_INFINITY),
+    )?.percent;
     const column = `${run.material === 'copper' ? 'cu' : 'al'}_${rated}C`;
-    const percent =
-      awg.adjustment_more_than_three_ccc.rows.find(
-        (r) =>
-          (run.bundled ?? 1) >= r.ccc_min && (run.bundled ?? 1) <= (r.ccc_max ?? Number.POSITIVE_INFINITY),
-      )?.percent ?? 100;
-    const full = firm ? firm.ampacity! : row![column]!;
-    return {
-      ambient: D(run.ambient ?? 30),
-      rated: D(rated),
-      referenceAmbient: D(30),
-      fullAmps: D(full).times(percent).div(100).times(run.sets),
-    };
+    return thermal(rated, 30, row[column]!, D(percent ?? 100).div(100));
   }
   const rated = run.insulation ?? 70;
   const loaded = run.conductors.filter((c) => c !== 'N').length === 3 ? 3 : 2;
@@ -70,13 +70,8 @@ export const thermalOf = (job: Job, run: Run, conductor: Conductor): Thermal => 
       r.material === (run.material === 'copper' ? 'copper' : 'aluminium') &&
       r.area_mm2 === Number(size.slice(0, -4)),
   )!;
-  const grouped = iec.grouping_B_52_17.rows[0]!.factors[String(run.bundled ?? 1)]!;
+  const listed = Object.entries(iec.grouping_B_52_17.rows[0]!.factors);
+  const grouped = listed.find(([circuits]) => bundled <= Number(circuits))![1];
   const inGround = method === 'D1' || method === 'D2';
-  const referenceAmbient = inGround ? 20 : 30;
-  return {
-    ambient: D(run.ambient ?? 30),
-    rated: D(rated),
-    referenceAmbient: D(referenceAmbient),
-    fullAmps: D(row[method]!).times(grouped).times(run.sets),
-  };
+  return thermal(rated, inGround ? 20 : 30, row[method]!, D(grouped));
 };

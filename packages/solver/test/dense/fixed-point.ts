@@ -1,10 +1,10 @@
 import { type Decimal, largest, NIL, sumOf } from './decimal.ts';
 
 /** Rounds end where no entry moves by more than this share of the largest. */
-const STILL = '1e-26';
+const STILL = '1e-22';
 const MOST_ROUNDS = 80;
 /** How many earlier rounds a guess is drawn from. */
-const DEPTH = 6;
+const DEPTH = 10;
 
 type Vector = readonly Decimal[];
 const dot = (a: Vector, b: Vector): Decimal => sumOf(a.map((each, k) => each.times(b[k]!)));
@@ -14,7 +14,8 @@ interface Change {
   /** How g(x) and g(x) − x changed from one round to the next. */
   value: Decimal[];
   miss: Decimal[];
-  square: Decimal;
+  /** Of its miss with its own and those of the changes before it. */
+  products: Map<Change, Decimal>;
 }
 
 /**
@@ -32,8 +33,13 @@ export const fixedPoint = (start: Vector, g: (x: Vector) => Decimal[]): Decimal[
     if (!missed.isFinite()) return null;
     if (missed.lte(largest([NIL, ...value.map((each) => each.abs())]).times(STILL))) return value;
     if (before) {
-      const change = { value: less(value, before.value), miss: less(miss, before.miss) };
-      changes = [...changes, { ...change, square: dot(change.miss, change.miss) }].slice(-DEPTH);
+      const change: Change = {
+        value: less(value, before.value),
+        miss: less(miss, before.miss),
+        products: new Map(),
+      };
+      changes = [...changes, change].slice(-DEPTH);
+      for (const each of changes) change.products.set(each, dot(each.miss, change.miss));
     }
     before = { value, miss };
     const shares = leastSquares(changes, miss);
@@ -47,8 +53,8 @@ export const fixedPoint = (start: Vector, g: (x: Vector) => Decimal[]): Decimal[
 /** The shares of `changes` that take most of `miss` away: normal equations, elimination from the newest. */
 const leastSquares = (changes: readonly Change[], miss: Vector): Decimal[] => {
   const m = changes.length;
-  const rows = changes.map((a, i) => [
-    ...changes.map((b, j) => (i === j ? a.square : dot(a.miss, b.miss))),
+  const rows = changes.map((a) => [
+    ...changes.map((b) => (a.products.get(b) ?? b.products.get(a))!),
     dot(a.miss, miss),
   ]);
   const shares = changes.map(() => NIL);
@@ -56,7 +62,7 @@ const leastSquares = (changes: readonly Change[], miss: Vector): Decimal[] => {
   for (let k = m - 1; k >= 0; k--) {
     const pivot = rows[k]!;
     // A change that says nothing new would only carry rounding.
-    if (!pivot[k]!.gt(changes[k]!.square.times('1e-20'))) continue;
+    if (!pivot[k]!.gt(changes[k]!.products.get(changes[k]!)!.times('1e-36'))) continue;
     kept.push(k);
     for (let i = 0; i < k; i++) {
       const share = rows[i]![k]!.div(pivot[k]!);

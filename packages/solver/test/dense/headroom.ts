@@ -16,7 +16,7 @@ export const extraSinks = (item: ServedLoad, place: string): Sink[] =>
 const NEVER = 1e7;
 const MOST_ROUNDS = 300;
 /** The amps are known to this share of themselves, or where the excess is as good as nothing. */
-const CLOSE = '1e-22';
+const CLOSE = '1e-16';
 /** How often a step towards where the network can be served no more is halved. */
 const HALVINGS = 12;
 

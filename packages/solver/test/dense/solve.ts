@@ -39,7 +39,7 @@ export interface Solved {
 
 /**
  * Readies a job for one solve per state. Currents that follow the voltage, loads' and those that warmth brings about, are
- * iterated all together until nothing moves in the first 26 digits. Nodes in `alsoHeld` stand at given voltages.
+ * iterated all together until nothing moves in the first 22 digits. Nodes in `alsoHeld` stand at given voltages.
  */
 export const stateSolver = (
   job: Job,

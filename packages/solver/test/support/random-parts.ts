@@ -55,7 +55,11 @@ export const randomSize = (
       },
     };
   }
-  if (random.chance(0.05)) return { length, size: firmRow(job, metric) };
+  const operates = (probability: number) => iterated && random.chance(probability);
+  if (random.chance(0.05)) {
+    const own = { length, size: firmRow(job, metric) };
+    return operates(0.3) ? { ...own, temperature: 'operating', bundled: random.whole(1, 6) } : own;
+  }
   const aluminum = heavy && random.chance(0.3);
   const small = metric ? MM2_SMALL : AWG_SMALL;
   const large = metric ? MM2_LARGE : AWG_LARGE;
@@ -70,12 +74,12 @@ export const randomSize = (
   if (hasNeutral && random.chance(0.25)) run.neutralSize = list[Math.max(0, at - 1)];
   if (heavy && random.chance(0.2)) run.sets = random.whole(2, 3);
   if (random.chance(0.2)) run.temperature = random.between(20, 90);
-  else if (iterated && random.chance(0.08)) {
+  else if (operates(0.08)) {
     run.temperature = 'operating';
     run.insulation = metric ? random.pick([70, 90]) : random.pick([60, 75, 90]);
     if (random.chance(0.5)) run.ambient = random.between(15, 45);
-    if (metric) run.method = random.pick(['B1', 'C']);
-    if (random.chance(0.4)) run.bundled = metric ? random.whole(1, 6) : random.whole(1, 12);
+    if (metric) run.method = random.pick(['A1', 'A2', 'B1', 'B2', 'C', 'D1', 'D2']);
+    if (random.chance(0.4)) run.bundled = random.whole(1, metric ? 20 : 50);
   }
   return run;
 };
