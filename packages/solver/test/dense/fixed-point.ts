@@ -1,7 +1,8 @@
-import { type Decimal, largest, NIL, sumOf } from './decimal.ts';
+import { D, type Decimal, largest, NIL, sumOf } from './decimal.ts';
 
-/** Rounds end where no entry moves by more than this share of the largest. */
+/** Rounds end where no entry moves by more than this share of the largest, or of `LEAST` where all are smaller. */
 const STILL = '1e-22';
+const LEAST = D('1e-6');
 const MOST_ROUNDS = 80;
 /** How many earlier rounds a guess is drawn from. */
 const DEPTH = 10;
@@ -31,7 +32,7 @@ export const fixedPoint = (start: Vector, g: (x: Vector) => Decimal[]): Decimal[
     const miss = less(value, x);
     const missed = largest([NIL, ...miss.map((each) => each.abs())]);
     if (!missed.isFinite()) return null;
-    if (missed.lte(largest([NIL, ...value.map((each) => each.abs())]).times(STILL))) return value;
+    if (missed.lte(largest([LEAST, ...value.map((each) => each.abs())]).times(STILL))) return value;
     if (before) {
       const change: Change = {
         value: less(value, before.value),
