@@ -176,6 +176,45 @@ describe('several loads near a collapse', () => {
   });
 });
 
+describe('currents at the angle of their own volts', () => {
+  // E = w·(|V| + I·z·e^{−jφ}) with w the direction of V: |V| = √(E² − (I·X′)²) − I·R′, R′ + jX′ = z·e^{−jφ}. A round turns a
+  // small error of angle into −I·R′/|V| of it: above a drop of a half plain rounds swing ever wider.
+  const [r, x, cos] = [0.4, 0.1, 0.9];
+  const sin = Math.sqrt(1 - cos * cos);
+  const [along, aside] = [r * cos + x * sin, x * cos - r * sin];
+  const job = (amps: number): JobFile =>
+    jobFile({
+      angle: 'local',
+      sources: [{ id: 's', bus: 'a', system: '1ph-2w', volts: E }],
+      runs: [ohmRun('r', 'a', 'b', ['L1', 'N'], r / 2, x / 2)],
+      loads: [{ id: 'l', bus: 'b', terminals: 'L1-N', amps, powerFactor: cos }],
+    });
+
+  it.each([0.02, 0.3, 0.5, 0.7, 0.9, 0.99])(
+    'are solved at %d of the current that takes all volts',
+    (share) => {
+      const amps = (share * E) / Math.hypot(r, x);
+      const right = Math.sqrt(E * E - (amps * aside) ** 2) - amps * along;
+      // The error of |V| is the mismatch, sharpened to rounding, over what is left of the volts.
+      expect(Math.abs(solveProduct(job(amps), 'design').loads[0]!.volts! - right)).toBeLessThan(1e-11);
+    },
+  );
+
+  it('are refused where no volts are left', () => {
+    const amps = (1.001 * E) / Math.hypot(r, x);
+    expect(() => solveProduct(job(amps), 'design')).toThrow(/load l.*no solution at bus b/);
+  });
+});
+
+it('a state whose volts point away from their source is none', () => {
+  // 3000 A at nominal angle turn 240 V into 240 − 0.4·3000 = −960 V, and 10 W at −960 V would balance the equations.
+  const job = twoBuses(10, 1, false, 0);
+  job.loads!.push({ id: 'typed', bus: 'b', terminals: 'L1-N', amps: 3000, powerFactor: 1 });
+  expect(() => solveProduct(job, 'design')).toThrow(
+    /load l.*no solution at bus b.*point away from their source/,
+  );
+});
+
 describe('rounds', () => {
   it.each([0.005, 0.02, 0.06])('at a drop of %d of the volts there are at most eight', (share) => {
     // V = (1 − d)·E at P = V·(E − V)/R.

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { gmres } from './gmres.ts';
+import { gmres, hasPositiveDeterminant } from './gmres.ts';
 import { Mixer } from './mixer.ts';
 import { type FixedPoint, newton } from './newton.ts';
 
@@ -69,6 +69,18 @@ describe('GMRES', () => {
   });
 });
 
+describe('the sign of a determinant', () => {
+  const turnedBy = (degrees: number, stretch: number) => (d: Float64Array, out: Float64Array) => {
+    const [c, s] = [Math.cos((degrees * Math.PI) / 180), Math.sin((degrees * Math.PI) / 180)];
+    out.set([c * d[0]! - s * d[1]!, s * d[0]! + c * d[1]!, stretch * d[2]!]);
+  };
+  it('is that of the product of eigenvalues: 1 of a turn, and the stretch beside it', () => {
+    for (const degrees of [0, 30, 120, 200])
+      for (const stretch of [3, 1e-3, -1e-3, -4])
+        expect(hasPositiveDeterminant(turnedBy(degrees, stretch), vector(1, 0.5, 0.3))).toBe(stretch > 0);
+  });
+});
+
 describe('Newton’s method on a fixed point', () => {
   it.each([0.1, 0.24, 0.2499, 0.249999])('finds the larger root for a power of %d', (power) => {
     const x = vector(1);
@@ -90,7 +102,7 @@ describe('Newton’s method on a fixed point', () => {
     }
   });
 
-  it('does not take a root that plain rounds would leave', () => {
+  it('does not take a root beyond the fold', () => {
     const power = 0.2;
     const lower = 0.5 - Math.sqrt(0.25 - power);
     expect(newton(load(power), vector(lower * (1 + 1e-6)), 1e-10).ok).toBe(false);

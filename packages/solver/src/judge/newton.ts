@@ -1,4 +1,4 @@
-import { gmres } from './gmres.ts';
+import { gmres, hasPositiveDeterminant } from './gmres.ts';
 import { addScaled, size } from './vectors.ts';
 
 /** x ↦ g(x) whose fixed point is wanted, in real vectors of one length. */
@@ -19,16 +19,13 @@ const PATIENCE = 6;
 /** Steps after the mismatch met its target, towards rounding. */
 const SHARPENING = 3;
 const SHARP = 1e-15;
-/** A point from which a plain round leads away by this factor is none that the loads would stay at. */
-const LEAVES = 1.05;
-const PROBES = 8;
 
 /**
  * Newton's method on g(x) − x = 0 from `x`, in place, steps halved where they overshoot, each linear system solved by
  * GMRES. Near a collapse, where plain rounds need thousands, it needs a few dozen.
- * Gives up where the mismatch stops falling, as it does at a fold of the equations beyond which there is no solution;
- * and where plain rounds would leave the point that was found. Returns the mismatch that was reached, as a share of the
- * largest voltage.
+ * Gives up where the mismatch stops falling, as it does at a fold of the equations beyond which there is no solution,
+ * and where what was found lies beyond the fold, where more load would come with more volts. Returns the mismatch that
+ * was reached, as a share of the largest voltage.
  */
 export function newton(map: FixedPoint, x: Float64Array, target: number): { ok: boolean; mismatch: number } {
   let f: Float64Array = new Float64Array(x.length);
@@ -37,6 +34,11 @@ export function newton(map: FixedPoint, x: Float64Array, target: number): { ok: 
   const jacobian = (d: Float64Array, out: Float64Array): void => {
     map.slope(d, out);
     for (let i = 0; i < d.length; i++) out[i] = d[i]! - out[i]!;
+  };
+  /** Whether x is on the near side of the fold: I − g′ has the sign of determinant that it has with no load. */
+  const before = (towards: Float64Array): boolean => {
+    map.linearise(x);
+    return hasPositiveDeterminant(jacobian, towards);
   };
   let mismatch = map.mismatch(x, f);
   let left = size(f);
@@ -58,7 +60,7 @@ export function newton(map: FixedPoint, x: Float64Array, target: number): { ok: 
       leaves = size(spare);
       if (leaves <= (1 - FALL * step) * left) break;
       step /= 2;
-      if (met || step < SHORTEST) return { ok: met && holds(map, x, direction), mismatch };
+      if (met || step < SHORTEST) return { ok: met && before(direction), mismatch };
     }
     x.set(trial);
     [f, spare] = [spare, f];
@@ -71,22 +73,5 @@ export function newton(map: FixedPoint, x: Float64Array, target: number): { ok: 
       slow = 0;
     }
   }
-  return { ok: mismatch <= target && holds(map, x, direction), mismatch };
-}
-
-/** Whether plain rounds would come back to x: how they change a small step, from the direction most likely to grow. */
-function holds(map: FixedPoint, x: Float64Array, direction: Float64Array): boolean {
-  map.linearise(x);
-  let d: Float64Array = direction.slice();
-  let other: Float64Array = new Float64Array(d.length);
-  let grown = 0;
-  for (let k = 0; k < PROBES; k++) {
-    const before = size(d);
-    if (before === 0) return true;
-    for (let i = 0; i < d.length; i++) d[i]! /= before;
-    map.slope(d, other);
-    if (k >= PROBES / 2) grown += Math.log(size(other));
-    [d, other] = [other, d];
-  }
-  return grown / (PROBES / 2) < Math.log(LEAVES);
+  return { ok: mismatch <= target && before(direction), mismatch };
 }

@@ -6,6 +6,8 @@ import type { Volts } from './volts.ts';
 
 /** So many loads are looked at: those with the largest product of size and lost volts where the equations stopped. */
 const LOOKED_AT = 200;
+/** Below this share of the volts the equations hold: what was found was refused for where it lies. */
+const BALANCED = 1e-10;
 
 /** A path of a load, with the share of its volts that the load's nominal current drops in the impedance it sees. */
 interface Asked {
@@ -17,7 +19,8 @@ interface Asked {
 
 /**
  * The refusal of a demand that has no solution, by the load that asks for the most by itself: the one whose voltage is
- * lowest may be only its victim. `mismatch`, a share of the largest voltage, is where the equations stopped closing in.
+ * lowest may be only its victim. `mismatch`, a share of the largest voltage, is where the equations stopped closing in; `null` where
+ * they hold, but no network comes to such voltages.
  * What it says is worked out when it is read: headroom asks for many and reads none.
  */
 export function notServed(
@@ -25,7 +28,7 @@ export function notServed(
   stamped: Stamped,
   flows: readonly Flow[],
   volts: Volts,
-  mismatch: number,
+  mismatch: number | null,
 ): Refusal {
   let known: { at: string; reason: string } | null = null;
   const said = () => {
@@ -43,26 +46,27 @@ export function notServed(
   };
 }
 
-function say(core: Core, stamped: Stamped, flows: readonly Flow[], volts: Volts, mismatch: number) {
+function say(core: Core, stamped: Stamped, flows: readonly Flow[], volts: Volts, mismatch: number | null) {
   const { flow, ofLargest } = mostAsked(core, stamped, flows, volts);
   const load = core.job.loads[flow.sink.load]!;
   const where = load.bus === null ? `run ${load.along}` : `bus ${load.bus}`;
   const why =
     ofLargest > 1
-      ? `even alone it asks for ${times(ofLargest)} the largest power that its conductors can bring it`
-      : `with all that draws beside it, the voltages come no closer to the equations than ${percent(mismatch)}`;
-  return {
-    at: `load ${load.id}`,
-    reason: `the load cannot be served: no solution at ${where}: ${why}; its conductors are too long or too thin for it, or its size is wrong`,
-  };
+      ? `even alone it asks for ${times(ofLargest)} the largest power that its conductors can bring it; they are too long or too thin for it, or its size is wrong`
+      : `with all that draws beside it, ${together(mismatch)}; the conductors on its way are too long or too thin for all of it, or a size is wrong`;
+  return { at: `load ${load.id}`, reason: `the load cannot be served: no solution at ${where}: ${why}` };
 }
 
+const together = (mismatch: number | null): string => {
+  if (mismatch === null) return 'the equations hold only where voltages point away from their source';
+  if (mismatch < BALANCED) return 'the equations hold only where more load would come with more volts';
+  return `the voltages come no closer to the equations than ${percent(mismatch)}`;
+};
 const times = (share: number): string =>
   share < 1.01 ? 'just over' : `${Number(share.toPrecision(3)).toLocaleString('en')} times`;
 const percent = (share: number): string => {
   const value = 100 * share;
-  if (!(value < 100)) return '100 %';
-  return value < 1e-4 ? 'a ten-thousandth of a percent' : `${Number(value.toPrecision(2))} %`;
+  return value < 100 ? `${Number(value.toPrecision(2))} %` : '100 %';
 };
 
 function mostAsked(core: Core, stamped: Stamped, flows: readonly Flow[], volts: Volts): Asked {

@@ -107,9 +107,14 @@ export function solveState(
     return { demand, volts, stamped, iterations: 1 };
   }
   const settled = settle(injection, 2 * n);
-  return settled.ok
-    ? { demand, volts, stamped, iterations: settled.iterations }
-    : notServed(core, stamped, following, volts, settled.mismatch);
+  if (!settled.ok) return notServed(core, stamped, following, volts, settled.mismatch);
+  const { referenceRe, referenceIm } = network.nodes;
+  const pointsAway = ({ sink: { a, b, unitRe, unitIm } }: Flow): boolean =>
+    (referenceRe[a]! - referenceRe[b]! + volts.re[a]! - volts.re[b]!) * unitRe +
+      (referenceIm[a]! - referenceIm[b]! + volts.im[a]! - volts.im[b]!) * unitIm <=
+    0;
+  if (following.some(pointsAway)) return notServed(core, stamped, following, volts, null);
+  return { demand, volts, stamped, iterations: settled.iterations };
 }
 
 /** Brings the volts of an injection to rest, or to where their mismatch stops falling. */
