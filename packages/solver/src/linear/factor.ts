@@ -2,8 +2,8 @@ import type { Symbolic } from './analyse.ts';
 
 /**
  * Values of a complex symmetric matrix in branch form, split into real and imaginary parts.
- * `branch` has one entry per stored edge of the pattern: the admittance that joins the two unknowns, that is
- * minus the off-diagonal entry. `shunt` has one per unknown: its row sum, that is the admittance to ground and
+ * `branch` has one entry per given pair: the admittance that joins the two unknowns, that is minus its part of the
+ * off-diagonal entry. `shunt` has one per unknown: its row sum, that is the admittance to ground and
  * to fixed unknowns. The diagonal follows (`shunt` + all branches) and is never given: a short thick run beside
  * a long thin one would wash the thin one out of the sum.
  */
@@ -42,7 +42,7 @@ const MISSING_SHARE = 1e-18;
  * networks have accretive leading blocks, so complex ones need no pivoting either.
  */
 export function factor(symbolic: Symbolic, values: BranchValues): FactorOutcome {
-  const { n, order, columns, rows, place, pattern } = symbolic;
+  const { n, order, columns, rows, place } = symbolic;
   const size = rows.length;
   const wRe = new Float64Array(size);
   const wIm = new Float64Array(size);
@@ -51,7 +51,7 @@ export function factor(symbolic: Symbolic, values: BranchValues): FactorOutcome 
   const largest = new Float64Array(n);
   const inverseRe = new Float64Array(n);
   const inverseIm = new Float64Array(n);
-  for (let e = 0; e < pattern.edgeCount; e++) {
+  for (let e = 0; e < place.length; e++) {
     wRe[place[e]!]! += values.branchRe[e]!;
     wIm[place[e]!]! += values.branchIm[e]!;
   }

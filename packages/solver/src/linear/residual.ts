@@ -14,15 +14,15 @@ export function residual(
   outRe: Float64Array,
   outIm: Float64Array,
 ): void {
-  const { pattern, n } = factor.symbolic;
+  const { pairA, pairB, n } = factor.symbolic;
   const { branchRe, branchIm, shuntRe, shuntIm } = factor.values;
   for (let i = 0; i < n; i++) {
     outRe[i] = bRe[i]! - (shuntRe[i]! * xRe[i]! - shuntIm[i]! * xIm[i]!);
     outIm[i] = bIm[i]! - (shuntRe[i]! * xIm[i]! + shuntIm[i]! * xRe[i]!);
   }
-  for (let e = 0; e < pattern.edgeCount; e++) {
-    const a = pattern.edgeA[e]!;
-    const b = pattern.edgeB[e]!;
+  for (let e = 0; e < pairA.length; e++) {
+    const a = pairA[e]!;
+    const b = pairB[e]!;
     const dRe = xRe[a]! - xRe[b]!;
     const dIm = xIm[a]! - xIm[b]!;
     const re = branchRe[e]! * dRe - branchIm[e]! * dIm;

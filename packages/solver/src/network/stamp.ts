@@ -3,7 +3,6 @@ import {
   type BranchValues,
   type Factor,
   factor,
-  patternOf,
   type Symbolic,
 } from '../linear/index.ts';
 import type { Element } from './element.ts';
@@ -43,7 +42,7 @@ export function layOut(network: Network, impedanceSinks: readonly Sink[]): Layou
   };
   for (const e of elements) couple(e.nodes);
   for (const sink of impedanceSinks) couple([sink.a, sink.b]);
-  const symbolic = analyse(patternOf(nodeOf.length, a, b));
+  const symbolic = analyse(nodeOf.length, a, b);
   return { network, unknownOf, nodeOf: Int32Array.from(nodeOf), symbolic, impedanceSinks };
 }
 
@@ -67,11 +66,11 @@ class Stamper {
 
   constructor(layout: Layout) {
     const n = layout.nodeOf.length;
-    const edges = layout.symbolic.pattern.edgeCount;
+    const pairs = layout.symbolic.pairA.length;
     this.layout = layout;
     this.values = {
-      branchRe: new Float64Array(edges),
-      branchIm: new Float64Array(edges),
+      branchRe: new Float64Array(pairs),
+      branchIm: new Float64Array(pairs),
       shuntRe: new Float64Array(n),
       shuntIm: new Float64Array(n),
     };
@@ -88,7 +87,7 @@ class Stamper {
     emfRe: number,
     emfIm: number,
   ): void {
-    const { unknownOf, network, symbolic } = this.layout;
+    const { unknownOf, network } = this.layout;
     const { referenceRe, referenceIm } = network.nodes;
     const { branchRe, branchIm, shuntRe, shuntIm } = this.values;
     // Nodes may coincide where runs of no impedance merged them: their entries of u add up.
@@ -121,10 +120,10 @@ class Stamper {
       this.baseRe[at]! -= weight[k]! * currentRe;
       this.baseIm[at]! -= weight[k]! * currentIm;
       for (let j = i + 1; j < free.length; j++) {
-        const edge = symbolic.pattern.slot[this.pair++]!;
+        const at = this.pair++;
         const product = -weight[k]! * weight[free[j]!]!;
-        branchRe[edge]! += product * yRe;
-        branchIm[edge]! += product * yIm;
+        branchRe[at] = product * yRe;
+        branchIm[at] = product * yIm;
       }
     }
   }
