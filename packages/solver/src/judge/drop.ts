@@ -2,6 +2,9 @@ import { LINE_LINE, LINE_NEUTRAL, PAIR_SLOTS } from '../network/index.ts';
 import type { Core } from './core.ts';
 import type { Volts } from './volts.ts';
 
+/** Of two drops that differ by rounding alone, percent, the first counts: a later one must be larger by more than this. */
+export const SAME_PERCENT = 1e-11;
+
 /** Voltage and drop of one pair at one place. */
 export interface PairDrop {
   pair: number;
@@ -57,7 +60,7 @@ export function worstPair(core: Core, volts: Volts, bus: number, pairs: readonly
   let worst: PairDrop | null = null;
   for (const pair of pairs) {
     const drop = dropAt(core, volts, bus, pair);
-    if (drop && (worst === null || drop.dropPercent > worst.dropPercent)) worst = drop;
+    if (drop && (worst === null || drop.dropPercent > worst.dropPercent + SAME_PERCENT)) worst = drop;
   }
   return worst;
 }

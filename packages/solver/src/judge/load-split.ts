@@ -1,11 +1,8 @@
 import { LINE_LINE, PAIR_INDEX } from '../network/index.ts';
 import type { Core } from './core.ts';
-import { type PairDrop, worstPair } from './drop.ts';
+import { type PairDrop, SAME_PERCENT, worstPair } from './drop.ts';
 import { type Begin, type Split, splitDrop } from './split.ts';
 import type { Volts } from './volts.ts';
-
-/** An end takes over from the other only by more than rounding, percent. */
-const SAME_PERCENT = 1e-11;
 
 /** Buses at whose terminals a load is judged: its own, or both ends of the run that it is spread along. */
 export function judgedBuses(core: Core, load: number): number[] {

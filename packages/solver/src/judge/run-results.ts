@@ -3,7 +3,7 @@ import { CONDUCTORS, PAIRS } from '../job/index.ts';
 import type { Element } from '../network/index.ts';
 import { LINE_LINE, LINE_NEUTRAL, SLOT } from '../network/index.ts';
 import type { Core } from './core.ts';
-import { dropAt } from './drop.ts';
+import { dropAt, SAME_PERCENT } from './drop.ts';
 import type { Volts } from './volts.ts';
 
 /** What flows in a run, and what it loses. Amps of all sets together, from its `from` to its `to`. */
@@ -52,7 +52,7 @@ export function runFlow(core: Core, volts: Volts, run: number, elements: readonl
     if (!one || !other || !emf) continue;
     const lost = other.dropVolts - one.dropVolts + openApart(core, near, far, p);
     const percent = (100 * lost) / emf.nominal;
-    if (dropPercent !== null && Math.abs(percent) <= Math.abs(dropPercent)) continue;
+    if (dropPercent !== null && Math.abs(percent) <= Math.abs(dropPercent) + SAME_PERCENT) continue;
     dropVolts = lost;
     dropPercent = percent;
   }

@@ -2,7 +2,7 @@ import type { Job, LoadResult, Phasor } from '../job/index.ts';
 import type { Refusal, Sink } from '../network/index.ts';
 import type { Core } from './core.ts';
 import { type TurnName, turnsOf } from './demand.ts';
-import { pointsAway } from './drop.ts';
+import { pointsAway, SAME_PERCENT } from './drop.ts';
 import { excessOf, largestBefore } from './headroom.ts';
 import { startingIsJudged } from './limits.ts';
 import type { Judge, LoadFigures } from './load-figures.ts';
@@ -33,8 +33,6 @@ export interface Wanted {
 }
 
 const SQRT3 = Math.sqrt(3);
-/** A turn takes over from an earlier one only by more than rounding, percent. */
-const SAME_PERCENT = 1e-11;
 
 /** Every turn of every circuit and every start. Refused: one that cannot be served, naming the circuit. */
 export function turnFigures(

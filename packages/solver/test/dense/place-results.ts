@@ -6,7 +6,7 @@ import { exceeds } from './limits.ts';
 import { phasor } from './load-results.ts';
 import type { ServedLoad } from './sinks.ts';
 import type { Solved } from './solve.ts';
-import { livePairs, readPair, splitOf } from './split.ts';
+import { exceedsPercent, livePairs, readPair, SAME_PERCENT, splitOf } from './split.ts';
 import { nodeOf, type Topology } from './topology.ts';
 
 export const busResult = (
@@ -34,7 +34,7 @@ export const busResult = (
   if (!isPanel) return { id: bus, volts, phasors };
   const worst = pairs
     .map((ends) => readPair(topology, design.voltage, bus, ends))
-    .reduce((top, reading) => (reading.dropPercent.gt(top.dropPercent) ? reading : top));
+    .reduce((top, reading) => (exceedsPercent(reading, top) ? reading : top));
   const { feeder } = splitOf(job, topology, design.voltage, worst, [bus]);
   const verdict: Verdict = limit === null ? 'unjudged' : exceeds(feeder, D(limit)) ? 'over' : 'within';
   return { id: bus, volts, phasors, feederPercent: feeder.toNumber(), verdict };
@@ -70,7 +70,8 @@ export const runResults = (
         return { dropVolts, dropPercent: dropVolts.times(100).div(near.nominalVolts) };
       });
     const top = drops.reduce<(typeof drops)[number] | null>(
-      (most, d) => (most === null || d.dropPercent.abs().gt(most.dropPercent.abs()) ? d : most),
+      (most, d) =>
+        most === null || d.dropPercent.abs().gt(most.dropPercent.abs().plus(SAME_PERCENT)) ? d : most,
       null,
     );
     return {

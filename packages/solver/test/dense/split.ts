@@ -34,8 +34,8 @@ export const pointsAway = (topology: Topology, at: VoltageAt, bus: string, ends:
   return mul(v, conj(nominalBetween(supplyAt(topology, bus)!, ...ends))).re.lte(0);
 };
 
-/** Of two ends or turns whose percents differ by rounding alone, the first counts. */
-const SAME_PERCENT = D('1e-11');
+/** Of two pairs, ends or turns whose percents differ by rounding alone, the first counts. */
+export const SAME_PERCENT = D('1e-11');
 export const exceedsPercent = (a: Reading, b: Reading): boolean =>
   a.dropPercent.gt(b.dropPercent.plus(SAME_PERCENT));
 
