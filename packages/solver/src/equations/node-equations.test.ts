@@ -51,6 +51,7 @@ describe('node equations by inspection', () => {
     expect(at(equations, 'C.N').right[0]).toBeCloseTo(4, 12);
     expect(at(equations, 'C.L1').volts[0]).toBeCloseTo(47.1, 10);
     expect(equations.kclResidual).toBeLessThan(1e-9);
+    expect(equations.condition).toBeGreaterThanOrEqual(1);
   });
 
   it('writes them in names and with numbers', () => {

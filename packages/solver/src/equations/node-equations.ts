@@ -5,6 +5,7 @@ import { type Credits, diversityCredits } from '../judge/credits.ts';
 import { designDemand, scenarioDemand } from '../judge/demand.ts';
 import { solveDemand } from '../judge/operating.ts';
 import type { State } from '../judge/solve-state.ts';
+import { conditionEstimate } from '../linear/index.ts';
 import { nodeNames } from './node-names.ts';
 import { collectBranches, collectCurrents, type Named, type Part } from './parts.ts';
 import { writeOut } from './write-out.ts';
@@ -47,6 +48,8 @@ export interface Equations {
   neighbours: Named[];
   /** The largest `kclAmps` against the largest current of any branch there. */
   kclResidual: number;
+  /** Estimate of the whole matrix's condition number: how much a relative error of its entries may grow in the volts. */
+  condition: number;
 }
 
 export type EquationsOutcome = Equations | { ok: false; at: string; reason: string };
@@ -197,6 +200,7 @@ function writeEquations(
     currents: [...currents.values()],
     neighbours: neighboursOf(equations, voltsOf),
     kclResidual: largest === 0 ? 0 : worst / largest,
+    condition: conditionEstimate(state.stamped.factor),
   };
 }
 

@@ -181,15 +181,15 @@ export class FourWireNetwork {
 
   /** Admittances of the runs in rings, as branches between unknowns and as row sums towards their tops. */
   private fillRings(rings: Rings, factor: BlockFactor): void {
-    const { elimination, pairRun, tied, tiedRun } = rings;
+    const { elimination, coupled, tied } = rings;
     factor.shareRe.fill(0);
     factor.shareIm.fill(0);
     factor.sumRe.fill(0);
     factor.sumIm.fill(0);
-    for (let e = 0; e < pairRun.length; e++)
-      this.addAdmittance(pairRun[e]!, factor.shareRe, factor.shareIm, 16 * elimination.place[e]!);
-    for (let t = 0; t < tied.length; t++)
-      this.addAdmittance(tiedRun[t]!, factor.sumRe, factor.sumIm, 16 * elimination.position[tied[t]!]!);
+    for (let e = 0; e < coupled.run.length; e++)
+      this.addAdmittance(coupled.run[e]!, factor.shareRe, factor.shareIm, 16 * elimination.place[e]!);
+    for (let t = 0; t < tied.run.length; t++)
+      this.addAdmittance(tied.run[t]!, factor.sumRe, factor.sumIm, 16 * elimination.position[tied.a[t]!]!);
   }
 
   private addAdmittance(run: number, toRe: Values, toIm: Values, to: number): void {

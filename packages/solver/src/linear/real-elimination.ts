@@ -5,31 +5,18 @@ export interface RealFactor {
   elimination: Elimination;
   /** Per column: 1 / pivot. */
   inverse: Float64Array;
-  /** Per entry of `elimination.rows`: branch left at elimination ÷ pivot, that is −L. */
+  /** Per entry of `elimination.rows`: branches on entry to `factorReal`, then branch ÷ pivot, that is −L. */
   share: Float64Array;
 }
 
 /**
- * Factors positions from … end − 1, which nothing outside them couples to. `branch` is by pair, `shunt` by position
- * (siemens; overwritten). Nothing is subtracted, so that every pivot is good to a few units in the last place (Grassmann, Taksar
- * and Heyman 1985). Returns −1, or the unknown whose pivot is not there.
+ * Factors positions from … end − 1, which nothing outside them couples to: branches are in `factor.share`, `shunt` is
+ * by position (siemens; overwritten). Nothing is subtracted, so that every pivot is good to a few units in the last
+ * place (Grassmann, Taksar and Heyman 1985). Returns −1, or the unknown whose pivot is not there.
  */
-export function factorReal(
-  factor: RealFactor,
-  branch: Float64Array,
-  shunt: Float64Array,
-  from: number,
-  end: number,
-): number {
-  const { order, columns, rows, place } = factor.elimination;
+export function factorReal(factor: RealFactor, shunt: Float64Array, from: number, end: number): number {
+  const { order, columns, rows } = factor.elimination;
   const { inverse, share: w } = factor;
-  const firstEntry = columns[from]!;
-  const lastEntry = columns[end]!;
-  w.fill(0, firstEntry, lastEntry);
-  for (let e = 0; e < branch.length; e++) {
-    const at = place[e]!;
-    if (at >= firstEntry && at < lastEntry) w[at]! += branch[e]!;
-  }
   for (let k = from; k < end; k++) {
     const first = columns[k]!;
     const last = columns[k + 1]!;

@@ -20,6 +20,7 @@ export class RealNetwork {
   readonly current: Float64Array;
   /** After `solve`: volts of each unknown of the rings against its top, by position. */
   readonly ringVolts: Float64Array;
+  private readonly shunt: Float64Array;
 
   /** Buses 0 … buses − 1 and the source `buses`; run e joins from[e] and to[e]. */
   constructor(buses: number, from: Int32Array, to: Int32Array) {
@@ -35,27 +36,33 @@ export class RealNetwork {
         }
       : null;
     this.ringVolts = new Float64Array(inside?.n ?? 0);
+    this.shunt = new Float64Array(inside?.n ?? 0);
   }
 
   /** Takes ohms by run, all above zero. The array may be kept: change it, and call this again. */
   setOhms(ohms: Float64Array): void {
     const { run } = this.forest;
     this.ohms = run ? Float64Array.from(run, (e) => ohms[e]!) : ohms;
-    if (this.rings) this.factorRings(this.rings, ohms, 0, this.rings.elimination.n);
+    if (this.rings) this.factorPieces(this.rings, ohms, 0, this.rings.firstStep.length);
   }
 
-  /** Factors the pieces at positions from … end − 1 anew, for ohms by run. */
-  factorRings(
-    { elimination, pairRun, tied, tiedRun }: Rings,
+  /** Factors pieces from … end − 1 anew, for ohms by run. */
+  factorPieces(
+    { elimination, pieces, coupled, tied }: Rings,
     ohms: Float64Array,
     from: number,
     end: number,
   ): void {
-    const branch = new Float64Array(pairRun.length);
-    for (let p = 0; p < branch.length; p++) branch[p] = 1 / ohms[pairRun[p]!]!;
-    const shunt = new Float64Array(elimination.n);
-    for (let t = 0; t < tied.length; t++) shunt[elimination.position[tied[t]!]!]! += 1 / ohms[tiedRun[t]!]!;
-    factorReal(this.factor!, branch, shunt, from, end);
+    const first = pieces[from]!;
+    const last = pieces[end]!;
+    const { share } = this.factor!;
+    share.fill(0, elimination.columns[first]!, elimination.columns[last]!);
+    for (let p = coupled.start[from]!; p < coupled.start[end]!; p++)
+      share[elimination.place[p]!]! += 1 / ohms[coupled.run[p]!]!;
+    const shunt = this.shunt.fill(0, first, last);
+    for (let t = tied.start[from]!; t < tied.start[end]!; t++)
+      shunt[elimination.position[tied.a[t]!]!]! += 1 / ohms[tied.run[t]!]!;
+    factorReal(this.factor!, shunt, first, last);
   }
 
   /**

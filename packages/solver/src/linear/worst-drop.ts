@@ -23,6 +23,7 @@ export class WorstDrop {
   private readonly ringOf: Int32Array | null;
   private readonly pieceOf: Int32Array;
   private readonly ringRuns: Map<number, RingRun>;
+  private readonly unitVolts: Float64Array;
 
   /**
    * `network` as solved for `ohms` by run and `amps` by bus, which gave `volts`; only drops at `judged` buses count.
@@ -57,6 +58,7 @@ export class WorstDrop {
     this.stepOfRun = run && inverse(run, ohms.length);
     this.ringOf = rings && inverse(rings.step, count + 1);
     this.pieceOf = rings ? piecesByPosition(rings) : new Int32Array(0);
+    this.unitVolts = new Float64Array(network.ringVolts.length);
     this.ringRuns = rings ? ringRunsOf(rings, this.pieceOf) : new Map();
   }
 
@@ -77,8 +79,7 @@ export class WorstDrop {
     this.ohms[run] = ohms;
     const ring = this.ringRuns.get(run);
     if (ring) {
-      const { pieces } = network.rings!;
-      network.factorRings(network.rings!, this.ohms, pieces[ring.piece]!, pieces[ring.piece + 1]!);
+      network.factorPieces(network.rings!, this.ohms, ring.piece, ring.piece + 1);
       this.solvePiece(network.rings!, ring.piece);
       return;
     }
@@ -144,7 +145,7 @@ export class WorstDrop {
     const { rings, ringVolts, factor } = this.network;
     const from = rings!.pieces[piece]!;
     const end = rings!.pieces[piece + 1]!;
-    const z = new Float64Array(ringVolts.length);
+    const z = this.unitVolts.fill(0, from, end);
     z[a] = 1;
     if (b >= 0) z[b] = -1;
     solveReal(factor!, z, from, end);
@@ -229,14 +230,11 @@ interface RingRun {
 function ringRunsOf(rings: Rings, pieceOf: Int32Array): Map<number, RingRun> {
   const { position } = rings.elimination;
   const runs = new Map<number, RingRun>();
-  for (const [e, run] of rings.pairRun.entries()) {
-    const a = position[rings.pairA[e]!]!;
-    runs.set(run, { piece: pieceOf[a]!, a, b: position[rings.pairB[e]!]! });
-  }
-  for (const [t, run] of rings.tiedRun.entries()) {
-    const a = position[rings.tied[t]!]!;
-    runs.set(run, { piece: pieceOf[a]!, a, b: -1 });
-  }
+  for (const { run, a, b } of [rings.coupled, rings.tied])
+    for (let i = 0; i < run.length; i++) {
+      const from = position[a[i]!]!;
+      runs.set(run[i]!, { piece: pieceOf[from]!, a: from, b: b[i]! < 0 ? -1 : position[b[i]!]! });
+    }
   return runs;
 }
 

@@ -94,7 +94,8 @@ export function EquationsPlace({
           <p className="px-4 pt-3 text-grid">
             State written out: {STATE_WORDS[answer.equations.scenario]}. Kirchhoff’s current law closes to{' '}
             <b>{answer.equations.kclResidual === 0 ? '0' : answer.equations.kclResidual.toExponential(1)}</b>{' '}
-            of the largest current.
+            of the largest current; the whole matrix has a condition number of about{' '}
+            <b>{answer.equations.condition.toExponential(0)}</b>.
           </p>
           {form === 'matrix' ? (
             <EquationMatrix equations={answer.equations} />
