@@ -16,21 +16,26 @@ const MOST_AMPS = 1e7;
 const NARROW = 1e-12;
 const ROUNDS = 200;
 
+/** A step beyond what the last two values point to, and the longest step. */
+const BEYOND = 1.05;
+const LONGEST = 256;
+
 /**
- * The amperes at which `excess` first reaches zero: doubling, then false position with halved ends (the Illinois
- * rule, Dowell and Jarratt 1971) and a bisection now and then. 0 where it is above already, `null` where it never
- * gets there. `excess` gives infinity where the network cannot be solved.
+ * The amperes at which `excess` reaches zero, from `atZero`, its value at 0: steps that follow its slope until it is
+ * passed, then false position with scaled ends (Anderson and Björck 1973) and a bisection now and then. 0 where it is
+ * above already, `null` where it never gets there. `excess` gives infinity where the network cannot be solved.
  */
-export function largestBefore(excess: (amps: number) => number): number | null {
+export function largestBefore(atZero: number, excess: (amps: number) => number): number | null {
+  if (atZero >= 0) return 0;
   let low = 0;
-  let atLow = excess(0);
-  if (atLow >= 0) return 0;
+  let atLow = atZero;
   let high = 1;
   let atHigh = excess(high);
   while (atHigh < 0) {
+    const pointed = low + (BEYOND * (high - low) * -atLow) / (atHigh - atLow);
     low = high;
     atLow = atHigh;
-    high *= 2;
+    high = pointed > 2 * low ? Math.min(pointed, LONGEST * low) : 2 * low;
     if (high > MOST_AMPS) return null;
     atHigh = excess(high);
   }
@@ -42,16 +47,22 @@ export function largestBefore(excess: (amps: number) => number): number | null {
     const value = excess(middle);
     if (value === 0) return middle;
     if (value > 0) {
+      if (side > 0) atLow *= scaled(value, atHigh);
       high = middle;
       atHigh = value;
-      if (side > 0) atLow /= 2;
       side = 1;
     } else {
+      if (side < 0 && Number.isFinite(atHigh)) atHigh *= scaled(value, atLow);
       low = middle;
       atLow = value;
-      if (side < 0 && Number.isFinite(atHigh)) atHigh /= 2;
       side = -1;
     }
   }
   return low;
+}
+
+/** How much the end that stays is scaled when the other one moves a second time, from `was` to `value`. */
+function scaled(value: number, was: number): number {
+  const share = 1 - value / was;
+  return share > 0 ? share : 0.5;
 }

@@ -28,19 +28,29 @@ export class LocalTurns {
   readonly solver: PathSolver;
   private readonly core: Core;
   private readonly state: State;
-  private watched: Int32Array = new Int32Array(0);
+  private watched: number[] = [];
+  /** Node → the call of `watch` that it was last seen in. */
+  private readonly watchedIn: Int32Array;
+  private watching = 0;
   private readonly current = new Float64Array(2);
 
   constructor(core: Core, state: State) {
     this.core = core;
     this.state = state;
     this.solver = pathSolver(state.stamped.factor);
+    this.watchedIn = new Int32Array(core.network.nodes.count);
   }
 
   /** Nodes whose voltages are wanted; the changes' own nodes must be among them. */
   watch(nodes: Iterable<number>): void {
     const { unknownOf } = this.state.stamped.layout;
-    this.watched = Int32Array.from(new Set(nodes)).filter((node) => unknownOf[node]! >= 0);
+    this.watching++;
+    this.watched = [];
+    for (const node of nodes) {
+      if (unknownOf[node]! < 0 || this.watchedIn[node] === this.watching) continue;
+      this.watchedIn[node] = this.watching;
+      this.watched.push(node);
+    }
     this.solver.reach(this.watched.map((node) => unknownOf[node]!));
   }
 
@@ -118,7 +128,7 @@ export class LocalTurns {
       }
       return column;
     });
-    const placeOf = new Map([...this.watched].map((node, i) => [node, i]));
+    const placeOf = new Map(this.watched.map((node, i) => [node, i]));
     const across = (of: Float64Array, { a, b }: Sink): number => {
       const i = placeOf.get(a);
       const j = placeOf.get(b);

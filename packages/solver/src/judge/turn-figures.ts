@@ -122,17 +122,18 @@ function headroom(
   on: readonly { solved: SolvedTurn; figures: LoadFigures }[],
 ): number | null {
   const base = worstOf(on, ({ figures }) => figures).figures;
-  if (excessOf(base.judged) === null) return null;
+  const atZero = excessOf(base.judged);
+  if (atZero === null) return null;
   if (verdictOf(base.judged) === 'over') return 0;
   const perPath = core.job.loads[load]!.terminals === 'three-phase' ? 1 / SQRT3 : 1;
   const started = base.judged.find((j) => j.name === 'starting')?.value ?? null;
   const list = on.map(({ solved, figures }) => ({ solved, sinks: sinksAt(core, load, figures.split.bus) }));
   const nodes = judge.nodesOfLoad(load);
-  return largestBefore((amps) => {
+  return largestBefore(atZero, (amps) => {
     let worst: LoadFigures | null = null;
     let away = false;
     for (const { solved, sinks } of list) {
-      const volts = amps === 0 ? solved.volts : solved.with(load, sinks, amps * perPath, nodes);
+      const volts = solved.with(load, sinks, amps * perPath, nodes);
       if (!volts) return Number.POSITIVE_INFINITY;
       const figures = judge.figures(volts, load, started);
       if (worst && !(figures.split.dropPercent > worst.split.dropPercent + SAME_PERCENT)) continue;
