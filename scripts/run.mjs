@@ -8,6 +8,10 @@ const commands = {
   check: { file: './gate.ts', about: 'the quick checks: format, lint, types, boundaries, audits' },
   bench: { file: './bench.ts', about: 'the benchmarks, or those whose name holds the given word' },
   solve: { file: '../packages/solver/src/solve-main.ts', about: 'solve one job file' },
+  'check:peers': {
+    file: '../packages/solver/test/peers/check-main.ts',
+    about: 'node volts of random jobs beside ngspice and SciPy',
+  },
   'db:generate': { file: './db-generate.ts', about: 'write a migration from the schema' },
   'new:feature': { file: './new-feature.ts', about: 'the files of a new feature, in every layer' },
 };
