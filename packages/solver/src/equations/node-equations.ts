@@ -1,5 +1,6 @@
 import type { Conductor, Job, Phasor, Scenario } from '../job/index.ts';
 import { CONDUCTORS } from '../job/index.ts';
+import { magnitude } from '../job/systems.ts';
 import { buildCore, type Core } from '../judge/core.ts';
 import { type Credits, diversityCredits } from '../judge/credits.ts';
 import { designDemand, scenarioDemand } from '../judge/demand.ts';
@@ -145,10 +146,10 @@ function writeEquations(
       }
       out[0] += part.leaves[0];
       out[1] += part.leaves[1];
-      largest = Math.max(largest, Math.hypot(...part.leaves));
+      largest = Math.max(largest, magnitude(part.leaves));
     }
     const given = nodes.fixed[node] === 1;
-    const kclAmps = given ? 0 : Math.hypot(...out);
+    const kclAmps = given ? 0 : magnitude(out);
     worst = Math.max(worst, kclAmps);
     const slot = nodes.slotOf[node]!;
     const own = sums.get(node) ?? [0, 0];

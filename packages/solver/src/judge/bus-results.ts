@@ -1,4 +1,5 @@
 import { type BusResult, CONDUCTORS, type Job, PAIRS, type Verdict } from '../job/index.ts';
+import { magnitude } from '../job/systems.ts';
 import { SLOT } from '../network/index.ts';
 import type { Core } from './core.ts';
 import { dropAt, worstPair } from './drop.ts';
@@ -37,7 +38,7 @@ export function busResults(core: Core, volts: Volts, design: Volts): BusResult[]
       const drop = dropAt(core, volts, bus, pair);
       if (drop) magnitudes[PAIRS[pair]!] = drop.volts;
     }
-    if (phasors.N) magnitudes.N = Math.sqrt(phasors.N[0] ** 2 + phasors.N[1] ** 2);
+    if (phasors.N) magnitudes.N = magnitude(phasors.N);
     const result: BusResult = { id, volts: magnitudes, phasors };
     return isPanel ? { ...result, ...panelVerdict(core, design, bus) } : result;
   });

@@ -1,3 +1,4 @@
+import { magnitude } from '../job/systems.ts';
 import { addScaled, dot, size } from './vectors.ts';
 
 /** Directions of one solve, and the share of its right side that may be left. */
@@ -44,7 +45,7 @@ function krylov(product: Product, b: Float64Array, left: number): Krylov {
       column[j] = cos[j]! * upper + sin[j]! * lower;
       column[j + 1] = cos[j]! * lower - sin[j]! * upper;
     }
-    const pivot = Math.hypot(column[k]!, below);
+    const pivot = magnitude([column[k]!, below]);
     if (!(pivot > 0)) break;
     cos.push(column[k]! / pivot);
     sin.push(below / pivot);

@@ -1,3 +1,4 @@
+import { magnitude } from '../job/systems.ts';
 import { pathSolver } from '../linear/index.ts';
 import type { Refusal, Stamped } from '../network/index.ts';
 import type { Core } from './core.ts';
@@ -94,13 +95,13 @@ function mostAsked(core: Core, stamped: Stamped, flows: readonly Flow[], volts: 
       const [bRe, bIm] = at(b);
       const re = (aRe - bRe) * unitRe + (aIm - bIm) * unitIm;
       const im = (aIm - bIm) * unitRe - (aRe - bRe) * unitIm;
-      const size = Math.hypot(re, im);
+      const size = magnitude([re, im]);
       const drop = (Math.abs(flow.drawn.amps) * size) / nominal;
       if (drop <= most.drop) continue;
       const along = Math.sign(flow.drawn.amps) * (re * flow.drawn.cos + im * flow.drawn.sin);
-      const open = Math.hypot(referenceRe[a]! - referenceRe[b]!, referenceIm[a]! - referenceIm[b]!);
+      const open = magnitude([referenceRe[a]! - referenceRe[b]!, referenceIm[a]! - referenceIm[b]!]);
       const power = Math.abs(flow.drawn.amps) * nominal;
-      const ofLargest = flow.rule === 'power' ? (2 * power * (size + along)) / open ** 2 : 0;
+      const ofLargest = flow.rule === 'power' ? (2 * power * (size + along)) / (open * open) : 0;
       most = { flow, drop, ofLargest };
     }
   }
@@ -112,7 +113,7 @@ function likeliest(flows: readonly Flow[], volts: Volts): Flow[][] {
   const byLoad = new Map<number, { paths: Flow[]; of: number }>();
   for (const flow of flows) {
     const { load, a, b, nominal } = flow.sink;
-    const lost = Math.hypot(volts.re[a]! - volts.re[b]!, volts.im[a]! - volts.im[b]!);
+    const lost = magnitude([volts.re[a]! - volts.re[b]!, volts.im[a]! - volts.im[b]!]);
     const of = (Math.abs(flow.drawn.amps) * lost) / nominal;
     const known = byLoad.get(load);
     if (!known) byLoad.set(load, { paths: [flow], of });

@@ -131,8 +131,7 @@ function settle(
   let moved = fixedPoint.mismatch(x, f);
   while (!(moved <= SETTLED)) {
     const closing = moved < before;
-    const toCome = Math.log(SETTLED / moved) / Math.log(moved / before);
-    if (injection.solves() >= RECKONED && !(closing && toCome <= MANY)) {
+    if (injection.solves() >= RECKONED && !(closing && settlesWithin(MANY, moved, moved / before))) {
       if (!closing) x.fill(0);
       const { ok, mismatch } = newton(fixedPoint, x, SETTLED);
       injection.read(x);
@@ -158,6 +157,13 @@ function settle(
   }
   injection.read(best);
   return { ok: true, iterations };
+}
+
+/** Whether a mismatch that each round multiplies by `share` comes to rest in some rounds. */
+function settlesWithin(rounds: number, mismatch: number, share: number): boolean {
+  let left = mismatch;
+  for (let k = 0; k < rounds && left > SETTLED; k++) left *= share;
+  return left <= SETTLED;
 }
 
 /** Stamps for a demand and solves it. */

@@ -1,10 +1,4 @@
-import {
-  analyse,
-  type BranchValues,
-  type Factor,
-  factor,
-  type Symbolic,
-} from '../linear/index.ts';
+import { analyse, type BranchValues, type Factor, factor, type Symbolic } from '../linear/index.ts';
 import type { Element } from './element.ts';
 import type { Network } from './network.ts';
 import { type Refusal, refusal } from './refusal.ts';

@@ -1,3 +1,4 @@
+import { magnitude } from '../job/systems.ts';
 import type { Core } from '../judge/core.ts';
 import type { Demand } from '../judge/demand.ts';
 import { admittanceIn } from '../judge/solve-state.ts';
@@ -36,13 +37,13 @@ export function floatingFrom(core: Core, node: number, demand: Demand): Floating
     const unknown = layout.unknownOf[k]!;
     return unknown < 0 ? [0, 0] : [re[unknown]!, im[unknown]!];
   };
-  if (Math.hypot(...share(node)) < 0.5) return null;
+  if (magnitude(share(node)) < 0.5) return null;
   return {
     core: { ...core, network: { ...network, elements } },
-    at: (k) => Math.hypot(...share(k)) > FOLLOWS,
+    at: (k) => magnitude(share(k)) > FOLLOWS,
     between: (a, b) => {
       const [one, other] = [share(a), share(b)];
-      return Math.hypot(one[0] - other[0], one[1] - other[1]) > FOLLOWS;
+      return magnitude([one[0] - other[0], one[1] - other[1]]) > FOLLOWS;
     },
   };
 }

@@ -1,4 +1,5 @@
 import { type Job, NEUTRAL_CAUTION, type Pair, type Terminals } from '../job/index.ts';
+import { magnitude } from '../job/systems.ts';
 import type { Core } from '../judge/core.ts';
 import { designDemand } from '../judge/demand.ts';
 import { solveDemand } from '../judge/operating.ts';
@@ -143,10 +144,10 @@ function voltsAcross({ core, volts }: Solved, { a, b }: Sink): number {
   const { referenceRe, referenceIm } = core.network.nodes;
   const re = referenceRe[a]! - referenceRe[b]! + (volts.re[a]! - volts.re[b]!);
   const im = referenceIm[a]! - referenceIm[b]! + (volts.im[a]! - volts.im[b]!);
-  return Math.hypot(re, im);
+  return magnitude([re, im]);
 }
 
 function voltsAt({ network }: Core, volts: Volts, node: number): number {
   const { referenceRe, referenceIm } = network.nodes;
-  return Math.hypot(referenceRe[node]! + volts.re[node]!, referenceIm[node]! + volts.im[node]!);
+  return magnitude([referenceRe[node]! + volts.re[node]!, referenceIm[node]! + volts.im[node]!]);
 }

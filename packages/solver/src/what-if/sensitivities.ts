@@ -1,4 +1,5 @@
 import { type Job, type LoadResult, PAIRS, type Pair, type Scenario } from '../job/index.ts';
+import { magnitude } from '../job/systems.ts';
 import { buildCore, type Core } from '../judge/core.ts';
 import { diversityCredits } from '../judge/credits.ts';
 import { designDemand } from '../judge/demand.ts';
@@ -109,7 +110,7 @@ function gaugeOf(core: Core, volts: Volts, load: number): { pair: number; gauge:
   const [a, b] = PAIR_SLOTS[pair]!.map((slot) => nodes.at[4 * bus + slot]!) as [number, number];
   const re = nodes.referenceRe[a]! - nodes.referenceRe[b]! + (volts.re[a]! - volts.re[b]!);
   const im = nodes.referenceIm[a]! - nodes.referenceIm[b]! + (volts.im[a]! - volts.im[b]!);
-  const scale = -100 / (Math.hypot(re, im) * buses.system[bus]!.pairs[pair]!.nominal);
+  const scale = -100 / (magnitude([re, im]) * buses.system[bus]!.pairs[pair]!.nominal);
   return { pair, gauge: { a, b, g: [scale * re, -scale * im] } };
 }
 
