@@ -16,9 +16,12 @@ const MOST_AMPS = 1e7;
 const NARROW = 1e-12;
 const ROUNDS = 200;
 
-/** A step beyond what the last two values point to, and the longest step. */
+/**
+ * A step goes a little beyond what the last two values point to, and at most this many times as far as the last: past
+ * no volts at all they grow again, and a longer step could leap over everything between.
+ */
 const BEYOND = 1.05;
-const LONGEST = 256;
+const LONGEST = 4;
 
 /**
  * The amperes at which `excess` reaches zero, from `atZero`, its value at 0: steps that follow its slope until it is
