@@ -42,20 +42,30 @@ export function judgeOf(core: Core): Judge {
     const tree = core.treeOf(bus);
     return tree && tree[bus] !== undefined ? metres(tree, bus) : 0;
   };
+  // Node → the list that it was last put in: buses that a run without impedance joins share nodes, each counts once.
+  const listedIn = new Int32Array(nodes.count);
+  let lists = 0;
   const nodesAt = (at: readonly number[], from: readonly Begin[]): number[] => {
-    const wanted = new Set(at);
-    for (const begin of from) {
-      wanted.add(begin.bus).add(begin.sourceBus);
-      for (const step of begin.steps) wanted.add(step.near).add(step.far);
-    }
-    // Buses that a run without impedance joins share nodes: each counts once.
-    const list = new Set<number>();
-    for (const bus of wanted)
+    const list: number[] = [];
+    lists++;
+    const put = (bus: number) => {
       for (let slot = 0; slot < 4; slot++) {
         const node = nodes.at[4 * bus + slot]!;
-        if (node >= 0) list.add(node);
+        if (node < 0 || listedIn[node] === lists) continue;
+        listedIn[node] = lists;
+        list.push(node);
       }
-    return [...list];
+    };
+    for (const bus of at) put(bus);
+    for (const begin of from) {
+      put(begin.bus);
+      put(begin.sourceBus);
+      for (const step of begin.steps) {
+        put(step.near);
+        put(step.far);
+      }
+    }
+    return list;
   };
   const limitsKnown: (LoadLimits | undefined)[] = [];
   return {
