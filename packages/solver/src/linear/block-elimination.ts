@@ -61,7 +61,8 @@ export function factorBlocks(factor: BlockFactor, from: number, end: number): nu
       shareIm.fill(0, 16 * p, 16 * p + 16);
       addProduct(false, inverseRe, inverseIm, at, wRe, wIm, 0, shareRe, shareIm, 16 * p);
       const r = rows[p]!;
-      addProduct(true, shareRe, shareIm, 16 * p, sumRe, sumIm, at, sumRe, sumIm, 16 * r);
+      if (!isZero(sumRe, sumIm, at))
+        addProduct(true, shareRe, shareIm, 16 * p, sumRe, sumIm, at, sumRe, sumIm, 16 * r);
       for (let q = p + 1, entry = columns[r]!; q < last; q++) {
         while (rows[entry] !== rows[q]) entry++;
         addProduct(true, shareRe, shareIm, 16 * p, shareRe, shareIm, 16 * q, shareRe, shareIm, 16 * entry);
@@ -69,6 +70,12 @@ export function factorBlocks(factor: BlockFactor, from: number, end: number): nu
     }
   }
   return -1;
+}
+
+/** Most steps of a piece are tied to nothing but each other. */
+function isZero(re: Values, im: Values, at: number): boolean {
+  for (let i = at; i < at + 16; i++) if (re[i] !== 0 || im[i] !== 0) return false;
+  return true;
 }
 
 /** Solves positions from … end − 1 in place; x has four values a position. */

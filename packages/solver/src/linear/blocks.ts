@@ -73,18 +73,45 @@ export function addProduct(
 ): void {
   const down = transpose ? 4 : 1;
   const across = transpose ? 1 : 4;
-  for (let i = 0; i < 4; i++)
-    for (let k = 0; k < 4; k++) {
+  for (let i = 0; i < 4; i++) {
+    const at = c + 4 * i;
+    let r0 = cRe[at]!;
+    let r1 = cRe[at + 1]!;
+    let r2 = cRe[at + 2]!;
+    let r3 = cRe[at + 3]!;
+    let i0 = cIm[at]!;
+    let i1 = cIm[at + 1]!;
+    let i2 = cIm[at + 2]!;
+    let i3 = cIm[at + 3]!;
+    for (let k = 0, from = b; k < 4; k++, from += 4) {
       const re = aRe[a + across * i + down * k]!;
       const im = aIm[a + across * i + down * k]!;
-      if (re === 0 && im === 0) continue;
-      for (let j = 0; j < 4; j++) {
-        const u = bRe[b + 4 * k + j]!;
-        const v = bIm[b + 4 * k + j]!;
-        cRe[c + 4 * i + j]! += re * u - im * v;
-        cIm[c + 4 * i + j]! += re * v + im * u;
-      }
+      const u0 = bRe[from]!;
+      const u1 = bRe[from + 1]!;
+      const u2 = bRe[from + 2]!;
+      const u3 = bRe[from + 3]!;
+      const v0 = bIm[from]!;
+      const v1 = bIm[from + 1]!;
+      const v2 = bIm[from + 2]!;
+      const v3 = bIm[from + 3]!;
+      r0 += re * u0 - im * v0;
+      i0 += re * v0 + im * u0;
+      r1 += re * u1 - im * v1;
+      i1 += re * v1 + im * u1;
+      r2 += re * u2 - im * v2;
+      i2 += re * v2 + im * u2;
+      r3 += re * u3 - im * v3;
+      i3 += re * v3 + im * u3;
     }
+    cRe[at] = r0;
+    cRe[at + 1] = r1;
+    cRe[at + 2] = r2;
+    cRe[at + 3] = r3;
+    cIm[at] = i0;
+    cIm[at + 1] = i1;
+    cIm[at + 2] = i2;
+    cIm[at + 3] = i3;
+  }
 }
 
 /** y += A·x, or Aᵀ·x, for a full block; x and y may not overlap. */
