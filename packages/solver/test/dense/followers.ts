@@ -4,7 +4,7 @@ import type { Sink } from './equations.ts';
 import { fixedPoint } from './fixed-point.ts';
 import type { Element } from './network.ts';
 import { follows, type Piece, pieceCurrent, type ServedLoad } from './sinks.ts';
-import type { State, VoltageAt } from './solve.ts';
+import type { State, VoltageAt } from './state.ts';
 
 /** A current that follows the voltage `v` between its ends; `amps` is what it was the round before. */
 export interface Follower {

@@ -7,7 +7,7 @@ import { type Judgement, judge } from './limits.ts';
 import { EARTH } from './network.ts';
 import type { Scenarios } from './scenario.ts';
 import type { ServedLoad } from './sinks.ts';
-import { NotServed, type Solved, type VoltageAt } from './solve.ts';
+import { NotServed, type Solved } from './solve.ts';
 import {
   belowNominal,
   circuitOf,
@@ -19,6 +19,7 @@ import {
   type Split,
   splitOf,
 } from './split.ts';
+import type { VoltageAt } from './state.ts';
 import { nodeOf, supplyAt, type Topology } from './topology.ts';
 
 interface Figures {

@@ -6,7 +6,8 @@ import type { Sink } from './equations.ts';
 import { lagOf } from './load-size.ts';
 import { EARTH } from './network.ts';
 import type { Drawn, ServedLoad } from './sinks.ts';
-import { NotServed, type Solved, type State, stateSolver } from './solve.ts';
+import { NotServed, type Solved, stateSolver } from './solve.ts';
+import type { State } from './state.ts';
 import { flood, nodeOf, supplyAt, type Topology } from './topology.ts';
 
 export interface Turn {

@@ -4,21 +4,14 @@ import type { Decimal } from './decimal.ts';
 import { type Equations, equationsOf, type Sink, unknownsOf } from './equations.ts';
 import { currentsOf, type Settled, settle } from './followers.ts';
 import { type Element, MINUS, type Network, networkOf, PLUS } from './network.ts';
-import { type Drawn, type Piece, pieceAdmittance, pieceCurrent, type ServedLoad } from './sinks.ts';
+import { type Piece, pieceAdmittance, pieceCurrent, type ServedLoad } from './sinks.ts';
+import type { State, VoltageAt } from './state.ts';
 import type { Topology } from './topology.ts';
-
-export interface State {
-  drawn: Map<string, Drawn>;
-  /** Credits of diversity, whatever the voltages. */
-  credits: Sink[];
-}
 
 export class NotServed extends Error {}
 
 /** Above this nothing conducts as its table says. */
 const HOTTEST_C = 2000;
-
-export type VoltageAt = (node: string) => Complex;
 
 export interface Solved {
   /** With the ohms of the temperatures that the state brings about. */

@@ -4,7 +4,7 @@ import { abs, conj, mul, sub } from './complex.ts';
 import { metresOf } from './conductors.ts';
 import { D, type Decimal, NIL, sumOf } from './decimal.ts';
 import { type Ends, sidesOf } from './sinks.ts';
-import type { VoltageAt } from './solve.ts';
+import type { VoltageAt } from './state.ts';
 import { nodeOf, nominalBetween, supplyAt, type Topology } from './topology.ts';
 
 export interface Reading {

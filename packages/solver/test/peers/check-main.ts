@@ -35,7 +35,7 @@ function byNgspice(circuit: Circuit): (Pair | undefined)[] {
 }
 
 function byScipy(circuits: readonly Circuit[]): Pair[][] {
-  const script = fileURLToPath(new URL('./solve_scipy.py', import.meta.url));
+  const script = fileURLToPath(new URL('./solve-scipy.py', import.meta.url));
   const done = spawnSync('python3', [script], {
     input: JSON.stringify(circuits),
     encoding: 'utf8',
