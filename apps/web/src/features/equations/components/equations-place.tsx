@@ -4,6 +4,7 @@ import { type ReactNode, useMemo, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { useReplica } from '../../../job/open-job.tsx';
 import { useAnswer, useResult } from '../../../job/use-result.ts';
+import { formatNumber } from '../../../lib/format.ts';
 import { usePageTitle } from '../../../lib/use-page-title.ts';
 import { EmptyState } from '../../../ui/empty-state.tsx';
 import { Field } from '../../../ui/field.tsx';
@@ -95,7 +96,7 @@ export function EquationsPlace({
             State written out: {STATE_WORDS[answer.equations.scenario]}. Kirchhoff’s current law closes to{' '}
             <b>{answer.equations.kclResidual === 0 ? '0' : answer.equations.kclResidual.toExponential(1)}</b>{' '}
             of the largest current; the whole matrix has a condition number of about{' '}
-            <b>{answer.equations.condition.toExponential(0)}</b>.
+            <b>{formatNumber(Number(answer.equations.condition.toPrecision(1)))}</b>.
           </p>
           {form === 'matrix' ? (
             <EquationMatrix equations={answer.equations} />
